@@ -1,0 +1,124 @@
+import { elevate, halve } from './bernstein.ts';
+import { type CstShape } from './cst-schema.ts';
+import { type Naca4Shape, halfThickness, meanLine, naca4Outline } from './naca4.ts';
+import { type Point } from '../point.ts';
+
+/** Halvings after which a piece is given up as touching: 2⁻³² of the chord. */
+const DEEPEST = 32;
+
+/**
+ * A station (0 … 1) at which the surfaces of a CST shape cross or touch between nose and trailing edge, or null when the thickness is
+ * positive all along.
+ *
+ * The thickness is C(x) D(x) + x·gap, D the difference of both shape functions in Bernstein form. A Bernstein polynomial lies between
+ * its smallest and largest weight (convex hull property), so a piece whose bound is positive is proven free; a piece that is negative
+ * at an end is proven crossed; any other is halved. No crossing can slip between samples.
+ */
+export function cstCrossing(shape: CstShape): number | null {
+  let upper = shape.upper;
+  let lower = shape.lower;
+  while (upper.length < lower.length) upper = elevate(upper);
+  while (lower.length < upper.length) lower = elevate(lower);
+  const difference = upper.map((weight, i) => weight - (lower[i] ?? 0));
+  return crossingWithin(shape, difference, 0, 1, 0);
+}
+
+type Gap = Pick<CstShape, 'n1' | 'n2' | 'trailingEdgeGap'>;
+
+function crossingWithin(
+  shape: Gap,
+  weights: readonly number[],
+  from: number,
+  to: number,
+  depth: number,
+): number | null {
+  const least = Math.min(...weights);
+  const gap = shape.trailingEdgeGap;
+  if (least > 0 || (least === 0 && (gap > 0 || weights.some((weight) => weight > 0)))) return null;
+  if (gap > 0 && least * largestClassValue(shape, from, to) + from * gap > 0) return null;
+  const start = weights[0] ?? 0;
+  const end = weights.at(-1) ?? 0;
+  if (thicknessSign(shape, start, from) < 0) return from;
+  if (thicknessSign(shape, end, to) < 0) return to;
+  const middle = (from + to) / 2;
+  if (depth === DEEPEST || weights.every((weight) => weight === 0)) return middle;
+  const { left, right } = halve(weights);
+  return (
+    crossingWithin(shape, left, from, middle, depth + 1) ??
+    crossingWithin(shape, right, middle, to, depth + 1)
+  );
+}
+
+/** The sign of the thickness just inside the section at a station: at the ends, where the class function vanishes, of what leads. */
+function thicknessSign(shape: Gap, difference: number, station: number): number {
+  const { n1, n2, trailingEdgeGap: gap } = shape;
+  const atNose = station === 0;
+  if (gap === 0 || (atNose && n1 < 1)) return Math.sign(difference);
+  if (atNose) return Math.sign(difference + gap);
+  return Math.sign(difference * Math.pow(station, n1) * Math.pow(1 - station, n2) + station * gap);
+}
+
+/** Largest x^n1 (1−x)^n2 on an interval; its one maximum lies at n1/(n1+n2). */
+function largestClassValue({ n1, n2 }: Gap, from: number, to: number): number {
+  const x = Math.min(to, Math.max(from, n1 / (n1 + n2)));
+  return Math.pow(x, n1) * Math.pow(1 - x, n2);
+}
+
+/** Points per surface with which a strongly bent 4-digit outline is tested against itself. */
+const POINTS = 200;
+
+/**
+ * True when the outline of a 4-digit shape crosses itself, which thick sections with much camber far forward do on the lower side.
+ *
+ * The mean line has no bottleneck (it is concave and turns by less than a half turn), so thickness laid off square to it cannot fold
+ * while it stays below the radius of curvature everywhere. Only when it does not, the drawn outline itself is tested, segment by segment.
+ */
+export function naca4Crosses(shape: Naca4Shape): boolean {
+  return foldsSomewhere(shape) && polygonCrossesItself(outlinePolygon(shape));
+}
+
+function foldsSomewhere(shape: Naca4Shape): boolean {
+  const { maxCamber: m, maxCamberPosition: p, maxThickness } = shape;
+  if (m === 0) return false;
+  const ahead = (2 * m) / (p * p);
+  const behind = (2 * m) / ((1 - p) * (1 - p));
+  if (0.51 * maxThickness * Math.max(ahead, behind) < 1) return false;
+  for (let i = 0; i <= 2 * POINTS; i++) {
+    const x = i / (2 * POINTS);
+    const { slope } = meanLine(shape, x);
+    const curvature =
+      (x <= p ? Math.max(ahead, x === p ? behind : 0) : behind) / Math.pow(1 + slope * slope, 1.5);
+    if (halfThickness(shape, x) * curvature > 0.98) return true;
+  }
+  return halfThickness(shape, p) * Math.max(ahead, behind) > 0.98;
+}
+
+function outlinePolygon(shape: Naca4Shape): Point[] {
+  const { upper, lower } = naca4Outline(shape);
+  const parameters = Array.from({ length: POINTS }, (_, i) => i / (POINTS - 1));
+  return [
+    ...[...parameters].reverse().map((t) => upper.at(t)),
+    ...parameters.slice(1).map((t) => lower.at(t)),
+  ];
+}
+
+/** True when two segments of an open polygon that are not neighbours properly cross. Closing ends that meet do not count. */
+function polygonCrossesItself(points: readonly Point[]): boolean {
+  for (let i = 0; i + 1 < points.length; i++) {
+    const [a, b] = [points[i], points[i + 1]];
+    for (let j = i + 2; j + 1 < points.length; j++) {
+      const [c, d] = [points[j], points[j + 1]];
+      if (a && b && c && d && segmentsCross(a, b, c, d)) return true;
+    }
+  }
+  return false;
+}
+
+function segmentsCross(a: Point, b: Point, c: Point, d: Point): boolean {
+  if (Math.max(a.x, b.x) < Math.min(c.x, d.x) || Math.max(c.x, d.x) < Math.min(a.x, b.x)) return false;
+  return turn(a, b, c) * turn(a, b, d) < 0 && turn(c, d, a) * turn(c, d, b) < 0;
+}
+
+function turn(a: Point, b: Point, c: Point): number {
+  return (b.x - a.x) * (c.y - a.y) - (b.y - a.y) * (c.x - a.x);
+}
