@@ -1,0 +1,13 @@
+import { type Knex } from 'knex';
+import * as workshopsAndPeople from './0001_workshops_and_people.ts';
+import * as sectionsAndVersions from './0002_sections_and_versions.ts';
+import * as immutableVersions from './0003_immutable_versions.ts';
+import * as downloads from './0004_downloads.ts';
+
+/** Every migration under the name it is remembered by; a name that has been released never changes. */
+export const migrations: Readonly<Record<string, Knex.Migration>> = {
+  '0001_workshops_and_people': workshopsAndPeople,
+  '0002_sections_and_versions': sectionsAndVersions,
+  '0003_immutable_versions': immutableVersions,
+  '0004_downloads': downloads,
+};
