@@ -1,0 +1,130 @@
+import { type z } from 'zod';
+import { problemSchema } from '#server/contracts/common.ts';
+import { type Endpoint, type EndpointName, endpoints } from '#server/contracts/endpoints.ts';
+import { OfflineError, ProblemError, ReplyError } from './errors.ts';
+
+export { fieldErrors, OfflineError, ProblemError, ReplyError } from './errors.ts';
+
+type Definition<Name extends EndpointName> = (typeof endpoints)[Name];
+type InputOf<Name extends EndpointName, Part extends 'params' | 'query' | 'body'> =
+  Definition<Name> extends Record<Part, infer Schema extends z.ZodType> ? z.input<Schema> : undefined;
+
+/** What an endpoint answers; 204 answers nothing. */
+export type Reply<Name extends EndpointName> = Definition<Name>['reply'] extends infer Schema extends
+  z.ZodType
+  ? z.output<Schema>
+  : undefined;
+
+export interface RequestInput<Name extends EndpointName> {
+  readonly params?: InputOf<Name, 'params'> | undefined;
+  readonly query?: InputOf<Name, 'query'> | undefined;
+  readonly body?: InputOf<Name, 'body'> | undefined;
+  readonly signal?: AbortSignal | undefined;
+}
+
+export type FileEndpointName = 'datFile' | 'dxfFile' | 'svgFile';
+
+const sessionEndListeners = new Set<() => void>();
+
+/** Calls `listener` whenever the server answers 401; returns the way to stop listening. */
+export function onSessionEnd(listener: () => void): () => void {
+  sessionEndListeners.add(listener);
+  return () => sessionEndListeners.delete(listener);
+}
+
+/**
+ * The one door to the API: typed by the endpoint table, the reply parsed with its schema.
+ * Throws ProblemError (the server said no), OfflineError (no answer), ReplyError (an answer of an unknown form),
+ * and passes the AbortError of `signal` on.
+ */
+export async function request<Name extends EndpointName>(
+  name: Name,
+  input: RequestInput<Name> = {},
+): Promise<Reply<Name>> {
+  const endpoint: Endpoint = endpoints[name];
+  const response = await send(addressOf(endpoint, input.params, input.query), {
+    method: endpoint.method,
+    headers: {
+      accept: 'application/json',
+      ...(input.body === undefined ? {} : { 'content-type': 'application/json' }),
+    },
+    ...(input.body === undefined ? {} : { body: JSON.stringify(input.body) }),
+    ...(input.signal ? { signal: input.signal } : {}),
+  });
+  if (!response.ok) {
+    if (response.status === 401) for (const listener of sessionEndListeners) listener();
+    throw await problemOf(response);
+  }
+  if (endpoint.reply === null) return undefined as Reply<Name>;
+  const parsed = endpoint.reply.safeParse(await bodyOf(response));
+  if (!parsed.success) throw new ReplyError(response.headers.get('x-request-id'), { cause: parsed.error });
+  return parsed.data as Reply<Name>;
+}
+
+/** The address of a cut file, for a download; the answer is the file itself. */
+export function fileUrl<Name extends FileEndpointName>(
+  name: Name,
+  params: InputOf<Name, 'params'>,
+  query: InputOf<Name, 'query'>,
+): string {
+  return addressOf(endpoints[name], params, query);
+}
+
+/** fetch that tells "no answer" from "the answer was no". Cookies of this origin go along. */
+export async function send(address: string, init: RequestInit): Promise<Response> {
+  try {
+    return await fetch(address, { credentials: 'same-origin', ...init });
+  } catch (error) {
+    if (error instanceof DOMException && error.name === 'AbortError') throw error;
+    throw new OfflineError({ cause: error });
+  }
+}
+
+/** Turns a refusal into a ProblemError, also when something between here and the server answered in another form. */
+export async function problemOf(response: Response): Promise<ProblemError> {
+  const body = await bodyOf(response).catch(() => null);
+  const parsed = problemSchema.safeParse(body);
+  const problem = parsed.success
+    ? parsed.data
+    : {
+        type: 'about:blank',
+        title: `The server answered ${String(response.status)} without saying why.`,
+        status: response.status,
+        code: 'unexplained',
+      };
+  return new ProblemError(problem, { retryAfterSeconds: retryAfterOf(response), body });
+}
+
+function retryAfterOf(response: Response): number | null {
+  const header = response.headers.get('retry-after');
+  if (header === null) return null;
+  const seconds = Number(header);
+  if (Number.isFinite(seconds)) return Math.max(0, seconds);
+  const until = Date.parse(header);
+  return Number.isNaN(until) ? null : Math.max(0, Math.ceil((until - Date.now()) / 1000));
+}
+
+async function bodyOf(response: Response): Promise<unknown> {
+  const text = await response.text();
+  if (!(response.headers.get('content-type') ?? '').includes('json')) return text;
+  try {
+    return JSON.parse(text);
+  } catch {
+    return text;
+  }
+}
+
+function addressOf(endpoint: Endpoint, params: unknown, query: unknown): string {
+  const values = (params ?? {}) as Record<string, unknown>;
+  const path = endpoint.path.replace(/:(\w+)/g, (_, key: string) => {
+    const value = values[key];
+    if (value === undefined) throw new Error(`The path ${endpoint.path} needs "${key}".`);
+    return encodeURIComponent(String(value));
+  });
+  const search = new URLSearchParams();
+  for (const [key, value] of Object.entries((query ?? {}) as Record<string, unknown>)) {
+    if (value === undefined || value === null || value === '') continue;
+    search.set(key, Array.isArray(value) ? value.join(',') : String(value));
+  }
+  return search.size === 0 ? path : `${path}?${search.toString()}`;
+}

@@ -1,0 +1,74 @@
+import { useQueryClient } from '@tanstack/react-query';
+import { useState } from 'react';
+import { useNavigate } from 'react-router';
+import { useChangePreferences } from '#client/api/me.ts';
+import { Menu, MenuHeading, MenuItem, MenuRule } from '#client/ui/menu.tsx';
+import { sentenceOf } from '#client/ui/error-state.tsx';
+import { buttonClass } from '#client/ui/button.tsx';
+import { type Me } from '#server/contracts/people.ts';
+import { signOut } from './session.tsx';
+import { showTheme, type Theme } from './theme.ts';
+
+const THEMES: readonly { readonly value: Theme; readonly label: string }[] = [
+  { value: 'system', label: 'As the system' },
+  { value: 'day', label: 'Day sheet' },
+  { value: 'night', label: 'Night sheet' },
+];
+
+/** The theme a person chose: shown at once, kept in this browser and with the person. */
+export function useTheme(me: Me): readonly [Theme, (theme: Theme) => void] {
+  const change = useChangePreferences();
+  const choose = (theme: Theme) => {
+    showTheme(theme);
+    change.mutate({ theme });
+  };
+  return [change.isPending ? (change.variables.theme ?? me.preferences.theme) : me.preferences.theme, choose];
+}
+
+export function PersonMenu({ me, onShowKeys }: { me: Me; onShowKeys: () => void }) {
+  const navigate = useNavigate();
+  const client = useQueryClient();
+  const [theme, chooseTheme] = useTheme(me);
+  const [failure, setFailure] = useState<string | null>(null);
+
+  const leave = async () => {
+    try {
+      await signOut();
+    } catch (error) {
+      setFailure(`You are still signed in. ${sentenceOf(error)}`);
+      return;
+    }
+    await navigate('/sign-in');
+    client.clear();
+  };
+  return (
+    <>
+      {failure !== null && (
+        <span role="alert" className="truncate text-brick">
+          {failure}
+        </span>
+      )}
+      <Menu trigger={<span className="max-w-40 truncate">{me.name}</span>} className={buttonClass('plain')}>
+        <MenuHeading>
+          {me.role}, {me.workshop.name}
+        </MenuHeading>
+        <MenuItem onSelect={() => void navigate('/account')}>Account</MenuItem>
+        <MenuItem onSelect={onShowKeys}>Keys</MenuItem>
+        <MenuRule />
+        {THEMES.map(({ value, label }) => (
+          <MenuItem
+            key={value}
+            chosen={theme === value}
+            onSelect={() => {
+              chooseTheme(value);
+            }}
+          >
+            {label}
+          </MenuItem>
+        ))}
+        <MenuRule />
+        <MenuItem onSelect={() => void leave()}>Sign out</MenuItem>
+      </Menu>
+    </>
+  );
+}

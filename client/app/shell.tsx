@@ -1,0 +1,86 @@
+import { useEffect, useState } from 'react';
+import { Outlet, ScrollRestoration } from 'react-router';
+import { Announcer } from '#client/ui/announcer.tsx';
+import { Skeleton } from '#client/ui/skeleton.tsx';
+import { KeysDialog } from './keys-dialog.tsx';
+import { KeysProvider, useHotkey } from './keys.tsx';
+import { Mark } from './mark.tsx';
+import { useOnline } from './online.ts';
+import { useMe } from './session.tsx';
+import { SignInAgain } from './sign-in-again.tsx';
+import { showTheme } from './theme.ts';
+import { TopBar } from './top-bar.tsx';
+
+/** What stands around every screen of a signed-in person. */
+export function Shell() {
+  return (
+    <KeysProvider>
+      <Announcer>
+        <Frame />
+      </Announcer>
+    </KeysProvider>
+  );
+}
+
+function Frame() {
+  const [showsKeys, setShowsKeys] = useState(false);
+  const { theme } = useMe().preferences;
+  useEffect(() => {
+    showTheme(theme);
+  }, [theme]);
+  useHotkey('?', () => {
+    setShowsKeys(true);
+  });
+  return (
+    <>
+      <a
+        href="#main"
+        className="sr-only focus:not-sr-only focus:fixed focus:top-1 focus:left-1 focus:z-50 focus:bg-sheet focus:px-3 focus:py-2"
+      >
+        Skip to the screen
+      </a>
+      <TopBar
+        onShowKeys={() => {
+          setShowsKeys(true);
+        }}
+      />
+      <OfflineNote />
+      <main id="main" tabIndex={-1} className="flex min-h-0 flex-1 flex-col outline-none">
+        <Outlet />
+      </main>
+      {showsKeys && (
+        <KeysDialog
+          onClose={() => {
+            setShowsKeys(false);
+          }}
+        />
+      )}
+      <SignInAgain />
+      <ScrollRestoration />
+    </>
+  );
+}
+
+function OfflineNote() {
+  if (useOnline()) return null;
+  return (
+    <p role="status" className="border-b border-amber bg-sheet px-4 py-1 text-amber print:hidden">
+      No network. What is on the screen was loaded before; changes are sent when the network is back and you
+      try again.
+    </p>
+  );
+}
+
+/** Holds the place of the shell while the session is read. */
+export function ShellSkeleton() {
+  return (
+    <div
+      className="flex h-11 items-center gap-5 border-b border-rule px-4 pointer-coarse:h-13"
+      aria-busy="true"
+    >
+      <Mark />
+      <span className="sr-only">Loading</span>
+      <Skeleton className="ml-auto h-8 w-32" />
+    </div>
+  );
+}
