@@ -1,28 +1,46 @@
 import react from '@vitejs/plugin-react';
-import { defineConfig } from 'vitest/config';
 import { fileURLToPath } from 'node:url';
+import { defineConfig } from 'vitest/config';
 
+// Each project names the root itself: one inherited from elsewhere makes Vitest skip the tests outside it in silence.
 const root = fileURLToPath(new URL('..', import.meta.url));
-const shared = { root, setupFiles: ['tests/setup.ts'], passWithNoTests: false };
+const setupFiles = ['tests/setup.ts'];
 
 export default defineConfig({
   root,
   test: {
     passWithNoTests: false,
-    reporters: ['default', ['json', { outputFile: '.data/test-report.json' }]],
+    allowOnly: false,
+    dangerouslyIgnoreUnhandledErrors: false,
     projects: [
-      { root, test: { ...shared, name: 'geometry', include: ['tests/{geometry,reference}/**/*.test.ts'] } },
+      { root, test: { name: 'geometry', setupFiles, include: ['tests/{geometry,reference}/**/*.test.ts'] } },
       {
         root,
         plugins: [react()],
-        test: { ...shared, name: 'client', environment: 'jsdom', include: ['tests/client/**/*.test.{ts,tsx}'] },
+        test: {
+          name: 'client',
+          setupFiles,
+          environment: 'jsdom',
+          include: ['tests/client/**/*.test.{ts,tsx}'],
+        },
       },
-      { root, test: { ...shared, name: 'server', include: ['tests/server/**/*.test.ts'], testTimeout: 30_000, hookTimeout: 60_000 } },
       {
         root,
         test: {
-          ...shared,
+          name: 'server',
+          setupFiles,
+          globalSetup: ['tests/setup-database.ts'],
+          include: ['tests/server/**/*.test.ts'],
+          testTimeout: 30_000,
+          hookTimeout: 60_000,
+        },
+      },
+      {
+        root,
+        test: {
           name: 'browser',
+          setupFiles,
+          globalSetup: ['tests/setup-database.ts', 'tests/setup-browser.ts'],
           include: ['tests/browser/**/*.test.ts'],
           testTimeout: 120_000,
           hookTimeout: 120_000,

@@ -1,0 +1,34 @@
+/**
+ * The server as a process of its own, with a database that is there already: settings, database, application, listen,
+ * graceful stop. `npm start` does the same in its own process, with the preparations of a first run.
+ */
+import { join } from 'node:path';
+import { fileURLToPath } from 'node:url';
+import { ConfigError, readSettings } from './config.ts';
+import { openDatabase, serve } from './start/serve.ts';
+import { onStop } from './start/stop.ts';
+import { explain } from './start/steps.mjs';
+
+async function main(): Promise<void> {
+  const settings = readSettings(process.env);
+  const { databaseUrl, authSecret } = settings;
+  if (databaseUrl === null || authSecret === null) {
+    throw new ConfigError(
+      Object.entries({ DATABASE_URL: databaseUrl, AUTH_SECRET: authSecret })
+        .filter(([, value]) => value === null)
+        .map(([name]) => ({ name, message: 'must be given here; only npm start makes its own' })),
+    );
+  }
+  const { knex } = await openDatabase(databaseUrl);
+  const stops = onStop();
+  stops.add(() => knex.destroy());
+  const clientFolder = join(fileURLToPath(new URL('..', import.meta.url)), '.build/client');
+  const running = await serve({ settings, databaseUrl, authSecret, knex, clientFolder });
+  stops.add(() => running.stop());
+  process.send?.({ listening: running.port });
+}
+
+main().catch((error: unknown) => {
+  explain(error);
+  process.exit(1);
+});
