@@ -1,0 +1,37 @@
+import { Controller, type UseFormReturn } from 'react-hook-form';
+import { formatLength, useUnits } from '#client/app/units.ts';
+import { QuantityField } from '#client/ui/quantity-field.tsx';
+import { type ExportFields } from './export-fields.ts';
+
+const lengths = {
+  chordMm: { label: 'Chord', min: 10, max: 5000, decimals: 2 },
+  toleranceMm: { label: 'Tolerance', min: 0.001, max: 1, decimals: 3 },
+} as const;
+
+interface LengthFieldProps {
+  readonly form: UseFormReturn<ExportFields>;
+  readonly name: keyof typeof lengths;
+}
+
+/** A length of the export form, typed in the person's unit or any other; beside it what it is in mm for who reads inches. */
+export function LengthField({ form, name }: LengthFieldProps) {
+  const inInches = useUnits() === 'inch';
+  const chordMm = form.getValues('chordMm');
+  return (
+    <Controller
+      control={form.control}
+      name={name}
+      render={({ field, fieldState }) => (
+        <QuantityField
+          {...lengths[name]}
+          kind="length"
+          chordMm={chordMm}
+          value={field.value}
+          onCommit={field.onChange}
+          secondary={inInches ? formatLength(field.value, 'mm', lengths[name].decimals) : undefined}
+          error={fieldState.error?.message}
+        />
+      )}
+    />
+  );
+}

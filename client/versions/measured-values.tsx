@@ -1,0 +1,32 @@
+import { type Measures } from '#geometry/contour/measures.ts';
+import { formatAngle, formatLength, formatPercent, MM_PER_INCH, type Units } from '#client/app/units.ts';
+import { FactList } from './fact-list.tsx';
+
+interface MeasuredValuesProps {
+  readonly measures: Measures;
+  readonly chordMm: number;
+  readonly units: Units;
+}
+
+/** Measured on the true contour at the chord shown, not echoed from the values that made it. */
+export function MeasuredValues({ measures, chordMm, units }: MeasuredValuesProps) {
+  const length = (fraction: number) => formatLength(fraction * chordMm, units);
+  const at = (fraction: number, station: number) => `${length(fraction)} at ${formatPercent(station, 1)}`;
+  return (
+    <FactList
+      facts={[
+        ['Largest thickness', at(measures.maxThickness, measures.maxThicknessPosition)],
+        ['Largest camber', at(measures.maxCamber, measures.maxCamberPosition)],
+        ['Nose radius', length(measures.noseRadius)],
+        ['Edge angle', formatAngle(measures.trailingEdgeAngleDeg)],
+        ['Edge gap', length(measures.trailingEdgeGap)],
+        ['Area', area(measures.area * chordMm ** 2, units)],
+        ['Perimeter', length(measures.perimeter)],
+      ]}
+    />
+  );
+}
+
+function area(mm2: number, units: Units): string {
+  return units === 'mm' ? `${(mm2 / 100).toFixed(1)} cm²` : `${(mm2 / MM_PER_INCH ** 2).toFixed(2)} in²`;
+}
