@@ -1,4 +1,5 @@
 import { type Point } from '../point.ts';
+import { type Outline } from '../shapes/outline.ts';
 
 /**
  * The drawn outline as points: from the trailing edge of the upper surface round the nose to that of the lower, counter-clockwise.
@@ -44,4 +45,20 @@ export function extents(contour: Contour): Extents {
 /** The points in order, as objects. */
 export function contourPoints(contour: Contour): Point[] {
   return Array.from(contour.x, (x, i) => ({ x, y: contour.y[i] ?? 0 }));
+}
+
+/** The contour through the points at given parameters, each list ascending from 0 to 1. */
+export function contourAt(outline: Outline, upper: ArrayLike<number>, lower: ArrayLike<number>): Contour {
+  const noseIndex = upper.length - 1;
+  const count = upper.length + lower.length - 1 - (outline.sharp ? 1 : 0);
+  const x = new Float64Array(count);
+  const y = new Float64Array(count);
+  for (let i = 0; i < count; i++) {
+    const onUpper = i <= noseIndex;
+    const t = onUpper ? upper[noseIndex - i] : lower[i - noseIndex];
+    const point = (onUpper ? outline.upper : outline.lower).at(t ?? 0);
+    x[i] = point.x;
+    y[i] = point.y;
+  }
+  return { x, y, noseIndex, sharp: outline.sharp };
 }

@@ -1,7 +1,8 @@
+import { type Point } from '../point.ts';
 import { elevate, halve } from './bernstein.ts';
 import { type CstShape } from './cst-schema.ts';
-import { type Naca4Shape, halfThickness, meanLine, naca4Outline } from './naca4.ts';
-import { type Point } from '../point.ts';
+import { type Naca4Shape, naca4Outline } from './naca4.ts';
+import { parameterOf } from './outline.ts';
 
 /** Halvings after which a piece is given up as touching: 2⁻³² of the chord. */
 const DEEPEST = 32;
@@ -64,34 +65,36 @@ function largestClassValue({ n1, n2 }: Gap, from: number, to: number): number {
   return Math.pow(x, n1) * Math.pow(1 - x, n2);
 }
 
-/** Points per surface with which a strongly bent 4-digit outline is tested against itself. */
+/** Points per surface with which a strongly bent 4-digit outline is tested against itself, and stations tested for folding. */
 const POINTS = 200;
 
+/** What a thick 4-digit section with much camber far forward or aft does on its lower side: it folds back, or crosses itself. */
+export type Naca4Fault = 'folds' | 'crosses';
+
 /**
- * True when the outline of a 4-digit shape crosses itself, which thick sections with much camber far forward do on the lower side.
+ * Whether the lower surface of a 4-digit shape folds back (its station decreases on the way aft, so that no thickness is defined there)
+ * or the outline crosses itself; null for a sound outline.
  *
- * The mean line has no bottleneck (it is concave and turns by less than a half turn), so thickness laid off square to it cannot fold
- * while it stays below the radius of curvature everywhere. Only when it does not, the drawn outline itself is tested, segment by segment.
+ * With θ the slope angle of the mean line, the lower surface's station is x + yt sin θ. The mean line is concave, turns by less than a
+ * half turn and has no bottleneck, so the thickness laid off square to it cannot cross while it stays below the radius of curvature
+ * everywhere. Only when it does not, the drawn outline itself is tested, segment against segment.
  */
-export function naca4Crosses(shape: Naca4Shape): boolean {
-  return foldsSomewhere(shape) && polygonCrossesItself(outlinePolygon(shape));
+export function naca4Fault(shape: Naca4Shape): Naca4Fault | null {
+  const { maxCamber: m, maxCamberPosition: p } = shape;
+  if (m === 0) return null;
+  const { lower } = naca4Outline(shape);
+  const peak = parameterOf(p);
+  for (let i = 1; i < POINTS; i++) {
+    if (lower.derivatives(i / POINTS).dx < 0) return 'folds';
+  }
+  if (lower.derivatives(peak - BESIDE).dx < 0 || lower.derivatives(peak + BESIDE).dx < 0) return 'folds';
+  const largestCurvature = Math.max((2 * m) / (p * p), (2 * m) / ((1 - p) * (1 - p)));
+  const mayCross = 0.51 * shape.maxThickness * largestCurvature >= 1;
+  return mayCross && polygonCrossesItself(outlinePolygon(shape)) ? 'crosses' : null;
 }
 
-function foldsSomewhere(shape: Naca4Shape): boolean {
-  const { maxCamber: m, maxCamberPosition: p, maxThickness } = shape;
-  if (m === 0) return false;
-  const ahead = (2 * m) / (p * p);
-  const behind = (2 * m) / ((1 - p) * (1 - p));
-  if (0.51 * maxThickness * Math.max(ahead, behind) < 1) return false;
-  for (let i = 0; i <= 2 * POINTS; i++) {
-    const x = i / (2 * POINTS);
-    const { slope } = meanLine(shape, x);
-    const curvature =
-      (x <= p ? Math.max(ahead, x === p ? behind : 0) : behind) / Math.pow(1 + slope * slope, 1.5);
-    if (halfThickness(shape, x) * curvature > 0.98) return true;
-  }
-  return halfThickness(shape, p) * Math.max(ahead, behind) > 0.98;
-}
+/** How far beside the camber position, in t, the jump of the curvature is looked at from either side. */
+const BESIDE = 1e-9;
 
 function outlinePolygon(shape: Naca4Shape): Point[] {
   const { upper, lower } = naca4Outline(shape);

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { cstCrossing, naca4Crosses } from './crossing.ts';
+import { cstCrossing, naca4Fault } from './crossing.ts';
 import { type CstShape, cstOutline, cstSchema, weightStation } from './cst.ts';
 import { type ShapeIssue, shapeErrorOf } from './error.ts';
 import { percent } from './fields.ts';
@@ -24,9 +24,10 @@ function key(part: string): string | number {
 
 function crossings(shape: Shape): ShapeIssue[] {
   if (shape.kind === 'naca4') {
-    if (!naca4Crosses(shape)) return [];
-    const message =
-      'the lower surface crosses itself: take less maxThickness or maxCamber, or a maxCamberPosition further aft';
+    const fault = naca4Fault(shape);
+    if (fault === null) return [];
+    const what = fault === 'folds' ? 'the lower surface folds back on itself' : 'the outline crosses itself';
+    const message = `${what}: take less maxThickness or maxCamber, or a maxCamberPosition nearer to the middle`;
     return [{ path: 'maxThickness', message }];
   }
   const station = cstCrossing(shape);
