@@ -46,7 +46,8 @@ export function convexCurvature({ dx, dy, ddx, ddy }: CurvePoint, sense: Sense):
 
 /**
  * Nose radii and the smallest convex and hollow radius of the exact outline: a scan of the curvature at equal steps of t, finer at the
- * nose, refined by golden section about its extremes. What a cutter's wire or mill must follow.
+ * nose, refined by golden section about its extremes. What a cutter's wire or mill must follow. The radii are those of the smooth parts:
+ * the slight corner of a 4-digit section at its camber position (see SurfaceCurve.breaks) and the trailing edge are not counted.
  */
 export function radiiOf(outline: Outline): Radii {
   const nose = outline.upper.at(0);
@@ -116,7 +117,7 @@ function refine(
   sign: 1 | -1,
 ): Bend {
   let top = 0;
-  const scanned = (i: number) => (sign * (curvatures[i] ?? -sign * Infinity));
+  const scanned = (i: number) => sign * (curvatures[i] ?? -sign * Infinity);
   for (let i = 1; i < parameters.length; i++) if (scanned(i) > scanned(top)) top = i;
   const at = parameters[top] ?? 0;
   const best = { at, value: scanned(top) };

@@ -19,11 +19,10 @@ const FILLED = 1 - 1e-6;
  * turns by no more than a right angle the error never grows when the arc is shortened. (Keep one end, pull the other in: the chord
  * turns about the kept end towards the arc, and each point's distance, its distance from the kept end times the sine of an angle that
  * only shrinks below 90°, shrinks too.) So if any other choice of vertices reaches v₁ < v₂ < …, the walk's k-th vertex is never short of
- * v_k: it starts at or beyond v_(k−1), and the arc from there to v_k is part of one that holds. A jump of the curvature that stays convex changes
- * nothing in this. At an inflection the argument ends; so the walk is done twice, once with the inflections as fixed vertices (fewest
- * under that condition) and once straight across them, and the shorter list is taken.
- *
- * "As far as the tolerance allows" is met to two millionths of the tolerance.
+ * v_k: it starts at or beyond v_(k−1), and the arc from there to v_k is part of one that holds. A corner
+ * that turns the same way changes nothing in this. At an inflection, or a corner that turns against the bend, the argument ends; so the walk
+ * is done twice, once with these as fixed vertices (fewest under that condition) and once straight across them, and the shorter
+ * list is taken. "As far as the tolerance allows" is met to two millionths of the tolerance.
  *
  * @param toleranceFraction chordal tolerance in fractions of chord (tolerance in mm / chord in mm), 1e-8 … 0.1
  * @throws ShapeError when the tolerance is out of range

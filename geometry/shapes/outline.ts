@@ -18,7 +18,11 @@ export interface SurfaceCurve {
   at(t: number): Point;
   /** The point and its analytic derivatives at t, 0 … 1; always finite. */
   derivatives(t: number): CurvePoint;
-  /** Values of t, ascending and inside 0 … 1, where the curvature jumps. */
+  /**
+   * Values of t, ascending and inside 0 … 1, where the curve is not smooth. At the camber position of a 4-digit section the curvature of the
+   * mean line jumps; thickness laid off square to it then turns the surfaces by a small corner as well, unless the thickness is
+   * largest just there (0.02° on 2412). Derivatives at a break are those of one of its sides.
+   */
   readonly breaks: readonly number[];
 }
 
