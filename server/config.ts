@@ -93,8 +93,12 @@ export interface Config extends Pick<
 
 /** The environment does not make sense; `problems` names every setting at fault, at once. */
 export class ConfigError extends Error {
+  readonly advice = 'README.md has the table of the settings.';
+
   constructor(readonly problems: readonly { readonly name: string; readonly message: string }[]) {
-    super(problems.map(({ name, message }) => `${name}: ${message}`).join('\n'));
+    super(
+      ['These settings need attention:', ...problems.map((one) => `  ${one.name} ${one.message}`)].join('\n'),
+    );
     this.name = 'ConfigError';
   }
 }

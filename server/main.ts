@@ -6,10 +6,9 @@ import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { ConfigError, readSettings } from './config.ts';
 import { openDatabase, serve } from './start/serve.ts';
-import { onStop } from './start/stop.ts';
-import { explain } from './start/steps.mjs';
+import { onStop, type Stops } from './start/stop.ts';
 
-async function main(): Promise<void> {
+async function main(stops: Stops): Promise<void> {
   const settings = readSettings(process.env);
   const { databaseUrl, authSecret } = settings;
   if (databaseUrl === null || authSecret === null) {
@@ -20,7 +19,6 @@ async function main(): Promise<void> {
     );
   }
   const { knex } = await openDatabase(databaseUrl);
-  const stops = onStop();
   stops.add(() => knex.destroy());
   const clientFolder = join(fileURLToPath(new URL('..', import.meta.url)), '.build/client');
   const running = await serve({ settings, databaseUrl, authSecret, knex, clientFolder });
@@ -28,7 +26,5 @@ async function main(): Promise<void> {
   process.send?.({ listening: running.port });
 }
 
-main().catch((error: unknown) => {
-  explain(error);
-  process.exit(1);
-});
+const stops = onStop();
+void stops.guard(() => main(stops));

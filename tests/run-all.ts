@@ -121,7 +121,7 @@ async function checkAll(root: string): Promise<Count> {
  */
 export async function runAll(root: string, args: readonly string[]): Promise<Count> {
   const begun = performance.now();
-  const stops = onStop({ code: 130 });
+  const stops = onStop(130);
   await providePrograms([mariadbServer, chromium]);
   const server = await step('Starting a throw-away database', startThrowaway);
   stops.add(() => server.remove());

@@ -1,6 +1,7 @@
 import { createHash } from 'node:crypto';
 import { existsSync, readdirSync, readFileSync, renameSync, rmSync, statSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { stripVTControlCharacters } from 'node:util';
 import { folderName, hold } from './hold.mjs';
 import { StartError, step } from './steps.mjs';
 
@@ -50,7 +51,7 @@ async function build(root: string): Promise<void> {
     root: join(root, 'client'),
     configFile: join(root, 'vite.config.ts'),
     mode: 'production',
-    logLevel: 'warn',
+    logLevel: 'silent',
     build: { outDir: join(root, '.build/client.new'), emptyOutDir: true },
   });
 }
@@ -92,9 +93,9 @@ async function buildAnew(root: string, sum: string): Promise<void> {
       await build(root);
       exchange(root, sum);
     } catch (error) {
-      const text = error instanceof Error ? error.message : String(error);
+      const text = stripVTControlCharacters(error instanceof Error ? error.message : String(error));
       throw new StartError(
-        `The client could not be built:\n${text}`,
+        `The client could not be built:\n${text.split('\n').slice(0, 30).join('\n')}`,
         'Set right what the message names, and start again.',
         error,
       );

@@ -6,6 +6,7 @@ import { defaultPort } from '../config.ts';
 import { freePort } from './ports.ts';
 import { greet, prepare, type Launch } from './prepare.ts';
 import { tied } from './processes.mjs';
+import { onStop, type Stops } from './stop.ts';
 
 /** The folders whose change restarts the server. */
 const serverFolders = ['server', 'geometry', 'migrations'];
@@ -68,9 +69,14 @@ function restartOnChange(vite: ViteDevServer, root: string, app: AppProcess): vo
 }
 
 /** `npm run dev`: the client through Vite with replacement of changed modules, the server restarted on change. */
-export default async function dev(launch: Launch): Promise<void> {
+export default function dev(launch: Launch): Promise<void> {
+  const stops = onStop();
+  return stops.guard(() => startAll(launch, stops));
+}
+
+async function startAll(launch: Launch, stops: Stops): Promise<void> {
   const { root, environment } = launch;
-  const { settings, databaseUrl, authSecret, knex, demoPassword, stops, announce } = await prepare(launch);
+  const { settings, databaseUrl, authSecret, knex, demoPassword, announce } = await prepare(launch, stops);
   await knex.destroy();
   const appPort = await freePort();
   const target = `http://127.0.0.1:${String(appPort)}`;

@@ -24,7 +24,7 @@ function ask(address) {
       try {
         resolve(JSON.parse(answer));
       } catch {
-        resolve({});
+        resolve(undefined);
       }
     });
   });
@@ -57,14 +57,18 @@ function listen(address, state) {
  */
 export async function hold(name, { state = () => ({}), patient = () => false, patienceMs = 30_000 } = {}) {
   const address = `\0ribwright-${name}`;
-  for (const end = Date.now() + patienceMs; ;) {
+  const begun = Date.now();
+  for (;;) {
     try {
       const server = await listen(address, state);
       return { release: () => server.close() };
     } catch (error) {
       if (error.code !== 'EADDRINUSE') throw error;
       const other = await ask(address);
-      if (Date.now() > end || !patient(other)) return { takenBy: other };
+      // No answer: it has just let go, or is too busy; which, the next attempts tell.
+      const silent = other === undefined && Date.now() < begun + 2000;
+      if (!silent && (Date.now() > begun + patienceMs || !patient(other ?? {})))
+        return { takenBy: other ?? {} };
       await new Promise((resolve) => setTimeout(resolve, 100));
     }
   }

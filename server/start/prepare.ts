@@ -9,7 +9,7 @@ import { choosePlace, type Place } from './place.ts';
 import { keptSecret, longSecret, readablePassword } from './secrets.ts';
 import { openDatabase } from './serve.ts';
 import { StartError, step } from './steps.mjs';
-import { onStop, type Stops } from './stop.ts';
+import type { Stops } from './stop.ts';
 
 /** What the launcher hands to each kind of start. */
 export interface Launch {
@@ -28,7 +28,6 @@ export interface Prepared {
   readonly knex: Knex;
   /** Null without the demo workshop. */
   readonly demoPassword: string | null;
-  readonly stops: Stops;
   /** Tells a second start in the same place where this one serves. */
   announce(address: string): void;
 }
@@ -58,7 +57,12 @@ async function startPrivate(place: Place, stops: Stops): Promise<Mariadb> {
     note(`MariaDB on port ${String(started.port)}${started.isNew ? ', new' : ''}${before}`);
     return started;
   });
-  stops.add(() => server.stop());
+  stops.add(
+    () => server.stop(),
+    () => {
+      server.ask();
+    },
+  );
   void server.ended.then(() => {
     if (stops.isEnding()) return;
     console.error(
@@ -79,11 +83,10 @@ async function fill(knex: Knex, password: string): Promise<void> {
  * Brings everything up to the point of listening: settings, database, tables, demo workshop.
  * @throws {ConfigError | StartError} saying what is wrong and what to do
  */
-export async function prepare({ root, environment }: Launch): Promise<Prepared> {
+export async function prepare({ root, environment }: Launch, stops: Stops): Promise<Prepared> {
   const settings = readSettings(environment);
   let server: Mariadb | undefined;
   let address: string | undefined;
-  const stops = onStop({ force: () => server?.ask() });
   const isPrivate = settings.databaseUrl === null;
   const place = choosePlace(root, settings.dataFolder, isPrivate ? serverAccount() : undefined);
   if (isPrivate) {
@@ -108,7 +111,6 @@ export async function prepare({ root, environment }: Launch): Promise<Prepared> 
     authSecret: settings.authSecret ?? keptSecret(place.folder, 'auth-secret', longSecret),
     knex,
     demoPassword,
-    stops,
     announce: (where) => {
       address = where;
     },

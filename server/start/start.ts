@@ -1,11 +1,17 @@
 import { buildClient } from './client-build.ts';
 import { greet, prepare, type Launch } from './prepare.ts';
 import { serve } from './serve.ts';
+import { onStop, type Stops } from './stop.ts';
 
 /** `npm start`: everything from one process, at one address, until Ctrl-C. */
-export default async function start(launch: Launch): Promise<void> {
-  const prepared = await prepare(launch);
-  const { settings, stops } = prepared;
+export default function start(launch: Launch): Promise<void> {
+  const stops = onStop();
+  return stops.guard(() => startAll(launch, stops));
+}
+
+async function startAll(launch: Launch, stops: Stops): Promise<void> {
+  const prepared = await prepare(launch, stops);
+  const { settings } = prepared;
   const clientFolder = await buildClient(launch.root);
   const running = await serve({ ...prepared, clientFolder });
   stops.add(() => {

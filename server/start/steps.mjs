@@ -75,11 +75,11 @@ export async function step(title, work) {
 }
 
 /**
- * Prints why the start failed and what to do.
+ * Prints why the start failed and what to do: an error's own `advice`, or what is known about its like.
  * @param {unknown} error
  */
 export function explain(error) {
-  const known = error instanceof StartError;
+  const known = typeof error?.advice === 'string';
   const advice = known ? error.advice : adviceFor(error);
   console.error(`\n${known ? error.message : `The start failed: ${error?.message ?? String(error)}`}`);
   if (advice !== undefined) console.error(advice);

@@ -11,7 +11,7 @@ export default async function bench({ root }: { readonly root: string }): Promis
   const folder = join(root, 'tests/bench');
   const wanted = process.argv[3] ?? '';
   const files = readdirSync(folder).filter((name) => name.endsWith('.bench.ts') && name.includes(wanted));
-  const stops = onStop({ code: 130 });
+  const stops = onStop(130);
   const server = await step('Starting a throw-away database', startThrowaway);
   stops.add(() => server.remove());
   process.env['TEST_DATABASE_URL'] = server.url;
