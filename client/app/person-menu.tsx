@@ -1,13 +1,13 @@
 import { useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
 import { useNavigate } from 'react-router';
-import { useChangePreferences } from '#client/api/me.ts';
 import { Menu, MenuHeading, MenuItem, MenuRule } from '#client/ui/menu.tsx';
 import { sentenceOf } from '#client/ui/error-state.tsx';
 import { buttonClass } from '#client/ui/button.tsx';
 import { type Me } from '#server/contracts/people.ts';
 import { signOut } from './session.tsx';
-import { showTheme, type Theme } from './theme.ts';
+import { type Theme } from './theme.ts';
+import { useTheme } from './use-theme.ts';
 
 const THEMES: readonly { readonly value: Theme; readonly label: string }[] = [
   { value: 'system', label: 'As the system' },
@@ -15,20 +15,10 @@ const THEMES: readonly { readonly value: Theme; readonly label: string }[] = [
   { value: 'night', label: 'Night sheet' },
 ];
 
-/** The theme a person chose: shown at once, kept in this browser and with the person. */
-export function useTheme(me: Me): readonly [Theme, (theme: Theme) => void] {
-  const change = useChangePreferences();
-  const choose = (theme: Theme) => {
-    showTheme(theme);
-    change.mutate({ theme });
-  };
-  return [change.isPending ? (change.variables.theme ?? me.preferences.theme) : me.preferences.theme, choose];
-}
-
 export function PersonMenu({ me, onShowKeys }: { me: Me; onShowKeys: () => void }) {
   const navigate = useNavigate();
   const client = useQueryClient();
-  const [theme, chooseTheme] = useTheme(me);
+  const { theme, choose } = useTheme(me);
   const [failure, setFailure] = useState<string | null>(null);
 
   const leave = async () => {
@@ -60,7 +50,7 @@ export function PersonMenu({ me, onShowKeys }: { me: Me; onShowKeys: () => void 
             key={value}
             chosen={theme === value}
             onSelect={() => {
-              chooseTheme(value);
+              choose(value);
             }}
           >
             {label}

@@ -1,0 +1,56 @@
+import { zodResolver } from '@hookform/resolvers/zod';
+import { useForm } from 'react-hook-form';
+import { z } from 'zod';
+import { useChangeSection } from '#client/api/sections.ts';
+import { Button } from '#client/ui/button.tsx';
+import { Dialog } from '#client/ui/dialog.tsx';
+import { sentenceOf } from '#client/ui/error-state.tsx';
+import { Notice } from '#client/ui/notice.tsx';
+import { TextField } from '#client/ui/text-field.tsx';
+import { purposeSchema, sectionNameSchema } from '#server/contracts/common.ts';
+import { type Section } from '#server/contracts/sections.ts';
+
+const nameFormSchema = z.object({ name: sectionNameSchema, purpose: purposeSchema });
+
+export function NameDialog({ section, onClose }: { section: Section; onClose: () => void }) {
+  const change = useChangeSection(section.id);
+  const form = useForm({
+    resolver: zodResolver(nameFormSchema),
+    defaultValues: { name: section.name, purpose: section.purpose },
+  });
+  const { errors } = form.formState;
+  const submit = form.handleSubmit((typed) => {
+    change.mutate(typed, { onSuccess: onClose });
+  });
+  return (
+    <Dialog
+      title="Name and purpose"
+      width="narrow"
+      onClose={onClose}
+      actions={
+        <>
+          <Button onClick={onClose}>Cancel</Button>
+          <Button variant="primary" type="submit" form="name-form" busy={change.isPending}>
+            Save
+          </Button>
+        </>
+      }
+    >
+      <form
+        id="name-form"
+        noValidate
+        onSubmit={(event) => void submit(event)}
+        className="flex flex-col gap-4"
+      >
+        <TextField label="Name" autoComplete="off" error={errors.name?.message} {...form.register('name')} />
+        <TextField
+          label="Purpose"
+          autoComplete="off"
+          error={errors.purpose?.message}
+          {...form.register('purpose')}
+        />
+        {change.isError && <Notice tone="error">{sentenceOf(change.error)}</Notice>}
+      </form>
+    </Dialog>
+  );
+}
