@@ -80,6 +80,8 @@ function processAt(pid) {
     const stat = readFileSync(`/proc/${pid}/stat`, 'utf8')
       .replace(/^.*\) /s, '')
       .split(' ');
+    // Killed, and not yet taken note of by its parent.
+    if (stat[0] === 'Z' || stat[0] === 'X') return undefined;
     return { name: readFileSync(`/proc/${pid}/cmdline`, 'utf8'), parent: Number(stat[1]), born: stat[19] };
   } catch {
     return undefined;
