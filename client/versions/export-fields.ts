@@ -14,6 +14,7 @@ export interface ExportFields {
   /** Only a coordinate file can do without a chord: its numbers are then fractions of chord. */
   unitChord: boolean;
   chordMm: number;
+  /** A tolerance is in mm and needs a chord; a unit chord is spaced by cosine. */
   spacing: 'cosine' | 'tolerance';
   points: string;
   toleranceMm: number;
@@ -52,14 +53,10 @@ export function optionsOf(fields: ExportFields): Readonly<Record<string, unknown
   const { chordMm, toleranceMm, layers, release, arcs, points, spacing, order, decimals, newline } = fields;
   if (fields.format === 'svg') return { chordMm, toleranceMm, layers };
   if (fields.format === 'dxf') return { chordMm, toleranceMm, release, layers, arcs };
-  const shared = {
-    order,
-    decimals: given(decimals),
-    newline,
-    spacing,
-    ...(fields.unitChord ? {} : { chordMm }),
-  };
-  return spacing === 'tolerance' ? { ...shared, toleranceMm } : { ...shared, points: given(points) };
+  const shared = { order, decimals: given(decimals), newline };
+  if (fields.unitChord) return { ...shared, spacing: 'cosine', points: given(points) };
+  const spaced = spacing === 'tolerance' ? { toleranceMm } : { points: given(points) };
+  return { ...shared, chordMm, spacing, ...spaced };
 }
 
 /** The schemas take an empty field for an absent one and fall back to a default; a person who emptied it is told instead. */

@@ -69,16 +69,15 @@ function CoordinateFields({ form }: { readonly form: Form }) {
       <CheckboxField
         label="Unit chord"
         hint="Coordinates as fractions of chord, without a unit."
-        {...form.register('unitChord', { deps: ['chordMm'] })}
+        {...form.register('unitChord')}
       />
-      {!unitChord && <LengthField form={form} name="chordMm" />}
-      <SelectField
-        label="Spacing of the points"
-        options={spacings}
-        error={chordMissing(form)}
-        {...form.register('spacing', { deps: ['chordMm'] })}
-      />
-      {spacing === 'tolerance' ? (
+      {!unitChord && (
+        <>
+          <LengthField form={form} name="chordMm" />
+          <SelectField label="Spacing of the points" options={spacings} {...form.register('spacing')} />
+        </>
+      )}
+      {!unitChord && spacing === 'tolerance' ? (
         <LengthField form={form} name="toleranceMm" />
       ) : (
         <TextField
@@ -102,11 +101,6 @@ function CoordinateFields({ form }: { readonly form: Form }) {
       </div>
     </>
   );
-}
-
-/** With a unit chord the chord has no field of its own, so its message stands under the spacing that asks for it. */
-function chordMissing(form: Form): string | undefined {
-  return form.getValues('unitChord') ? form.formState.errors.chordMm?.message : undefined;
 }
 
 const spacings = [

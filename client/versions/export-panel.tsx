@@ -61,7 +61,7 @@ interface FileColumnProps {
 
 function FileColumn({ version, form, focusRefused }: FileColumnProps) {
   const fields = useWatch({ control: form.control }) as ExportFields;
-  const file = useMemo(() => previewOf(version, fields), [version, fields]);
+  const { file, refusal } = useMemo(() => previewOf(version, fields), [version, fields]);
   const url = file ? urlOf(version, fields) : null;
   const checksum = useFileChecksum(url);
   const client = useQueryClient();
@@ -79,7 +79,8 @@ function FileColumn({ version, form, focusRefused }: FileColumnProps) {
           version {version.number} <StatusMark status={version.status} />
         </p>
       </div>
-      <FileFacts file={file} unitChord={unitChord} checksum={checksum} />
+      <FileFacts file={file} checksum={checksum} />
+      {refusal !== '' && <Notice tone="error">{refusal}</Notice>}
       {version.status !== 'released' && <Notice tone="caution">{notInForce[version.status]}</Notice>}
       <Button
         variant="primary"

@@ -5,18 +5,17 @@ import { FactList } from './fact-list.tsx';
 interface FileFactsProps {
   /** The file as the browser would make it, or null while a field is refused. */
   readonly file: ExportFile | null;
-  readonly unitChord: boolean;
   /** sha-256 of the bytes as the server announces it, or what is to be said in its place. */
   readonly checksum: string;
 }
 
 /** Measured on the file itself, before it is fetched. */
-export function FileFacts({ file, unitChord, checksum }: FileFactsProps) {
+export function FileFacts({ file, checksum }: FileFactsProps) {
   const units = useUnits();
   const facts = file?.facts;
   const length = (mm: number | undefined, decimals: number) => {
     if (mm === undefined) return '–';
-    return unitChord ? mm.toFixed(decimals + 3) : formatLength(mm, units, decimals);
+    return facts?.unit === 'chord' ? mm.toFixed(decimals + 3) : formatLength(mm, units, decimals);
   };
   return (
     <FactList
