@@ -2,6 +2,7 @@
  * The server as a process of its own, with a database that is there already: settings, database, application, listen,
  * graceful stop. `npm start` does the same in its own process, with the preparations of a first run.
  */
+import { existsSync } from 'node:fs';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { ConfigError, readSettings } from './config.ts';
@@ -20,7 +21,8 @@ async function main(stops: Stops): Promise<void> {
   }
   const { knex } = await openDatabase(databaseUrl);
   stops.add(() => knex.destroy());
-  const clientFolder = join(fileURLToPath(new URL('..', import.meta.url)), '.build/client');
+  const built = join(fileURLToPath(new URL('..', import.meta.url)), '.build/client');
+  const clientFolder = process.send === undefined && existsSync(built) ? built : null;
   const running = await serve({ settings, databaseUrl, authSecret, knex, clientFolder });
   stops.add(() => running.stop());
   process.send?.({ listening: running.port });

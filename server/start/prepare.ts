@@ -1,13 +1,14 @@
 import { join } from 'node:path';
 import type { Knex } from 'knex';
 import { readSettings, type Settings } from '../config.ts';
+import { alignDemoPassword, demoAddresses } from './demo-accounts.ts';
 import { folderName, hold, type Holder } from './hold.mjs';
 import { serverAccount } from './mariadb/account.ts';
 import { startMariadb, type Mariadb } from './mariadb/server.ts';
 import { mariadbServer, providePrograms } from './packages.ts';
 import { choosePlace, type Place } from './place.ts';
 import { keptSecret, longSecret, readablePassword } from './secrets.ts';
-import { openDatabase } from './serve.ts';
+import { assertPortFree, openDatabase } from './serve.ts';
 import { StartError, step } from './steps.mjs';
 import type { Stops } from './stop.ts';
 
@@ -75,8 +76,9 @@ async function startPrivate(place: Place, stops: Stops): Promise<Mariadb> {
 
 async function fill(knex: Knex, password: string): Promise<void> {
   const { isEmpty, seedDemo } = await import('./demo/seed.ts');
-  if (!(await isEmpty(knex))) return;
-  await step('Filling in the demo workshop', () => seedDemo(knex, password));
+  if (await isEmpty(knex)) return step('Filling in the demo workshop', () => seedDemo(knex, password));
+  const changed = await alignDemoPassword(knex, password);
+  if (changed.length > 0) console.log(`- The demo accounts have a new password: ${changed.join(', ')}`);
 }
 
 /**
@@ -87,11 +89,15 @@ export async function prepare({ root, environment }: Launch, stops: Stops): Prom
   const settings = readSettings(environment);
   let server: Mariadb | undefined;
   let address: string | undefined;
+  await assertPortFree(settings);
+  // Chosen when first needed: with everything given there is nothing to keep.
+  let chosen: Place | undefined;
   const isPrivate = settings.databaseUrl === null;
-  const place = choosePlace(root, settings.dataFolder, isPrivate ? serverAccount() : undefined);
+  const place = (): Place =>
+    (chosen ??= choosePlace(root, settings.dataFolder, isPrivate ? serverAccount() : undefined));
   if (isPrivate) {
-    await holdPlace(place.folder, () => ({ ...(address && { address }), ending: stops.isEnding() }));
-    server = await startPrivate(place, stops);
+    await holdPlace(place().folder, () => ({ ...(address && { address }), ending: stops.isEnding() }));
+    server = await startPrivate(place(), stops);
   }
   const databaseUrl = settings.databaseUrl ?? server?.url ?? '';
   const { knex } = await step('Bringing the tables up to date', async (note) => {
@@ -101,14 +107,14 @@ export async function prepare({ root, environment }: Launch, stops: Stops): Prom
   });
   stops.add(() => knex.destroy());
   const demoPassword = settings.demo
-    ? (settings.demoPassword ?? keptSecret(place.folder, 'demo-password', readablePassword))
+    ? (settings.demoPassword ?? keptSecret(place().folder, 'demo-password', readablePassword))
     : null;
   if (demoPassword !== null) await fill(knex, demoPassword);
   server?.keep();
   return {
     settings,
     databaseUrl,
-    authSecret: settings.authSecret ?? keptSecret(place.folder, 'auth-secret', longSecret),
+    authSecret: settings.authSecret ?? keptSecret(place().folder, 'auth-secret', longSecret),
     knex,
     demoPassword,
     announce: (where) => {

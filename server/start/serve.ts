@@ -77,6 +77,17 @@ async function listen(server: Server, settings: Settings): Promise<number> {
   }
 }
 
+/**
+ * Tells early that the port asked for is taken, before the work of a first start.
+ * @throws {StartError}
+ */
+export async function assertPortFree(settings: Settings): Promise<void> {
+  if (settings.port === null) return;
+  const probe = createServer();
+  await listen(probe, settings);
+  await stopServer(probe);
+}
+
 function stopServer(server: Server): Promise<void> {
   return new Promise((resolve) => {
     const late = setTimeout(() => {
@@ -96,7 +107,8 @@ export async function serve(options: {
   readonly databaseUrl: string;
   readonly authSecret: string;
   readonly knex: Knex;
-  readonly clientFolder: string;
+  /** Null where something else serves the client. */
+  readonly clientFolder: string | null;
 }): Promise<Running> {
   const { settings, databaseUrl, authSecret, knex, clientFolder } = options;
   const server = createServer();

@@ -1,0 +1,25 @@
+import type { Knex } from 'knex';
+import { hashPassword, isPassword } from '../account/passwords.ts';
+import { keepPassword, personByEmail } from '../account/store.ts';
+
+/** The accounts of the demo workshop, one for each role. */
+export const demoAddresses: readonly string[] = ['owner', 'designer', 'builder', 'technician'].map(
+  (role) => `${role}@marrowfen.example`,
+);
+
+/**
+ * Sees to it that the demo accounts have the password that the start prints, also where they were made under another:
+ * DEMO_PASSWORD may have changed since, or the database come from elsewhere.
+ * @returns the addresses whose password was set
+ */
+export async function alignDemoPassword(knex: Knex, password: string): Promise<string[]> {
+  const changed = await Promise.all(
+    demoAddresses.map(async (address) => {
+      const person = await personByEmail(knex, address);
+      if (person === null || (await isPassword(password, person.passwordHash))) return [];
+      await keepPassword(knex, person, await hashPassword(password));
+      return [address];
+    }),
+  );
+  return changed.flat();
+}

@@ -1,0 +1,42 @@
+import { type Shape } from '#geometry/shapes/shape.ts';
+
+/** When a step was taken: whole days before the day of filling in, and the time of that day in UTC. */
+export interface Moment {
+  readonly daysAgo: number;
+  readonly time: `${number}:${number}`;
+}
+
+interface Signed {
+  readonly at: Moment;
+  readonly by: 'owner' | 'designer';
+}
+
+/** What happened to a section, in order. */
+export type Step = Signed &
+  (
+    | { readonly did: 'save'; readonly shape: Shape; readonly note: string }
+    | { readonly did: 'release' | 'withdraw'; readonly version: number; readonly reason: string }
+    | { readonly did: 'archive' }
+    | { readonly did: 'keep draft'; readonly shape: Shape; readonly chordMm: number }
+  );
+
+export interface History {
+  readonly name: string;
+  readonly purpose: string;
+  readonly steps: readonly [Step & { readonly did: 'save' }, ...Step[]];
+}
+
+type By = Signed['by'];
+type Time = Moment['time'];
+
+export function save(daysAgo: number, time: Time, by: By, shape: Shape, note: string) {
+  return { did: 'save', at: { daysAgo, time }, by, shape, note } as const;
+}
+
+export function release(daysAgo: number, time: Time, by: By, version: number, reason: string) {
+  return { did: 'release', at: { daysAgo, time }, by, version, reason } as const;
+}
+
+export function withdraw(daysAgo: number, time: Time, by: By, version: number, reason: string) {
+  return { did: 'withdraw', at: { daysAgo, time }, by, version, reason } as const;
+}
