@@ -3,6 +3,7 @@ import * as workshopsAndPeople from './0001_workshops_and_people.ts';
 import * as sectionsAndVersions from './0002_sections_and_versions.ts';
 import * as immutableVersions from './0003_immutable_versions.ts';
 import * as downloads from './0004_downloads.ts';
+import * as sessionEpoch from './0005_session_epoch.ts';
 
 /** Every migration under the name it is remembered by; a name that has been released never changes. */
 export const migrations: Readonly<Record<string, Knex.Migration>> = {
@@ -10,4 +11,5 @@ export const migrations: Readonly<Record<string, Knex.Migration>> = {
   '0002_sections_and_versions': sectionsAndVersions,
   '0003_immutable_versions': immutableVersions,
   '0004_downloads': downloads,
+  '0005_session_epoch': sessionEpoch,
 };

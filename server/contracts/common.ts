@@ -39,7 +39,7 @@ export function pageOf<Item extends z.ZodType>(item: Item) {
 }
 
 /** Page position and size; the cursor is opaque and comes from `nextCursor`. */
-export const pageQuerySchema = z.object({
+export const pageQuerySchema = z.strictObject({
   cursor: z.string().max(500).optional(),
   limit: z.coerce.number().int().min(1).max(100).default(30),
 });

@@ -120,4 +120,5 @@ export const downloadSchema = z.object({
   checksum: z.string(),
   at: timeSchema,
 });
+export type Download = z.infer<typeof downloadSchema>;
 export const downloadPageSchema = pageOf(downloadSchema);

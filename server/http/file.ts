@@ -1,0 +1,26 @@
+import { createHash } from 'node:crypto';
+import { type Request, type Response } from 'express';
+import { type FileReply } from './handlers.ts';
+
+/**
+ * Sends a cut file with its name, type and sum. The entity tag is the SHA-256 of the very bytes, which must therefore
+ * reach the machine as they are: no compression on the way. What is still the same is answered with 304; that and HEAD
+ * hand out no bytes and are not recorded.
+ */
+export async function sendFile(request: Request, response: Response, reply: FileReply): Promise<void> {
+  const { file } = reply;
+  const bytes = Buffer.from(file.text, 'utf8');
+  const checksum = createHash('sha256').update(bytes).digest('hex');
+  response.attachment(file.fileName);
+  response.set({
+    'Content-Type': file.mediaType,
+    'Cache-Control': 'private, no-cache, no-transform',
+    ETag: `"${checksum}"`,
+    'X-Checksum-Sha256': checksum,
+  });
+  if (request.fresh) return void response.status(304).end();
+  response.set('Content-Length', String(bytes.length));
+  if (request.method === 'HEAD') return void response.end();
+  await reply.record(checksum);
+  response.end(bytes);
+}

@@ -1,0 +1,88 @@
+import { canonicalShape, type Shape } from '#geometry/shapes/shape.ts';
+import { may, type Role } from '#server/contracts/permissions.ts';
+import { type VersionStatus } from '#server/contracts/sections.ts';
+import { Refusal, refuseField } from '#server/refusal.ts';
+
+/** Who acts, in which workshop, and when: what every change is signed with. */
+export interface Author {
+  readonly workshopId: string;
+  readonly personId: string;
+  readonly at: Date;
+}
+
+/** How far somebody sees: every section and version, or only what is or was released. */
+export type Reach = 'all' | 'released';
+
+export function reachOf(role: Role): Reach {
+  return may(role, 'sections.read') ? 'all' : 'released';
+}
+
+/** The statuses within reach. */
+export function statusesFor(reach: Reach): readonly VersionStatus[] {
+  return reach === 'all'
+    ? ['draft', 'released', 'superseded', 'withdrawn']
+    : ['released', 'superseded', 'withdrawn'];
+}
+
+/** Where a save would go, as it is known under the lock. */
+export interface SaveTarget {
+  readonly latestNumber: number;
+  readonly archived: boolean;
+  /** The shape of the version that the save is based on; null when there is none of that number. */
+  readonly base: Shape | null;
+}
+
+/**
+ * Whether a version may be saved now.
+ * @returns `conflict` when another version came in between
+ * @throws Refusal `archived`, or `invalid` for a base that does not exist or a shape that changes nothing and says nothing
+ */
+export function checkSave(
+  target: SaveTarget,
+  offered: { basedOn: number; shape: Shape; note: string },
+): 'save' | 'conflict' {
+  if (target.archived) throw archived();
+  if (offered.basedOn > target.latestNumber) {
+    throw refuseField(
+      'basedOn',
+      `There is no version ${offered.basedOn}; the newest is ${target.latestNumber}.`,
+    );
+  }
+  if (offered.basedOn < target.latestNumber) return 'conflict';
+  const isSame = target.base !== null && canonicalShape(target.base) === canonicalShape(offered.shape);
+  if (isSame && offered.note === '') {
+    throw refuseField(
+      'shape',
+      `Nothing changed since version ${offered.basedOn}; a note would be a reason to save it.`,
+    );
+  }
+  return 'save';
+}
+
+export function archived(): Refusal {
+  return new Refusal('archived', { detail: 'Take the section back from the archive first.' });
+}
+
+const sentences: Readonly<Record<VersionStatus, string>> = {
+  draft: 'was never released',
+  released: 'is released already',
+  superseded: 'was superseded by a later release',
+  withdrawn: 'was withdrawn',
+};
+
+/**
+ * Whether a version may take a new status: from draft to released, from released to superseded or withdrawn.
+ * @throws Refusal `status-conflict` with a sentence that says how the version stands
+ */
+export function checkTransition(number: number, from: VersionStatus, to: 'released' | 'withdrawn'): void {
+  const needed = to === 'released' ? 'draft' : 'released';
+  if (from === needed) return;
+  const advice =
+    to === 'released' && from !== 'released' ? ' Save its shape as a new version and release that.' : '';
+  throw new Refusal('status-conflict', { detail: `Version ${number} ${sentences[from]}.${advice}` });
+}
+
+/** Whether unsaved work holds nothing beyond what was just saved. */
+export function isSavedWork(draft: Shape, saved: Shape): boolean {
+  return canonicalShape(draft) === canonicalShape(saved);
+}
