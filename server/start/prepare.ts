@@ -129,6 +129,4 @@ export function greet(address: string, begun: number, demoPassword: string | nul
   console.log(`\nRibwright is ready at ${address} (after ${took} s). Ctrl-C ends it.`);
   if (demoPassword === null) return;
   console.log(`\nDemo accounts, all with the password ${demoPassword}`);
-  for (const role of ['owner', 'designer', 'builder', 'technician'])
-    console.log(`  ${role}@marrowfen.example`);
-}
+  for (const address of demoAddresses) console.log(`  ${address}`);
