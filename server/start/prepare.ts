@@ -130,3 +130,4 @@ export function greet(address: string, begun: number, demoPassword: string | nul
   if (demoPassword === null) return;
   console.log(`\nDemo accounts, all with the password ${demoPassword}`);
   for (const address of demoAddresses) console.log(`  ${address}`);
+}
