@@ -5,7 +5,7 @@ import { ProblemError } from './api/request.ts';
 import { NotFound } from './app/not-found.tsx';
 import { RouteError } from './app/route-error.tsx';
 import { startOf } from './app/session.tsx';
-import { Shell, ShellSkeleton } from './app/shell.tsx';
+import { ShellSkeleton } from './app/shell-skeleton.tsx';
 
 /** The screens. Each is a chunk of its own, loaded with its route. */
 export function routesOf(client: QueryClient): RouteObject[] {
@@ -31,7 +31,7 @@ export function routesOf(client: QueryClient): RouteObject[] {
     {
       loader: requireSession,
       shouldRevalidate: () => false,
-      Component: Shell,
+      lazy: { Component: async () => (await import('./app/shell.tsx')).Shell },
       HydrateFallback: ShellSkeleton,
       ErrorBoundary: RouteError,
       children: [

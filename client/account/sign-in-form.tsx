@@ -14,7 +14,7 @@ export interface SignInFormProps {
   onSignedIn: () => Promise<void>;
 }
 
-export function SignInForm({ email = '', onSignedIn }: SignInFormProps) {
+export default function SignInForm({ email = '', onSignedIn }: SignInFormProps) {
   const form = useForm({
     resolver: zodResolver(signInSchema),
     defaultValues: { email, password: '' },

@@ -3,7 +3,7 @@ import { useNavigate, useSearchParams } from 'react-router';
 import { meQuery } from '#client/api/me.ts';
 import { Mark } from '#client/app/mark.tsx';
 import { returnPath } from '#client/app/session.tsx';
-import { SignInForm } from './sign-in-form.tsx';
+import SignInForm from './sign-in-form.tsx';
 
 export function Component() {
   const navigate = useNavigate();

@@ -1,10 +1,8 @@
 import { useEffect, useState } from 'react';
 import { Outlet, ScrollRestoration } from 'react-router';
 import { Announcer } from '#client/ui/announcer.tsx';
-import { Skeleton } from '#client/ui/skeleton.tsx';
 import { KeysDialog } from './keys-dialog.tsx';
 import { KeysProvider, useHotkey } from './keys.tsx';
-import { Mark } from './mark.tsx';
 import { useOnline } from './online.ts';
 import { useMe } from './session.tsx';
 import { SignInAgain } from './sign-in-again.tsx';
@@ -68,19 +66,5 @@ function OfflineNote() {
       No network. What is on the screen was loaded before; changes are sent when the network is back and you
       try again.
     </p>
-  );
-}
-
-/** Holds the place of the shell while the session is read. */
-export function ShellSkeleton() {
-  return (
-    <div
-      className="flex h-11 items-center gap-5 border-b border-rule px-4 pointer-coarse:h-13"
-      aria-busy="true"
-    >
-      <Mark />
-      <span className="sr-only">Loading</span>
-      <Skeleton className="ml-auto h-8 w-32" />
-    </div>
   );
 }

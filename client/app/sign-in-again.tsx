@@ -1,10 +1,11 @@
 import { useQueryClient } from '@tanstack/react-query';
-import { useEffect, useState } from 'react';
+import { lazy, Suspense, useEffect, useState } from 'react';
 import { meQuery } from '#client/api/me.ts';
 import { onSessionEnd, request } from '#client/api/request.ts';
-import { SignInForm } from '#client/account/sign-in-form.tsx';
 import { Dialog } from '#client/ui/dialog.tsx';
 import { useMe } from './session.tsx';
+
+const SignInForm = lazy(() => import('#client/account/sign-in-form.tsx'));
 
 /**
  * When the session ends under an open screen, asks to sign in again over it: what was typed stays where it is.
@@ -36,7 +37,9 @@ export function SignInAgain() {
   return (
     <Dialog title="Sign in again" width="narrow" modalOnly onClose={() => undefined}>
       <p className="mb-4">Your session has ended. What is on the screen stays as it is; sign in to go on.</p>
-      <SignInForm email={me.email} onSignedIn={goOn} />
+      <Suspense>
+        <SignInForm email={me.email} onSignedIn={goOn} />
+      </Suspense>
     </Dialog>
   );
 }

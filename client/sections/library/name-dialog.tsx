@@ -12,7 +12,7 @@ import { type Section } from '#server/contracts/sections.ts';
 
 const nameFormSchema = z.object({ name: sectionNameSchema, purpose: purposeSchema });
 
-export function NameDialog({ section, onClose }: { section: Section; onClose: () => void }) {
+export default function NameDialog({ section, onClose }: { section: Section; onClose: () => void }) {
   const change = useChangeSection(section.id);
   const form = useForm({
     resolver: zodResolver(nameFormSchema),

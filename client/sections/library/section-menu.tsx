@@ -1,12 +1,13 @@
-import { useState } from 'react';
+import { lazy, Suspense, useState } from 'react';
 import { useNavigate } from 'react-router';
 import { useChangeSection } from '#client/api/sections.ts';
 import { sentenceOf } from '#client/ui/error-state.tsx';
 import { Menu, MenuItem, MenuRule } from '#client/ui/menu.tsx';
 import { type Section } from '#server/contracts/sections.ts';
-import { NameDialog } from './name-dialog.tsx';
 import { useLibraryNotice } from './library-notice.tsx';
 import { sectionPath } from './section-words.tsx';
+
+const NameDialog = lazy(() => import('./name-dialog.tsx'));
 
 /** What can be done with a section of the library, besides opening it. */
 export function SectionMenu({ section }: { section: Section }) {
@@ -47,12 +48,14 @@ export function SectionMenu({ section }: { section: Section }) {
         </MenuItem>
       </Menu>
       {renames && (
-        <NameDialog
-          section={section}
-          onClose={() => {
-            setRenames(false);
-          }}
-        />
+        <Suspense>
+          <NameDialog
+            section={section}
+            onClose={() => {
+              setRenames(false);
+            }}
+          />
+        </Suspense>
       )}
     </>
   );
