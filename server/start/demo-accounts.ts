@@ -1,11 +1,10 @@
 import type { Knex } from 'knex';
 import { hashPassword, isPassword } from '../account/passwords.ts';
 import { keepPassword, personByEmail } from '../account/store.ts';
+import { demoEmail, demoPeople } from './demo/people.ts';
 
 /** The accounts of the demo workshop, one for each role. */
-export const demoAddresses: readonly string[] = ['owner', 'designer', 'builder', 'technician'].map(
-  (role) => `${role}@marrowfen.example`,
-);
+export const demoAddresses: readonly string[] = demoPeople.map(({ role }) => demoEmail(role));
 
 /**
  * Sees to it that the demo accounts have the password that the start prints, also where they were made under another:
