@@ -1,0 +1,112 @@
+import { z } from 'zod';
+
+/** The layers of a drawing, in the order in which they are written. */
+export const LAYERS = ['OUTLINE', 'CHORD', 'CAMBER', 'TEXT'] as const;
+export type Layer = (typeof LAYERS)[number];
+
+/** Query strings and form fields carry text: numbers in plain decimal notation become numbers, an empty field is an absent one. */
+function typed(value: unknown): unknown {
+  if (typeof value !== 'string') return value;
+  const text = value.trim();
+  if (text === '') return undefined;
+  return /^[+-]?(\d+\.?\d*|\.\d+)$/.test(text) ? Number(text) : text;
+}
+
+function numberBetween(field: string, least: number, most: number, unit: string) {
+  const error = `${field} must be a number from ${least} to ${most}${unit}`;
+  return z.number({ error }).min(least, { error }).max(most, { error });
+}
+
+function wholeBetween(field: string, least: number, most: number) {
+  const error = `${field} must be a whole number from ${least} to ${most}`;
+  return z.int({ error }).min(least, { error }).max(most, { error });
+}
+
+function choice<const T extends readonly [string, ...string[]]>(
+  field: string,
+  values: T,
+  fallback: T[number],
+) {
+  const error = `${field} must be one of ${values.join(', ')}`;
+  return z.preprocess(
+    (value) => (value === '' ? undefined : value),
+    z.enum(values, { error }).default(() => fallback),
+  );
+}
+
+const chord = numberBetween('chordMm', 10, 5000, ' mm');
+const tolerance = numberBetween('toleranceMm', 0.001, 1, ' mm');
+const chordMm = z.preprocess(typed, chord);
+const toleranceMm = z.preprocess(typed, tolerance.default(0.01));
+
+const LAYERS_ERROR = `layers must be a comma list of ${LAYERS.join(', ')}`;
+
+/** A comma list of layers, or an array of them; written in the order of {@link LAYERS}, each once. */
+const layers = z.preprocess(
+  (value) => {
+    if (typeof value !== 'string') return value;
+    return value.trim() === '' ? undefined : value.split(',').map((name) => name.trim().toUpperCase());
+  },
+  z
+    .array(z.enum(LAYERS, { error: LAYERS_ERROR }), {
+      error: LAYERS_ERROR,
+    })
+    .min(1, { error: 'layers must name at least one layer' })
+    .default([...LAYERS])
+    .transform((chosen): readonly Layer[] => LAYERS.filter((layer) => chosen.includes(layer))),
+);
+
+const TRUTH: Readonly<Record<string, boolean | undefined>> = {
+  true: true,
+  on: true,
+  '1': true,
+  false: false,
+  off: false,
+  '0': false,
+};
+const arcs = z.preprocess(
+  (value) =>
+    typeof value === 'string' ? (value.trim() === '' ? undefined : (TRUTH[value.trim()] ?? value)) : value,
+  z.boolean({ error: 'arcs must be true or false' }).default(false),
+);
+
+function optionsObject<T extends z.ZodRawShape>(shape: T) {
+  return z.strictObject(shape, {
+    error: (issue) =>
+      issue.code === 'unrecognized_keys'
+        ? `unknown option ${issue.keys.join(', ')}; the options are ${Object.keys(shape).join(', ')}`
+        : undefined,
+  });
+}
+
+/**
+ * Options of a coordinate file. `points` (per surface, nose and trailing edge counted) is used with cosine spacing,
+ * `toleranceMm` with spacing to a tolerance, which needs `chordMm`. Without `chordMm` the coordinates are fractions of chord.
+ */
+export const datOptionsSchema = optionsObject({
+  points: z.preprocess(typed, wholeBetween('points', 10, 1000).default(100)),
+  chordMm: z.preprocess(typed, chord.optional()),
+  order: choice('order', ['round', 'surfaces'], 'round'),
+  decimals: z.preprocess(typed, wholeBetween('decimals', 4, 10).default(6)),
+  newline: choice('newline', ['lf', 'crlf'], 'lf'),
+  spacing: choice('spacing', ['cosine', 'tolerance'], 'cosine'),
+  toleranceMm,
+}).refine((options) => options.spacing === 'cosine' || options.chordMm !== undefined, {
+  path: ['chordMm'],
+  error: 'chordMm is needed for spacing to a tolerance in mm',
+});
+export type DatOptions = z.output<typeof datOptionsSchema>;
+
+/** Options of a DXF drawing, always in mm. `arcs`: the outline as tangent arcs within the tolerance instead of straight pieces. */
+export const dxfOptionsSchema = optionsObject({
+  chordMm,
+  toleranceMm,
+  release: choice('release', ['r12', 'r2000'], 'r2000'),
+  layers,
+  arcs,
+});
+export type DxfOptions = z.output<typeof dxfOptionsSchema>;
+
+/** Options of an SVG drawing at true size. */
+export const svgOptionsSchema = optionsObject({ chordMm, toleranceMm, layers });
+export type SvgOptions = z.output<typeof svgOptionsSchema>;
