@@ -26,7 +26,7 @@ export function Standing({ version, inForce }: StandingProps) {
     case 'superseded':
       return (
         <Line className="border-amber">
-          Superseded{since}: do not cut from this version any more.{reason} {instead}
+          Superseded{since}: do not cut from this version any more. {instead}
         </Line>
       );
     case 'withdrawn':

@@ -1,4 +1,4 @@
-import { type AccountRole } from '#server/account/store.ts';
+import { type AccountRole } from '#server/account/person.ts';
 
 export const demoWorkshop = 'Marrow Fen Works';
 

@@ -44,9 +44,18 @@ export async function seedDemo(knex: Knex, password: string, now: Date = new Dat
 }
 
 /** Takes the steps of a section one after the other, through the same stores that people use. */
-async function live(db: Knex, { name, purpose, steps }: History, author: (step: Step) => Author): Promise<void> {
+async function live(
+  db: Knex,
+  { name, purpose, steps }: History,
+  author: (step: Step) => Author,
+): Promise<void> {
   const [first, ...later] = steps;
-  const { id } = await createSection(db, author(first), { name, purpose, shape: first.shape, note: first.note });
+  const { id } = await createSection(db, author(first), {
+    name,
+    purpose,
+    shape: first.shape,
+    note: first.note,
+  });
   let newest = 1;
   for (const step of later) {
     await take(db, id, newest, step, author(step));
@@ -54,7 +63,13 @@ async function live(db: Knex, { name, purpose, steps }: History, author: (step: 
   }
 }
 
-async function take(db: Knex, sectionId: string, newest: number, step: Step, author: Author): Promise<unknown> {
+async function take(
+  db: Knex,
+  sectionId: string,
+  newest: number,
+  step: Step,
+  author: Author,
+): Promise<unknown> {
   switch (step.did) {
     case 'save':
       return saveVersion(db, author, sectionId, { basedOn: newest, shape: step.shape, note: step.note });

@@ -34,15 +34,15 @@ function symmetrical(upper: Weights, trailingEdgeGap: number): CstShape {
 
 /** Free-form shapes of the demo workshop: made up here by editing weights, for one purpose each. */
 export const freeForms = {
-  /** Straight underside behind the first eighth of the chord, so that the panel lies flat on the bench. */
+  /** Underside straight within 0.1 % of chord behind the first fifth, so that the panel lies flat on the bench. */
   flatBottomFirst: freeForm(
     [0.2, 0.19, 0.25, 0.18, 0.21, 0.19, 0.2],
-    [-0.134, -0.033, -0.088, -0.013, -0.063, -0.026, -0.037],
+    [-0.164, 0.002, -0.135, 0.034, -0.097, -0.009, -0.043],
     0.004,
   ),
   flatBottom: freeForm(
     [0.215, 0.21, 0.265, 0.19, 0.22, 0.2, 0.21],
-    [-0.134, -0.033, -0.088, -0.013, -0.063, -0.026, -0.037],
+    [-0.164, 0.002, -0.135, 0.034, -0.097, -0.009, -0.043],
     0.006,
   ),
   /** Mean line turned up towards the trailing edge, for a wing without a tail. */
@@ -69,5 +69,9 @@ export const freeForms = {
   ),
   /** Deep enough at the spar for a tube of 40 mm. */
   thickRoot: freeForm([0.27, 0.29, 0.31, 0.28, 0.27], [-0.27, -0.21, -0.22, -0.2, -0.17], 0.004),
-  thickRootBlunter: freeForm([0.285, 0.295, 0.31, 0.28, 0.275], [-0.285, -0.225, -0.23, -0.205, -0.18], 0.004),
+  thickRootBlunter: freeForm(
+    [0.285, 0.295, 0.31, 0.28, 0.275],
+    [-0.285, -0.225, -0.23, -0.205, -0.18],
+    0.004,
+  ),
 } as const;

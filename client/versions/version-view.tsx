@@ -1,0 +1,161 @@
+import { useMemo, useState } from 'react';
+import { Link, useSearchParams } from 'react-router';
+import { measure } from '#geometry/contour/measures.ts';
+import { outlineOf } from '#geometry/shapes/shape.ts';
+import { type Section, type SectionVersion } from '#server/contracts/sections.ts';
+import { useMay, useMe } from '#client/app/session.tsx';
+import { useUnits } from '#client/app/units.ts';
+import { StaticSheet, type TitleBlockFields } from '#client/drawing/static-sheet.tsx';
+import { Button } from '#client/ui/button.tsx';
+import { QuantityField } from '#client/ui/quantity-field.tsx';
+import { StatusMark } from '#client/ui/status-mark.tsx';
+import { DownloadsList } from './downloads-list.tsx';
+import { ExportPanel } from './export-panel.tsx';
+import { MeasuredValues } from './measured-values.tsx';
+import { Part } from './part.tsx';
+import { ReleaseDialog, WithdrawDialog } from './release-dialog.tsx';
+import { ShapeValues } from './shape-values.tsx';
+import { Standing } from './standing.tsx';
+import { VersionRecord } from './version-record.tsx';
+
+interface VersionViewProps {
+  readonly version: SectionVersion;
+  /** The section it belongs to, or null while that is not known. */
+  readonly section: Section | null;
+}
+type OpenDialog = 'export' | 'release' | 'withdraw' | null;
+
+/** One immutable version: its drawing, what it measures, who made it and why, its standing and its files. */
+export function VersionView({ version, section }: VersionViewProps) {
+  const [open, setOpen] = useState<OpenDialog>(null);
+  const [chordMm, setChordMm] = useChord();
+  const units = useUnits();
+  const owner = useMe().workshop.name;
+  const measures = useMemo(() => measure(outlineOf(version.shape)), [version.shape]);
+  const close = () => setOpen(null);
+  return (
+    <div className="grid flex-1 lg:grid-cols-[minmax(0,1fr)_22rem] print:block">
+      <title>{`${version.sectionName} v${version.number} · Ribwright`}</title>
+      <div className="flex min-w-0 flex-col gap-3 p-4">
+        <Head version={version} onOpen={setOpen} />
+        <Standing version={version} inForce={section ? section.releasedNumber : undefined} />
+        <StaticSheet shape={version.shape} chordMm={chordMm} title={titleOf(version, owner)} />
+      </div>
+      <aside
+        className="flex flex-col gap-5 border-t border-rule p-4 lg:border-t-0 lg:border-l print:hidden"
+        aria-label="About this version"
+      >
+        <Part title="Shape">
+          <QuantityField
+            label="Chord shown"
+            kind="length"
+            chordMm={chordMm}
+            value={chordMm}
+            min={10}
+            max={5000}
+            decimals={2}
+            onCommit={setChordMm}
+          />
+          <ShapeValues shape={version.shape} chordMm={chordMm} units={units} />
+        </Part>
+        <Part title="Measured on the contour">
+          <MeasuredValues measures={measures} chordMm={chordMm} units={units} />
+        </Part>
+        <Part title="Record">
+          <VersionRecord version={version} />
+        </Part>
+        <Downloads version={version} />
+      </aside>
+      {open === 'export' && <ExportPanel version={version} chordMm={chordMm} onClose={close} />}
+      {open === 'release' && <ReleaseDialog version={version} onClose={close} />}
+      {open === 'withdraw' && <WithdrawDialog version={version} onClose={close} />}
+    </div>
+  );
+}
+
+function titleOf(version: SectionVersion, owner: string): TitleBlockFields {
+  return {
+    title: version.sectionName,
+    designation: version.description,
+    version: String(version.number),
+    status: version.status,
+    author: version.author.name,
+    date: version.createdAt,
+    checksum: version.checksum,
+    owner,
+  };
+}
+
+function Head({
+  version,
+  onOpen,
+}: {
+  readonly version: SectionVersion;
+  readonly onOpen: (dialog: OpenDialog) => void;
+}) {
+  const mayRelease = useMay('versions.release');
+  const mayDownload = useMay('files.download');
+  const size = useMay('sections.read') ? 'normal' : 'large';
+  return (
+    <header className="flex flex-wrap items-center justify-between gap-x-4 gap-y-2 print:hidden">
+      <div className="flex min-w-0 flex-wrap items-baseline gap-x-3">
+        <h1 className="min-w-0 text-xl font-extrabold break-words">
+          <Link className="hover:underline" to={`/sections/${version.sectionId}`}>
+            {version.sectionName}
+          </Link>{' '}
+          v{version.number}
+        </h1>
+        <span className="text-graphite">{version.description}</span>
+        <StatusMark status={version.status} />
+      </div>
+      <div className="flex flex-wrap gap-2">
+        <Button size={size} onClick={() => window.print()}>
+          Print
+        </Button>
+        {mayRelease && version.status === 'released' && (
+          <Button size={size} variant="danger" onClick={() => onOpen('withdraw')}>
+            Withdraw…
+          </Button>
+        )}
+        {mayRelease && version.status === 'draft' && (
+          <Button size={size} onClick={() => onOpen('release')}>
+            Release…
+          </Button>
+        )}
+        {mayDownload && (
+          <Button size={size} variant="primary" onClick={() => onOpen('export')}>
+            Export…
+          </Button>
+        )}
+      </div>
+    </header>
+  );
+}
+
+function Downloads({ version }: { readonly version: SectionVersion }) {
+  if (!useMay('downloads.read')) return null;
+  return (
+    <Part title="Downloads">
+      <DownloadsList sectionId={version.sectionId} number={version.number} />
+    </Part>
+  );
+}
+
+const FIRST_CHORD_MM = 220;
+
+/** The chord that the sheet is drawn at, kept in the address so that a link shows the same sheet. */
+function useChord(): readonly [number, (chordMm: number) => void] {
+  const [search, setSearch] = useSearchParams();
+  const asked = Number(search.get('chord') ?? Number.NaN);
+  const chordMm = asked >= 10 && asked <= 5000 ? asked : FIRST_CHORD_MM;
+  const setChord = (next: number) => {
+    setSearch(
+      (before) => {
+        before.set('chord', String(next));
+        return before;
+      },
+      { replace: true },
+    );
+  };
+  return [chordMm, setChord];
+}

@@ -1,0 +1,148 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { measure } from '#geometry/contour/measures.ts';
+import { camberAt, thicknessAt } from '#geometry/contour/thickness.ts';
+import { checkShape, outlineOf } from '#geometry/shapes/shape.ts';
+import { personByEmail } from '#server/account/store.ts';
+import { isPassword } from '#server/account/passwords.ts';
+import { versionStatuses } from '#server/contracts/sections.ts';
+import { demoEmail, demoPeople, demoWorkshop } from '#server/start/demo/people.ts';
+import { demoSections } from '#server/start/demo/sections.ts';
+import { freeForms } from '#server/start/demo/shapes.ts';
+import { isEmpty, seedDemo } from '#server/start/demo/seed.ts';
+import { createTestDatabase, type TestDatabase } from '#tests/database.ts';
+
+const now = new Date('2026-12-01T07:30:00.000Z');
+const password = 'a password for tests';
+let database: TestDatabase;
+
+beforeAll(async () => {
+  database = await createTestDatabase();
+});
+afterAll(() => database.drop());
+
+/** Everything but ids and password hashes. */
+async function contents({ knex }: TestDatabase) {
+  const versions: unknown[] = await knex('section_versions as v')
+    .join('sections as s', 's.id', 'v.section_id')
+    .join('people as p', 'p.id', 'v.author_id')
+    .select(
+      's.name',
+      'v.number',
+      'v.status',
+      'v.checksum',
+      'v.note',
+      'v.created_at',
+      'v.status_at',
+      'p.email',
+    )
+    .orderBy(['s.name', 'v.number']);
+  const sections: unknown[] = await knex('sections')
+    .select('name', 'purpose', 'latest_status', 'released_number', 'updated_at', 'archived_at')
+    .orderBy('name');
+  return { versions, sections };
+}
+
+describe('the demo workshop', () => {
+  it('fills an empty database, and says whether it is empty', async () => {
+    expect(await isEmpty(database.knex)).toBe(true);
+    await seedDemo(database.knex, password, now);
+    expect(await isEmpty(database.knex)).toBe(false);
+  });
+
+  it('has a person of each role who signs in with the password', async () => {
+    for (const { role, name } of demoPeople) {
+      const person = await personByEmail(database.knex, demoEmail(role));
+      expect(person).toMatchObject({ role, name, workshopName: demoWorkshop, active: true });
+      expect(await isPassword(password, person?.passwordHash ?? null)).toBe(true);
+    }
+  });
+
+  it('shows every status, an archived section and one that nothing of is in force', async () => {
+    const { versions, sections } = await contents(database);
+    const statuses = (versions as { status: string }[]).map(({ status }) => status);
+    expect(new Set(statuses)).toEqual(new Set(versionStatuses));
+    expect(statuses.filter((status) => status === 'withdrawn')).toHaveLength(1);
+    expect(sections).toHaveLength(demoSections.length);
+    expect((sections as { archived_at: unknown }[]).filter((row) => row.archived_at !== null)).toHaveLength(
+      1,
+    );
+    expect((sections as { latest_status: string }[]).map((row) => row.latest_status)).toContain('withdrawn');
+    expect(await database.knex('section_drafts')).toHaveLength(1);
+  });
+
+  it('happened before now, each section in the order told', async () => {
+    const { versions } = await contents(database);
+    const times = versions as { created_at: Date; status_at: Date | null }[];
+    for (const { created_at, status_at } of times) {
+      expect(created_at.getTime()).toBeLessThan(now.getTime());
+      if (status_at) expect(status_at.getTime()).toBeGreaterThan(created_at.getTime());
+    }
+    for (const { name, steps } of demoSections) {
+      const order = steps.map(({ at }) => -at.daysAgo * 1440 + minutesOf(at.time));
+      expect(order, name).toEqual([...order].sort((a, b) => a - b));
+    }
+  });
+
+  it('is the same each time for the same moment', async () => {
+    const other = await createTestDatabase();
+    try {
+      await seedDemo(other.knex, 'another password', now);
+      expect(await contents(other)).toEqual(await contents(database));
+    } finally {
+      await other.drop();
+    }
+  });
+
+  it('leaves nothing behind when it cannot be filled in', async () => {
+    const before = await contents(database);
+    await expect(seedDemo(database.knex, password, now)).rejects.toThrow(/Duplicate/);
+    expect(await contents(database)).toEqual(before);
+    expect(await database.knex('workshops')).toHaveLength(1);
+  });
+});
+
+function minutesOf(time: string): number {
+  const [hours = 0, minutes = 0] = time.split(':').map(Number);
+  return hours * 60 + minutes;
+}
+
+describe('the demo shapes', () => {
+  const shapes = demoSections.flatMap(({ name, steps }) =>
+    steps.flatMap((step) => ('shape' in step ? [{ name, shape: step.shape }] : [])),
+  );
+
+  it('are valid, of plausible thickness and camber, and smooth', () => {
+    expect(shapes.length).toBeGreaterThan(30);
+    for (const { name, shape } of shapes) {
+      expect(checkShape(shape), name).toEqual(shape);
+      const measures = measure(outlineOf(shape));
+      expect(measures.maxThickness, name).toBeGreaterThan(0.055);
+      expect(measures.maxThickness, name).toBeLessThan(0.21);
+      expect(measures.maxThicknessPosition, name).toBeGreaterThan(0.25);
+      expect(measures.maxThicknessPosition, name).toBeLessThan(0.35);
+      expect(measures.maxCamber, name).toBeLessThan(0.05);
+      expect(measures.noseRadius, name).toBeGreaterThan(0.003);
+      // A dent would show as a hollow of small radius; intended ones are wider than the chord.
+      expect(measures.smallestConcaveRadius?.radius ?? Infinity, name).toBeGreaterThan(1);
+    }
+  });
+
+  it('have the traits that they are named for', () => {
+    const of = (shape: keyof typeof freeForms) => {
+      const outline = outlineOf(freeForms[shape]);
+      const lower = (station: number) => camberAt(outline, station) - thicknessAt(outline, station) / 2;
+      return { measures: measure(outline), camber: (station: number) => camberAt(outline, station), lower };
+    };
+    const { lower } = of('flatBottom');
+    for (let station = 0.2; station <= 0.95; station += 0.05) {
+      const line = lower(0.2) + ((lower(0.95) - lower(0.2)) * (station - 0.2)) / 0.75;
+      expect(Math.abs(lower(station) - line), `underside at ${station}`).toBeLessThan(0.001);
+    }
+    expect(of('reflex').camber(0.35)).toBeGreaterThan(0.01);
+    expect(of('reflex').camber(0.9)).toBeLessThan(-0.002);
+    expect(of('highLift').measures.maxCamberPosition).toBeGreaterThan(0.55);
+    expect(of('thinTail').measures.maxThickness).toBeLessThan(0.08);
+    expect(of('fin').measures.maxCamber).toBeCloseTo(0, 12);
+    expect(of('thickRoot').measures.maxThickness * 260).toBeGreaterThan(40 + 2 * 5);
+  });
+});
