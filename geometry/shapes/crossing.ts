@@ -33,14 +33,12 @@ function crossingWithin(
   to: number,
   depth: number,
 ): number | null {
-  const least = Math.min(...weights);
   const gap = shape.trailingEdgeGap;
+  if (isCrossed(shape, weights[0] ?? 0, from)) return from;
+  if (isCrossed(shape, weights.at(-1) ?? 0, to)) return to;
+  const least = Math.min(...weights);
   if (least > 0 || (least === 0 && (gap > 0 || weights.some((weight) => weight > 0)))) return null;
   if (gap > 0 && least * largestClassValue(shape, from, to) + from * gap > 0) return null;
-  const start = weights[0] ?? 0;
-  const end = weights.at(-1) ?? 0;
-  if (thicknessSign(shape, start, from) < 0) return from;
-  if (thicknessSign(shape, end, to) < 0) return to;
   const middle = (from + to) / 2;
   if (depth === DEEPEST || weights.every((weight) => weight === 0)) return middle;
   const { left, right } = halve(weights);
@@ -48,6 +46,12 @@ function crossingWithin(
     crossingWithin(shape, left, from, middle, depth + 1) ??
     crossingWithin(shape, right, middle, to, depth + 1)
   );
+}
+
+/** Negative thickness at a station; between the ends, none at all counts as well. */
+function isCrossed(shape: Gap, difference: number, station: number): boolean {
+  const sign = thicknessSign(shape, difference, station);
+  return sign < 0 || (sign === 0 && station > 0 && station < 1);
 }
 
 /** The sign of the thickness just inside the section at a station: at the ends, where the class function vanishes, of what leads. */

@@ -77,14 +77,14 @@ function classValue(shape: Pick<CstShape, 'n1' | 'n2'>, x: number): number {
  * @throws ShapeError when the stations do not determine the weights
  */
 export function fitWeights(
-  exponents: Pick<CstShape, 'n1' | 'n2'>,
+  { n1, n2 }: Pick<CstShape, 'n1' | 'n2'>,
   order: number,
   stations: Float64Array,
   ordinates: Float64Array,
 ): number[] {
   checkOrder(order);
   const weights = new Array<number>(order + 1).fill(0);
-  const unit: CstShape = { kind: 'cst', upper: weights, lower: weights, trailingEdgeGap: 0, ...exponents };
+  const unit: CstShape = { kind: 'cst', upper: weights, lower: weights, trailingEdgeGap: 0, n1, n2 };
   const columns = weights.map((_, i) => stations.map((x) => weightInfluence(unit, 'upper', i, x)));
   const solution = leastSquares(columns, ordinates);
   if (!solution)

@@ -26,6 +26,7 @@ export const naca4Schema = z
   .refine((shape) => shape.maxCamber === 0 || shape.maxCamberPosition >= NACA4_LIMITS.maxCamberPosition.min, {
     path: ['maxCamberPosition'],
     error: `${outsideChord('maxCamberPosition', NACA4_LIMITS.maxCamberPosition)} when there is camber`,
+    when: ({ issues }) => issues.length === 0,
   });
 
 export type Naca4Shape = Readonly<z.infer<typeof naca4Schema>>;

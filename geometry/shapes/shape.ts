@@ -13,6 +13,7 @@ export type ShapeKind = Shape['kind'];
 export const shapeSchema = z
   .discriminatedUnion('kind', [naca4Schema, cstSchema], { error: 'kind must be "naca4" or "cst"' })
   .superRefine((shape, context) => {
+    if (context.issues.length > 0) return;
     for (const { path, message } of crossings(shape)) {
       context.addIssue({ code: 'custom', path: path.split('.').map(key), message });
     }
