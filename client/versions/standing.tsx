@@ -1,7 +1,6 @@
 import { type ReactNode } from 'react';
 import { Link } from 'react-router';
 import { type SectionVersion } from '#server/contracts/sections.ts';
-import { shortDate } from '#client/app/dates.ts';
 
 interface StandingProps {
   readonly version: SectionVersion;
@@ -9,9 +8,11 @@ interface StandingProps {
   readonly inForce: number | null | undefined;
 }
 
+const DAY = new Intl.DateTimeFormat(undefined, { day: 'numeric', month: 'short', year: 'numeric' });
+
 /** Says in a sentence whether this version may be cut, since when, why, and which one is in force instead. */
 export function Standing({ version, inForce }: StandingProps) {
-  const since = version.statusAt === null ? '' : ` on ${shortDate(version.statusAt)}`;
+  const since = version.statusAt === null ? '' : ` on ${DAY.format(new Date(version.statusAt))}`;
   const by = version.statusBy === null ? '' : ` by ${version.statusBy.name}`;
   const reason = version.statusReason === '' ? '' : ` ${asSentence(version.statusReason)}`;
   const instead = <InForce sectionId={version.sectionId} inForce={inForce} />;
