@@ -95,8 +95,8 @@ describe('the version page', () => {
     const withdrawn = versionOf(2, { status: 'withdrawn', statusReason: 'Spar tube clashes', ...releasedBy });
     open(withdrawn, { section: sectionOf({ releasedNumber: null }) });
     const sentence = await screen.findByText(/No version of this section is in force/);
-    expect(sentence.textContent).toMatch(
-      /^Withdrawn on 12 Nov by Ines Aldam: do not cut it\. Spar tube clashes\./,
+    expect(sentence.textContent).toContain(
+      `Withdrawn on ${DAY} by Ines Aldam: do not cut it. Spar tube clashes.`,
     );
   });
 
