@@ -81,7 +81,8 @@ export async function step(title, work) {
 export function explain(error) {
   const known = typeof error?.advice === 'string';
   const advice = known ? error.advice : adviceFor(error);
-  console.error(`\n${known ? error.message : `The start failed: ${error?.message ?? String(error)}`}`);
+  // Without advice, where it happened is the best help; the stack begins with the message.
+  const what = (advice === undefined && error?.stack) || (error?.message ?? String(error));
+  console.error(known ? `\n${what}` : `\nThe start failed: ${what}`);
   if (advice !== undefined) console.error(advice);
-  else if (error?.stack) console.error(error.stack);
 }
