@@ -1,7 +1,7 @@
 import { spawn, type ChildProcess } from 'node:child_process';
 import { once } from 'node:events';
 import { join, relative } from 'node:path';
-import { createServer, type ViteDevServer } from 'vite';
+import { createServer, type Plugin, type ViteDevServer } from 'vite';
 import { defaultPort } from '../config.ts';
 import { freePort } from './ports.ts';
 import { greet, prepare, type Launch } from './prepare.ts';
@@ -19,11 +19,23 @@ function isReady(child: ChildProcess): Promise<unknown> {
 class AppProcess {
   #child: ChildProcess | undefined;
   #change: Promise<void> = Promise.resolve();
+  #environment: NodeJS.ProcessEnv = {};
 
   constructor(
     private readonly root: string,
-    private readonly environment: NodeJS.ProcessEnv,
+    readonly port: number,
   ) {}
+
+  /** Starts with these settings, for this and every later start. */
+  start(environment: NodeJS.ProcessEnv): Promise<void> {
+    this.#environment = environment;
+    return this.restart();
+  }
+
+  /** Resolves when no restart is under way. */
+  settled(): Promise<void> {
+    return this.#change;
+  }
 
   async #stop(): Promise<void> {
     const child = this.#child;
@@ -36,7 +48,7 @@ class AppProcess {
   async #start(): Promise<void> {
     this.#child = spawn(...tied(process.execPath, ['--import', 'tsx', 'server/main.ts']), {
       cwd: this.root,
-      env: this.environment,
+      env: this.#environment,
       stdio: ['ignore', 'inherit', 'inherit', 'ipc'],
       detached: true,
     });
@@ -52,6 +64,19 @@ class AppProcess {
     this.#change = this.#change.then(() => this.#stop());
     return this.#change;
   }
+}
+
+/** Lets requests wait while the server restarts, instead of failing. */
+function holdBack(app: AppProcess): Plugin {
+  return {
+    name: 'hold-back-during-restart',
+    configureServer: ({ middlewares }) => {
+      middlewares.use((request, _response, next) => {
+        if (!/^\/(api|auth)\//.test(request.url ?? '')) next();
+        else void app.settled().then(() => next());
+      });
+    },
+  };
 }
 
 function restartOnChange(vite: ViteDevServer, root: string, app: AppProcess): void {
@@ -78,10 +103,11 @@ async function startAll(launch: Launch, stops: Stops): Promise<void> {
   const { root, environment } = launch;
   const { settings, databaseUrl, authSecret, knex, demoPassword, announce } = await prepare(launch, stops);
   await knex.destroy();
-  const appPort = await freePort();
-  const target = `http://127.0.0.1:${String(appPort)}`;
+  const app = new AppProcess(root, await freePort());
+  const target = `http://127.0.0.1:${String(app.port)}`;
   const vite = await createServer({
     configFile: join(root, 'vite.config.ts'),
+    plugins: [holdBack(app)],
     server: {
       host: settings.host,
       port: settings.port ?? defaultPort,
@@ -92,17 +118,16 @@ async function startAll(launch: Launch, stops: Stops): Promise<void> {
   await vite.listen();
   stops.add(() => vite.close());
   const address = vite.resolvedUrls?.local[0]?.replace(/\/$/, '') ?? vite.resolvedUrls?.network[0] ?? target;
-  const app = new AppProcess(root, {
+  stops.add(() => app.stop());
+  await app.start({
     ...environment,
     HOST: '127.0.0.1',
-    PORT: String(appPort),
+    PORT: String(app.port),
     DATABASE_URL: databaseUrl,
     AUTH_SECRET: authSecret,
     PUBLIC_URL: settings.publicUrl ?? address,
     DEMO: settings.demo ? '1' : '0',
   });
-  stops.add(() => app.stop());
-  await app.restart();
   restartOnChange(vite, root, app);
   announce(address);
   greet(address, launch.begun, demoPassword);
