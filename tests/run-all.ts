@@ -1,7 +1,6 @@
 import { spawn } from 'node:child_process';
 import { existsSync, mkdirSync, readdirSync, readFileSync, rmSync } from 'node:fs';
 import { join } from 'node:path';
-import { buildClient } from '#server/start/client-build.ts';
 import { chromium, mariadbServer, providePrograms } from '#server/start/packages.ts';
 import { run, tied } from '#server/start/processes.mjs';
 import { step } from '#server/start/steps.mjs';
@@ -127,7 +126,6 @@ export async function runAll(root: string, args: readonly string[]): Promise<Cou
   stops.add(() => server.remove());
   process.env['TEST_DATABASE_URL'] = server.url;
   try {
-    await buildClient(root);
     const count = args.length > 0 ? await vitest(root, 'chosen', args, []) : await checkAll(root);
     for (const reason of count.reasons) console.log(`\n${reason}`);
     console.log(`\nAll of it took ${((performance.now() - begun) / 1000).toFixed(0)} s.`);
