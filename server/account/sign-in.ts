@@ -3,6 +3,7 @@ import Credentials from '@auth/express/providers/credentials';
 import { type Knex } from 'knex';
 import { type Logger } from 'pino';
 import { signInSchema } from '#server/contracts/people.ts';
+import { loggable } from '#server/http/log.ts';
 import { isPassword } from './passwords.ts';
 import { personByEmail } from './store.ts';
 
@@ -26,11 +27,17 @@ async function signedIn(knex: Knex, credentials: unknown): Promise<SignedIn | nu
 /** Wrong credentials and broken cookies are everyday; Auth.js calls them errors. */
 const everyday = new Set(['CredentialsSignin', 'JWTSessionError', 'MissingCSRF']);
 
+/** Auth.js wraps what its callbacks throw. */
+function causeOf(error: Error): unknown {
+  const cause = error.cause as { err?: unknown } | undefined;
+  return cause?.err ?? error;
+}
+
 function authLogger(logger: Logger): NonNullable<ExpressAuthConfig['logger']> {
   return {
     error: (error) => {
       if (everyday.has(error.name)) logger.debug({ kind: error.name }, 'sign-in refused');
-      else logger.error({ err: error }, 'sign-in failed');
+      else logger.error({ problem: loggable(causeOf(error)) }, 'sign-in failed');
     },
     warn: (code) => logger.debug({ code }, 'sign-in warning'),
     debug: () => undefined,

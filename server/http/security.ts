@@ -22,6 +22,7 @@ export function securityHeaders(isHttps: boolean): RequestHandler {
       },
     },
     strictTransportSecurity: isHttps,
+    xFrameOptions: { action: 'deny' },
     referrerPolicy: { policy: 'same-origin' },
   });
 }

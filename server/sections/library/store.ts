@@ -57,7 +57,7 @@ function withVersions(db: Knex, chosen: Knex.QueryBuilder): Knex.QueryBuilder {
   const rows = db.from(chosen.as('s')).select(
     's.*',
     'p.name as shown_by_name',
-    versionColumns.map((column) => `v.${column} as version_${column}`),
+    ...versionColumns.map((column) => `v.${column} as version_${column}`),
   );
   joinScoped(rows, 'inner', ['section_versions', 'v'], 's', [
     ['v.section_id', 's.id'],

@@ -1,0 +1,90 @@
+import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
+import { type Endpoint, type EndpointName, endpoints } from '#server/contracts/endpoints.ts';
+import { startApi, type TestApi, type TestWorkshop } from './support/api.ts';
+import { type Client } from './support/client.ts';
+import { makeSection, requests } from './support/requests.ts';
+import { naca4 } from './support/shapes.ts';
+
+const tables = ['people', 'sections', 'section_versions', 'section_drafts', 'downloads'];
+
+describe('two workshops', () => {
+  let api: TestApi;
+  let marsh: TestWorkshop;
+  let fen: TestWorkshop;
+  let stranger: Client;
+  let member: Client;
+  let sectionId: string;
+
+  beforeAll(async () => {
+    api = await startApi();
+    marsh = await api.addWorkshop('marsh');
+    fen = await api.addWorkshop('fen');
+    stranger = await api.signIn(fen, 'owner');
+    member = await api.signIn(marsh, 'owner');
+  });
+  afterAll(() => api.close());
+  beforeEach(async () => {
+    sectionId = await makeSection(api, marsh);
+  });
+
+  /** Everything that belongs to the first workshop. */
+  const rowsOfMarsh = () =>
+    Promise.all(tables.map((table) => api.knex(table).where({ workshop_id: marsh.id })));
+
+  const withSection = (Object.keys(endpoints) as EndpointName[]).filter((name) => {
+    const endpoint: Endpoint = endpoints[name];
+    return endpoint.params !== undefined;
+  });
+
+  it('covers every route that names a section', () => {
+    const named = Object.values(endpoints).filter(({ path }) => path.includes(':sectionId'));
+    expect(withSection).toHaveLength(named.length);
+    expect(named.length).toBeGreaterThanOrEqual(15);
+  });
+
+  it.each(withSection)('%s finds nothing of another workshop and changes nothing there', async (name) => {
+    const before = await rowsOfMarsh();
+    const foreign = await stranger.call(name, requests[name](sectionId));
+    expect(foreign.status).toBe(404);
+    expect(foreign.problem.code).toBe('not-found');
+    expect(foreign.text).not.toContain('Marsh');
+    expect(await rowsOfMarsh()).toEqual(before);
+    const own = await member.call(name, requests[name](sectionId));
+    expect(own.status).toBeLessThan(300);
+  });
+
+  it('answers for another workshop exactly as for a section that does not exist', async () => {
+    const foreign = await stranger.call('getSection', { params: { sectionId } });
+    const absent = await stranger.call('getSection', {
+      params: { sectionId: '0190a5b0-1111-7222-8333-444455556666' },
+    });
+    const { requestId: _foreign, ...one } = foreign.problem;
+    const { requestId: _absent, ...other } = absent.problem;
+    expect(one).toEqual(other);
+  });
+
+  it('lists only what is of the own workshop, also behind a place of the other one', async () => {
+    const page = await member.call('listSections', { query: { limit: 1 } });
+    expect(page.reply.items).toHaveLength(1);
+    const own = await stranger.call('listSections');
+    expect(own.reply.items).toEqual([]);
+    const cursor = page.reply.nextCursor ?? '';
+    expect(cursor).not.toBe('');
+    const behind = await stranger.call('listSections', { query: { cursor } });
+    expect(behind.reply.items).toEqual([]);
+  });
+
+  it('keeps the idempotency keys of workshops apart', async () => {
+    const key = '3f0e4d5c-1111-4222-8333-444455556666';
+    const body = { name: 'Same key', shape: naca4(), key };
+    const one = await member.call('createSection', { body });
+    const other = await stranger.call('createSection', { body });
+    expect([one.status, other.status]).toEqual([201, 201]);
+    expect(other.reply.id).not.toBe(one.reply.id);
+  });
+
+  it('tells each person of the own workshop only', async () => {
+    expect((await stranger.call('me')).reply.workshop).toEqual({ id: fen.id, name: 'fen' });
+    expect((await member.call('me')).reply.workshop).toEqual({ id: marsh.id, name: 'marsh' });
+  });
+});
