@@ -1,7 +1,6 @@
 import { shapeError } from '../shapes/error.ts';
-import { type Outline } from '../shapes/outline.ts';
-import { stationOf } from '../shapes/outline.ts';
-import { type Side, ordinateAtStation, ordinateOn, sidesOf } from './chord-line.ts';
+import { type Outline, stationOf } from '../shapes/outline.ts';
+import { type Ordinate, ordinateAtStation, sidesOf } from './chord-line.ts';
 
 /**
  * Thickness of the section at a station, square to the chord line: the way it is measured with a height gauge, and the definition of
@@ -45,22 +44,36 @@ export interface Extremes {
 /** Camber below this is rounding: the section is symmetric. */
 const NO_CAMBER = 1e-12;
 const STEPS = 64;
-const STATION_TOLERANCE = 1e-12;
+/** The value is stationary, so its own error is of the order of the square of this. */
+const STATION_TOLERANCE = 1e-10;
+const MOST_STEPS = 90;
 
-/** Weights with which upper and lower ordinate make the quantity. */
-type Combination = readonly [number, number];
+/** Ordinates of both surfaces at one station. */
+interface Cut {
+  readonly station: number;
+  readonly upper: Ordinate;
+  readonly lower: Ordinate;
+}
 
-/** Largest thickness and camber of the true outline: a scan at equal steps of t, then the root of the slope about each high point. */
+/** The combination a · upper + b · lower that is made largest. */
+type Combination = readonly [a: number, b: number];
+
+interface Peak {
+  readonly station: number;
+  readonly value: number;
+  readonly slope: number;
+}
+
+/** Largest thickness and camber of the true outline: a scan of cosine-spaced stations, then the root of the slope about each high point. */
 export function largestThicknessAndCamber(outline: Outline): Extremes {
   const { upper, lower } = sidesOf(outline);
-  const heights = new Float64Array(2 * (STEPS + 1));
-  for (let i = 0; i <= STEPS; i++) {
-    heights[2 * i] = ordinateOn(upper.line, upper.surface.at(i / STEPS));
-    heights[2 * i + 1] = ordinateOn(lower.line, lower.surface.at(i / STEPS));
-  }
-  const thickness = largest(upper, lower, heights, [1, -1]);
-  const above = largest(upper, lower, heights, [0.5, 0.5]);
-  const below = largest(upper, lower, heights, [-0.5, -0.5]);
+  const cut = (station: number): Cut => {
+    return { station, upper: ordinateAtStation(upper, station), lower: ordinateAtStation(lower, station) };
+  };
+  const scan = Array.from({ length: STEPS + 1 }, (_, i) => cut(stationOf(i / STEPS)));
+  const thickness = largest(scan, cut, [1, -1]);
+  const above = largest(scan, cut, [0.5, 0.5]);
+  const below = largest(scan, cut, [-0.5, -0.5]);
   const camber = above.value >= below.value ? above : { ...below, value: -below.value };
   const none = Math.abs(camber.value) < NO_CAMBER;
   return {
@@ -71,54 +84,51 @@ export function largestThicknessAndCamber(outline: Outline): Extremes {
   };
 }
 
-interface Peak {
-  readonly station: number;
-  readonly value: number;
-}
-
-/** Share of the best sampled value above which a second high point is refined too: the scan pairs both surfaces only nearly square to the chord. */
+/** Share of the largest scanned value from which a high point is refined: the scan misses less between its stations. */
 const RIVAL = 0.97;
 
-function largest(upper: Side, lower: Side, heights: Float64Array, combination: Combination): Peak {
-  const sampled = (i: number) =>
-    combination[0] * (heights[2 * i] ?? 0) + combination[1] * (heights[2 * i + 1] ?? 0);
-  let top = 0;
-  for (let i = 0; i <= STEPS; i++) top = Math.max(top, sampled(i));
-  let best: Peak = { station: 0, value: 0 };
-  if (top < NO_CAMBER) return best;
-  for (let i = 1; i <= STEPS; i++) {
-    const value = sampled(i);
-    if (value < RIVAL * top || value < sampled(i - 1) || (i < STEPS && value < sampled(i + 1))) continue;
-    const peak = peakNear(upper, lower, combination, i);
-    if (peak.value > best.value) best = peak;
+function peakOf({ station, upper, lower }: Cut, [a, b]: Combination): Peak {
+  return {
+    station,
+    value: a * upper.ordinate + b * lower.ordinate,
+    slope: a * upper.slope + b * lower.slope,
+  };
+}
+
+function largest(scan: readonly Cut[], cut: (station: number) => Cut, combination: Combination): Peak {
+  const peaks = scan.map((at) => peakOf(at, combination));
+  let best = peaks.reduce(higher);
+  const worthwhile = RIVAL * best.value;
+  if (best.value < NO_CAMBER) return best;
+  for (let i = 1; i < peaks.length; i++) {
+    const [from, to] = [peaks[i - 1], peaks[i]];
+    if (!from || !to || Math.max(from.value, to.value) < worthwhile || from.slope <= 0 || to.slope >= 0)
+      continue;
+    best = higher(
+      best,
+      peakBetween(from, to, (station) => peakOf(cut(station), combination)),
+    );
   }
   return best;
 }
 
-/** The high point within one step of scan index i; the best end of the bracket when the slope has no root there. */
-function peakNear(upper: Side, lower: Side, [a, b]: Combination, i: number): Peak {
-  const at = (station: number) => {
-    const [u, l] = [ordinateAtStation(upper, station), ordinateAtStation(lower, station)];
-    return { station, value: a * u.ordinate + b * l.ordinate, slope: a * u.slope + b * l.slope };
-  };
-  let rising = at(stationOf(Math.max(i - 1, 0.5) / STEPS));
-  let falling = at(stationOf(Math.min(i + 1, STEPS) / STEPS));
-  const middle = at(stationOf(i / STEPS));
-  if (rising.slope > 0 && falling.slope < 0) {
-    // Regula falsi with the Illinois rule: the weight of an end that stays twice is halved.
-    let [risingWeight, fallingWeight] = [1, 1];
-    for (let step = 0; step < 60 && falling.station - rising.station > STATION_TOLERANCE; step++) {
-      const [r, f] = [rising.slope * risingWeight, -falling.slope * fallingWeight];
-      const next = at((rising.station * f + falling.station * r) / (r + f));
-      if (next.slope === 0) return next;
-      if (next.slope > 0) {
-        if (Math.abs(next.station - rising.station) <= STATION_TOLERANCE) return next;
-        [rising, risingWeight, fallingWeight] = [next, 1, fallingWeight / 2];
-      } else {
-        if (Math.abs(next.station - falling.station) <= STATION_TOLERANCE) return next;
-        [falling, fallingWeight, risingWeight] = [next, 1, risingWeight / 2];
-      }
-    }
+function higher(a: Peak, b: Peak): Peak {
+  return b.value > a.value ? b : a;
+}
+
+/**
+ * The high point between a rising and a falling place: regula falsi on the slope with the Illinois rule (the weight of an end that stays
+ * twice is halved), and every third step in the middle, because the slope jumps at the camber position of a 4-digit section.
+ */
+function peakBetween(from: Peak, to: Peak, at: (station: number) => Peak): Peak {
+  let [rising, falling] = [from, to];
+  let [risingWeight, fallingWeight] = [1, 1];
+  for (let step = 1; step <= MOST_STEPS && falling.station - rising.station > STATION_TOLERANCE; step++) {
+    const [r, f] = step % 3 === 0 ? [1, 1] : [rising.slope * risingWeight, -falling.slope * fallingWeight];
+    const next = at((rising.station * f + falling.station * r) / (r + f));
+    if (next.slope > 0) [rising, risingWeight, fallingWeight] = [next, 1, fallingWeight / 2];
+    else [falling, fallingWeight, risingWeight] = [next, 1, risingWeight / 2];
+    if (next.slope === 0) break;
   }
-  return [rising, middle, falling].reduce((best, peak) => (peak.value > best.value ? peak : best));
+  return higher(rising, falling);
 }

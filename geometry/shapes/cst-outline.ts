@@ -40,10 +40,13 @@ export function ordinateAt(shape: CstShape, surface: Surface, station: number): 
 /** The outline of a CST shape on the sheet. The shape is taken as valid (see checkShape). */
 export function cstOutline(shape: CstShape): Outline {
   const frame = similarityOf(shape.placement);
+  const upper = surfaceCurve(shape, 'upper');
+  const lower = surfaceCurve(shape, 'lower');
+  const [upperEnd, lowerEnd] = [upper.at(1), lower.at(1)];
   return {
-    upper: surfaceCurve(shape, 'upper'),
-    lower: surfaceCurve(shape, 'lower'),
-    sharp: shape.trailingEdgeGap === 0,
+    upper,
+    lower,
+    sharp: upperEnd.x === lowerEnd.x && upperEnd.y === lowerEnd.y,
     meanLine: (station) =>
       toSheet(
         frame,

@@ -28,6 +28,7 @@ describe('the CST outline', () => {
       { x: 1, y: 0 },
     ]);
     const blunt = cstOutline({ ...UNIT, trailingEdgeGap: 0.01 });
+    expect(cstOutline({ ...UNIT, trailingEdgeGap: Number.MIN_VALUE }).sharp).toBe(true);
     expect([blunt.sharp, blunt.upper.at(1).y, blunt.lower.at(1).y]).toEqual([false, 0.005, -0.005]);
   });
 
