@@ -1,5 +1,5 @@
 import { useQueryClient } from '@tanstack/react-query';
-import { useMemo, useRef } from 'react';
+import { Fragment, useMemo, useRef } from 'react';
 import { useForm, type UseFormReturn, useWatch } from 'react-hook-form';
 import { type SectionVersion } from '#server/contracts/sections.ts';
 import { fileUrl } from '#client/api/request.ts';
@@ -40,7 +40,7 @@ export function ExportPanel({ version, chordMm = 220, onClose }: ExportPanelProp
   const larger = !useMay('sections.read');
   const panel = useRef<HTMLDivElement>(null);
   return (
-    <Dialog title="Export" width="wide" onClose={onClose}>
+    <Dialog title={`Export ${version.sectionName} v${String(version.number)}`} width="wide" onClose={onClose}>
       <div
         ref={panel}
         className={`grid gap-6 md:grid-cols-[minmax(0,1fr)_minmax(0,22rem)] ${larger ? armsLength : ''}`}
@@ -74,7 +74,9 @@ function FileColumn({ version, form, focusRefused }: FileColumnProps) {
   return (
     <div className="flex min-w-0 flex-col gap-3">
       <div>
-        <p className="min-h-14 text-xl font-extrabold break-all">{file ? file.fileName : 'No file yet'}</p>
+        <p className="min-h-14 text-xl font-extrabold [overflow-wrap:anywhere]">
+          {file ? <FileName name={file.fileName} /> : 'No file yet'}
+        </p>
         <p className="flex flex-wrap items-baseline gap-x-3 text-xl">
           version {version.number} <StatusMark status={version.status} />
         </p>
@@ -97,6 +99,16 @@ function FileColumn({ version, form, focusRefused }: FileColumnProps) {
       <ExportCautions format={fields.format} unitChord={unitChord} />
     </div>
   );
+}
+
+/** A long name breaks between its parts. */
+function FileName({ name }: { readonly name: string }) {
+  return name.split(/(?<=[_-])/).map((part, index) => (
+    <Fragment key={index}>
+      {part}
+      <wbr />
+    </Fragment>
+  ));
 }
 
 /** A field keeps text that it cannot read while the form keeps the value before: no file is made from that. */

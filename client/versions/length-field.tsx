@@ -13,9 +13,9 @@ interface LengthFieldProps {
   readonly name: keyof typeof lengths;
 }
 
-/** A length of the export form, typed in the person's unit or any other; beside it what it is in mm for who reads inches. */
+/** A length of the export form, typed in the person's unit or any other; beside it the same in the other unit. */
 export function LengthField({ form, name }: LengthFieldProps) {
-  const inInches = useUnits() === 'inch';
+  const other = useUnits() === 'mm' ? 'inch' : 'mm';
   const chordMm = form.getValues('chordMm');
   return (
     <Controller
@@ -28,7 +28,7 @@ export function LengthField({ form, name }: LengthFieldProps) {
           chordMm={chordMm}
           value={field.value}
           onCommit={field.onChange}
-          secondary={inInches ? formatLength(field.value, 'mm', lengths[name].decimals) : undefined}
+          secondary={formatLength(field.value, other, lengths[name].decimals)}
           error={fieldState.error?.message}
         />
       )}

@@ -8,15 +8,20 @@ interface MeasuredValuesProps {
   readonly units: Units;
 }
 
+/** What rounding leaves of the camber of a symmetrical section, and far below what any machine can cut. */
+const NO_CAMBER = 1e-9;
+
 /** Measured on the true contour at the chord shown, not echoed from the values that made it. */
 export function MeasuredValues({ measures, chordMm, units }: MeasuredValuesProps) {
   const length = (fraction: number) => formatLength(fraction * chordMm, units);
   const at = (fraction: number, station: number) => `${length(fraction)} at ${formatPercent(station, 1)}`;
+  const camber =
+    Math.abs(measures.maxCamber) < NO_CAMBER ? 'none' : at(measures.maxCamber, measures.maxCamberPosition);
   return (
     <FactList
       facts={[
         ['Largest thickness', at(measures.maxThickness, measures.maxThicknessPosition)],
-        ['Largest camber', at(measures.maxCamber, measures.maxCamberPosition)],
+        ['Largest camber', camber],
         ['Nose radius', length(measures.noseRadius)],
         ['Edge angle', formatAngle(measures.trailingEdgeAngleDeg)],
         ['Edge gap', length(measures.trailingEdgeGap)],

@@ -32,7 +32,7 @@ function FourDigitValues({ shape }: { readonly shape: Naca4Shape }) {
     <FactList
       facts={[
         ['Camber', formatPercent(shape.maxCamber)],
-        ['Camber position', formatPercent(shape.maxCamberPosition, 1)],
+        ['Camber position', shape.maxCamber > 0 ? formatPercent(shape.maxCamberPosition, 1) : '–'],
         ['Thickness', formatPercent(shape.maxThickness)],
         ['Trailing edge', shape.trailingEdge],
       ]}

@@ -61,11 +61,10 @@ function InForce({
   if (inForce === null) return <>No version of this section is in force.</>;
   return (
     <>
-      In force is{' '}
       <Link className="font-semibold underline underline-offset-4" to={versionPath(sectionId, inForce)}>
-        version {inForce}
-      </Link>
-      .
+        Version {inForce}
+      </Link>{' '}
+      is in force.
     </>
   );
 }

@@ -4,7 +4,7 @@ import { measure } from '#geometry/contour/measures.ts';
 import { outlineOf } from '#geometry/shapes/shape.ts';
 import { type Section, type SectionVersion } from '#server/contracts/sections.ts';
 import { useMay, useMe } from '#client/app/session.tsx';
-import { useUnits } from '#client/app/units.ts';
+import { formatLength, useUnits } from '#client/app/units.ts';
 import { StaticSheet, type TitleBlockFields } from '#client/drawing/static-sheet.tsx';
 import { Button } from '#client/ui/button.tsx';
 import { QuantityField } from '#client/ui/quantity-field.tsx';
@@ -39,7 +39,9 @@ export function VersionView({ version, section }: VersionViewProps) {
       <div className="flex min-w-0 flex-col gap-3 p-4">
         <Head version={version} onOpen={setOpen} />
         <Standing version={version} inForce={section ? section.releasedNumber : undefined} />
-        <StaticSheet shape={version.shape} chordMm={chordMm} title={titleOf(version, owner)} />
+        <div className="lg:max-w-[calc((100dvh-11rem)*1.5)] print:max-w-none">
+          <StaticSheet shape={version.shape} chordMm={chordMm} title={titleOf(version, owner)} />
+        </div>
       </div>
       <aside
         className="flex flex-col gap-5 border-t border-rule p-4 lg:border-t-0 lg:border-l print:hidden"
@@ -47,6 +49,7 @@ export function VersionView({ version, section }: VersionViewProps) {
       >
         <Part title="Shape">
           <QuantityField
+            secondary={formatLength(chordMm, units === 'mm' ? 'inch' : 'mm')}
             label="Chord shown"
             kind="length"
             chordMm={chordMm}
