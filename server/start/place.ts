@@ -23,25 +23,44 @@ function prepare(folder: string): string {
   return folder;
 }
 
+/** What decides between the checkout's folder and the far one. */
+export interface Circumstances {
+  /** DATA_DIR names the folder. */
+  readonly isGiven: boolean;
+  readonly canEnterNear: boolean;
+  readonly nearHasData: boolean;
+  readonly farHasData: boolean;
+}
+
+/** The decision of `choosePlace`; null where neither will do. */
+export function nearOrFar(circumstances: Circumstances): 'near' | 'far' | null {
+  const { isGiven, canEnterNear, nearHasData, farHasData } = circumstances;
+  if (!isGiven && farHasData) return 'far';
+  if (canEnterNear) return 'near';
+  return isGiven || nearHasData ? null : 'far';
+}
+
 /**
  * Chooses the folder: DATA_DIR, else .data in the checkout, else (where the server's account cannot enter that, as
  * below a closed home folder) one under /var/lib. Data once made are never left behind for a new place.
  * @throws {StartError} where a folder with data, or the one asked for, can't be entered
  */
 export function choosePlace(root: string, given: string | null, account: Account | undefined): Place {
-  const near = resolve(root, given ?? '.data');
+  const near = prepare(resolve(root, given ?? '.data'));
   const far = farFolder(root);
-  if (given === null && existsSync(join(far, 'mariadb'))) return { folder: far, remark: remarkOn(far) };
-  if (canEnter(prepare(near), account)) return { folder: near, remark: null };
-  if (given !== null || existsSync(join(near, 'mariadb', 'data'))) {
-    throw new StartError(
-      `The database server runs as the user “mysql”, who cannot enter ${near}.`,
-      'Let others pass through the folders above it (chmod o+x), or set DATA_DIR to another folder.',
-    );
+  const choice = nearOrFar({
+    isGiven: given !== null,
+    canEnterNear: canEnter(near, account),
+    nearHasData: existsSync(join(near, 'mariadb', 'data')),
+    farHasData: existsSync(join(far, 'mariadb', 'data')),
+  });
+  if (choice === 'near') return { folder: near, remark: null };
+  if (choice === 'far') {
+    const remark = `The user “mysql” cannot enter this checkout, so the data are under ${far}.`;
+    return { folder: prepare(far), remark };
   }
-  return { folder: prepare(far), remark: remarkOn(far) };
-}
-
-function remarkOn(far: string): string {
-  return `The user “mysql” cannot enter this checkout, so the data are under ${far}.`;
+  throw new StartError(
+    `The database server runs as the user “mysql”, who cannot enter ${near}.`,
+    'Let others pass through the folders above it (chmod o+x), or set DATA_DIR to another folder.',
+  );
 }
