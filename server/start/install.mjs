@@ -46,6 +46,16 @@ function npmCi(root) {
   return run(...tied(command, all), { cwd: root });
 }
 
+/** @param {string} output of an npm that failed: its first lines say what, the rest is its own stack */
+function npmFailure(output) {
+  const lines = output.split('\n').filter((line) => /^npm (error|ERR!)/.test(line));
+  const refused = output.includes('ECONNREFUSED') ? adviceFor('ENOTFOUND') : undefined;
+  return new StartError(
+    `npm ci failed:\n${(lines.length > 0 ? lines : output.trim().split('\n')).slice(0, 5).join('\n')}`,
+    refused ?? adviceFor(output) ?? 'Run npm ci by hand to see all it says.',
+  );
+}
+
 /**
  * Checks Node's version and installs the packages when they are missing or the lock has changed since.
  * @param {string} root the checkout
@@ -74,12 +84,7 @@ export async function install(root) {
     try {
       if (upToDate(root, mark())) return note('another process has just installed them');
       const { code, output } = await npmCi(root);
-      if (code !== 0) {
-        throw new StartError(
-          `npm ci failed:\n${output.trim().split('\n').slice(-15).join('\n')}`,
-          adviceFor(output) ?? 'Run npm ci by hand to see what is wrong.',
-        );
-      }
+      if (code !== 0) throw npmFailure(output);
       writeFileSync(join(root, 'node_modules/.ribwright-lock'), mark());
     } finally {
       held.release();
