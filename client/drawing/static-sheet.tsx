@@ -15,6 +15,7 @@ import { FITTED, sheetTransform, type SheetTransform } from './sheet-view.ts';
 import { scaleWords, sheetRemarks } from './sheet-words.ts';
 import { TitleBlock, type TitleBlockFields } from './title-block.tsx';
 import { useSize } from './use-sheet-size.ts';
+import './printed-sheet.css';
 
 export { type TitleBlockFields } from './title-block.tsx';
 
@@ -47,11 +48,6 @@ export function StaticSheet(props: StaticSheetProps) {
 export function PrintedSheet(props: StaticSheetProps & { readonly units: Units }) {
   return (
     <div className="printed-sheet hidden print:block" aria-hidden="true">
-      <style>
-        {
-          '@page { size: landscape; margin: 10mm; } .printed-sheet svg { width: 100%; height: auto; max-height: 100vh; }'
-        }
-      </style>
       <SheetDrawing {...props} width={A4.width} height={A4.height} printed />
     </div>
   );
