@@ -34,7 +34,7 @@ export function VersionView({ version, section }: VersionViewProps) {
   const measures = useMemo(() => measure(outlineOf(version.shape)), [version.shape]);
   const close = () => setOpen(null);
   return (
-    <div className="grid flex-1 lg:grid-cols-[minmax(0,1fr)_22rem] print:block">
+    <div data-page="flowing" className="grid flex-1 lg:grid-cols-[minmax(0,1fr)_22rem] print:block">
       <title>{`${version.sectionName} v${version.number} · Ribwright`}</title>
       <div className="flex min-w-0 flex-col gap-3 p-4">
         <Head version={version} onOpen={setOpen} />
