@@ -2,6 +2,12 @@ import { createHash } from 'node:crypto';
 import { type Request, type Response } from 'express';
 import { type FileReply } from './handlers.ts';
 
+/** Whether the caller names this very content in If-None-Match, whatever it says about caches on the way (RFC 9110, 13.1.2). */
+function hasAlready(request: Request, checksum: string): boolean {
+  const tags = (request.get('if-none-match') ?? '').split(',').map((tag) => tag.trim().replace(/^W\//, ''));
+  return tags.includes('*') || tags.includes(`"${checksum}"`);
+}
+
 /**
  * Sends a cut file with its name, type and sum. The entity tag is the SHA-256 of the very bytes, which must therefore
  * reach the machine as they are: no compression on the way. What is still the same is answered with 304; that and HEAD
@@ -18,7 +24,7 @@ export async function sendFile(request: Request, response: Response, reply: File
     ETag: `"${checksum}"`,
     'X-Checksum-Sha256': checksum,
   });
-  if (request.fresh) return void response.status(304).end();
+  if (hasAlready(request, checksum)) return void response.status(304).end();
   response.set('Content-Length', String(bytes.length));
   if (request.method === 'HEAD') return void response.end();
   await reply.record(checksum);
