@@ -38,7 +38,7 @@ export function routesOf(client: QueryClient): RouteObject[] {
         {
           ErrorBoundary: RouteError,
           children: [
-            { path: '/', loader: toStart },
+            { path: '/', loader: toStart, Component: Nothing },
             {
               path: '/sections',
               lazy: () => import('./sections/library/library-page.tsx'),

@@ -21,7 +21,7 @@ const THEMES: readonly Segment<Preferences['theme']>[] = [
 export function Component() {
   const me = useMe();
   return (
-    <div className="mx-auto w-full max-w-160 px-4 pt-4 pb-12">
+    <div data-page="flowing" className="mx-auto w-full max-w-160 px-4 pt-4 pb-12">
       <title>Account · Ribwright</title>
       <h1 className="text-xl font-extrabold">Account</h1>
       <Part title="Person">

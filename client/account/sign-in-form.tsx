@@ -39,6 +39,7 @@ export default function SignInForm({ email = '', onSignedIn }: SignInFormProps) 
         autoComplete="username"
         autoCapitalize="none"
         spellCheck={false}
+        autoFocus={email === ''}
         error={errors.email?.message}
         {...form.register('email')}
       />

@@ -15,6 +15,10 @@ export interface DialogProps {
   modalOnly?: boolean | undefined;
 }
 
+/** Where typing begins, rather than at the close button. */
+const FIRST_FIELD =
+  ':is(input, textarea, select):not(:disabled, [hidden], [type="radio"], [type="checkbox"])';
+
 const WIDTHS = { narrow: 'max-w-100', normal: 'max-w-140', wide: 'max-w-200' } as const;
 
 /** A native modal dialog, open as long as it is rendered: focus stays inside and returns to where it was. */
@@ -66,6 +70,7 @@ function useOpenDialog() {
     const dialog = element.current;
     const before = document.activeElement;
     dialog?.showModal();
+    dialog?.querySelector<HTMLElement>(FIRST_FIELD)?.focus();
     return () => {
       dialog?.close();
       if (before instanceof HTMLElement && before.isConnected) before.focus();

@@ -94,6 +94,8 @@ function useTypedQuantity(props: QuantityFieldProps) {
   };
   const keyDown = (event: KeyboardEvent<HTMLInputElement>) => {
     if (event.key === 'Enter') {
+      // Enter settles this value; it does not send the form around it.
+      event.preventDefault();
       commit();
     } else if (event.key === 'Escape' && typing !== null) {
       event.preventDefault();

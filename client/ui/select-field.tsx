@@ -8,6 +8,8 @@ interface OwnProps {
   error?: string | undefined;
   /** The label is spoken but not shown. */
   hideLabel?: boolean | undefined;
+  /** `large` for the machines' desk. */
+  size?: 'normal' | 'large' | undefined;
   className?: string | undefined;
 }
 export type SelectFieldProps = OwnProps & Omit<ComponentProps<'select'>, keyof OwnProps | 'id' | 'children'>;
@@ -19,6 +21,7 @@ export function SelectField({
   hint,
   error,
   hideLabel = false,
+  size = 'normal',
   className,
   ...rest
 }: SelectFieldProps) {
@@ -30,7 +33,7 @@ export function SelectField({
       aria-label={hideLabel ? label : undefined}
       aria-invalid={error !== undefined}
       aria-describedby={describedBy(id, hint, error)}
-      className={`${fieldClass} ${fieldHeight}`}
+      className={`${fieldClass} ${size === 'large' ? 'h-12 text-base' : fieldHeight}`}
     >
       {options.map((option) => (
         <option key={option.value} value={option.value}>

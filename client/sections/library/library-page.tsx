@@ -12,7 +12,7 @@ import { filterOf, type ListAddress, useListAddress } from './list-address.ts';
 import { NoSections } from './no-sections.tsx';
 import { ReleasedList, SectionList } from './section-list.tsx';
 import { SectionTable } from './section-table.tsx';
-import { Toolbar } from './toolbar.tsx';
+import { type Layout, Toolbar } from './toolbar.tsx';
 
 const NewSectionDialog = lazy(() => import('./new-section-dialog.tsx'));
 
@@ -33,6 +33,7 @@ export function Component() {
   const wide = useMedia(WIDE);
   const readsAll = useMay('sections.read');
   const mayWrite = useMay('sections.write');
+  const layout = readsAll ? (wide ? 'table' : 'list') : 'released';
   const make = () => {
     setMakes(true);
   };
@@ -42,23 +43,12 @@ export function Component() {
   });
   return (
     <LibraryNoticeContext value={setEvent}>
-      <div className="mx-auto flex w-full max-w-[100rem] flex-col gap-3 px-4 pt-4 pb-10">
+      <div data-page="flowing" className="mx-auto flex w-full max-w-[100rem] flex-col gap-3 px-4 pt-4 pb-10">
         <title>Sections · Ribwright</title>
         <h1 className="text-xl font-extrabold">{readsAll ? 'Sections' : 'Released sections'}</h1>
-        <Toolbar
-          address={address}
-          onChange={change}
-          withStatus={readsAll}
-          withSort={!wide || !readsAll}
-          onNew={mayWrite ? make : undefined}
-        />
+        <Toolbar address={address} onChange={change} layout={layout} onNew={mayWrite ? make : undefined} />
         {event && <LibraryNotice event={event} />}
-        <Sections
-          address={address}
-          onChange={change}
-          layout={readsAll ? (wide ? 'table' : 'list') : 'released'}
-          onNew={mayWrite ? make : undefined}
-        />
+        <Sections address={address} onChange={change} layout={layout} onNew={mayWrite ? make : undefined} />
         {makes && (
           <Suspense>
             <NewSectionDialog
@@ -76,7 +66,7 @@ export function Component() {
 interface SectionsProps {
   address: ListAddress;
   onChange: (change: Partial<ListAddress>) => void;
-  layout: 'table' | 'list' | 'released';
+  layout: Layout;
   onNew: (() => void) | undefined;
 }
 

@@ -35,13 +35,7 @@ export default function NewSectionDialog({ onClose }: { onClose: () => void }) {
       }
     >
       <form id="new-section" noValidate onSubmit={submit} className="flex flex-col gap-4">
-        <TextField
-          label="Name"
-          autoComplete="off"
-          autoFocus
-          error={errors.name?.message}
-          {...form.register('name')}
-        />
+        <TextField label="Name" autoComplete="off" error={errors.name?.message} {...form.register('name')} />
         <TextField
           label="Purpose (optional)"
           autoComplete="off"

@@ -51,11 +51,7 @@ type ShapeChoice = Omit<NewSectionForm, 'name' | 'purpose'>;
 export function startingShape(form: ShapeChoice): StartingShape {
   const values = form.start === 'values' ? form : parseDesignation(form.designation);
   if (values === null) {
-    return {
-      shape: null,
-      field: 'designation',
-      message: 'Type the four digits of a designation, such as 2412.',
-    };
+    return { shape: null, field: 'designation', message: designationSentence(form.designation) };
   }
   const { maxCamber, maxCamberPosition, maxThickness } = values;
   try {
@@ -73,6 +69,12 @@ export function startingShape(form: ShapeChoice): StartingShape {
     if (error instanceof ShapeError) return { shape: null, ...faultOf(error, form.start) };
     throw error;
   }
+}
+
+function designationSentence(text: string): string {
+  return /^\D*\d{4}\s*$/.test(text)
+    ? 'No section has these digits: the last two are a thickness of 01 to 40, and camber needs a position of 1 to 9.'
+    : 'Type the four digits of a designation, such as 2412.';
 }
 
 function faultOf(error: ShapeError, start: Start): { field: ShapeField; message: string } {

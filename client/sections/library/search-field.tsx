@@ -11,10 +11,12 @@ export interface SearchFieldProps {
   value: string;
   /** Called after a pause in typing, at once on Enter. */
   onSearch: (text: string) => void;
+  /** For the machines' desk. */
+  large?: boolean | undefined;
   className?: string | undefined;
 }
 
-export function SearchField({ label, value, onSearch, className = '' }: SearchFieldProps) {
+export function SearchField({ label, value, onSearch, large = false, className = '' }: SearchFieldProps) {
   const [text, setText] = useState(value);
   const [inForce, setInForce] = useState(value);
   const input = useRef<HTMLInputElement>(null);
@@ -59,7 +61,7 @@ export function SearchField({ label, value, onSearch, className = '' }: SearchFi
         setText('');
         searchAfter('', 0);
       }}
-      className={`${fieldClass} ${fieldHeight} ${className}`}
+      className={`${fieldClass} ${large ? 'h-12 text-base' : fieldHeight} ${className}`}
     />
   );
 }

@@ -27,7 +27,7 @@ export function SectionList({ sections, stale, mayWrite }: SectionListProps) {
       {sections === null
         ? Array.from({ length: 8 }, (_, row) => (
             <li key={row} className="flex h-18 items-center gap-3 border-b border-rule">
-              <Skeleton className="h-3 w-20" />
+              <Skeleton className="h-3 w-16" />
               <Skeleton className="h-8 flex-1" />
             </li>
           ))
@@ -36,7 +36,7 @@ export function SectionList({ sections, stale, mayWrite }: SectionListProps) {
               key={section.id}
               className="relative flex h-18 items-center gap-3 border-b border-rule focus-within:bg-sheet"
             >
-              <Thumbnail shape={section.latest.shape} width={80} height={24} className="shrink-0" />
+              <Thumbnail shape={section.latest.shape} width={64} height={20} className="shrink-0" />
               <div className="min-w-0 flex-1">
                 <Link
                   to={sectionPath(section, false)}
@@ -46,10 +46,11 @@ export function SectionList({ sections, stale, mayWrite }: SectionListProps) {
                 </Link>
                 <p className="flex items-center gap-x-2 truncate text-xs text-graphite">
                   <span>v{section.latest.number}</span>
-                  <SectionStatus section={section} />
-                  <span className="truncate">
-                    {formatPercent(section.latest.maxThickness, 1)} · <Moment at={section.updatedAt} />
+                  <SectionStatus section={section} brief />
+                  <span className="ml-auto max-[22rem]:hidden">
+                    {formatPercent(section.latest.maxThickness, 1)}
                   </span>
+                  <Moment at={section.updatedAt} className="w-14 text-right max-sm:hidden" />
                 </p>
               </div>
               {mayWrite && (
@@ -97,7 +98,8 @@ function ReleasedRow({ section }: { section: Section }) {
           v{latest.number} <StatusMark status={latest.status} />
         </p>
         <p className="text-sm text-graphite">
-          {latest.description}, {formatPercent(latest.maxThickness, 1)} thick
+          {latest.description}
+          {section.purpose !== '' && <> · {section.purpose}</>}
         </p>
       </div>
       <span aria-hidden="true" className={`${buttonClass('plain', 'large')} max-sm:ml-auto`}>

@@ -36,8 +36,8 @@ export function SectionTable({ sections, address, onSort, stale, mayWrite }: Sec
         <col className="w-20" />
         <col className="w-22" />
         <col className="w-36" />
-        <col className="w-14" />
-        <col className="w-40" />
+        <col className="w-20" />
+        <col className="w-44" />
         <col className="w-12" />
       </colgroup>
       <thead className="sticky top-11 z-10 bg-paper pointer-coarse:top-13">
@@ -98,7 +98,9 @@ function Row({ section, mayWrite }: { section: Section; mayWrite: boolean }) {
       <td className={`${CELL} text-right text-sm`}>v{latest.number}</td>
       <td className={`${CELL} pl-5`}>
         <Moment at={section.updatedAt} className="relative block truncate" />
-        <span className="block truncate text-graphite">{section.updatedBy.name}</span>
+        <span className="block truncate text-graphite" title={section.updatedBy.name}>
+          {section.updatedBy.name}
+        </span>
       </td>
       <td className={`${CELL} relative text-right`}>{mayWrite && <SectionMenu section={section} />}</td>
     </tr>

@@ -7,8 +7,8 @@ export function sectionPath(section: Section, toReleased: boolean): string {
   return toReleased ? `${sheet}/versions/${String(section.latest.number)}` : sheet;
 }
 
-/** The latest version's status, and the released version where that is an older one. */
-export function SectionStatus({ section }: { section: Section }) {
+/** The latest version's status, and the released version where that is an older one; `brief` fits one line. */
+export function SectionStatus({ section, brief = false }: { section: Section; brief?: boolean }) {
   if (section.archived) return <StatusMark status="archived" />;
   const { latest, releasedNumber } = section;
   return (
@@ -16,7 +16,8 @@ export function SectionStatus({ section }: { section: Section }) {
       <StatusMark status={latest.status} />
       {releasedNumber !== null && releasedNumber !== latest.number && (
         <span className="flex items-center gap-1.5 text-xs whitespace-nowrap text-spruce">
-          <StatusGlyph status="released" />v{releasedNumber} released
+          <StatusGlyph status="released" />v{releasedNumber}{' '}
+          <span className={brief ? 'sr-only' : ''}>released</span>
         </span>
       )}
     </>

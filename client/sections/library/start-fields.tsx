@@ -8,9 +8,9 @@ import { NACA4_LIMITS } from '#geometry/shapes/naca4.ts';
 import { type NewSectionForm, type Start } from './new-section-form.ts';
 
 const STARTS: readonly Segment<Start>[] = [
-  { value: 'designation', label: 'Designation' },
-  { value: 'values', label: '4-digit values' },
-  { value: 'free', label: 'Free-form' },
+  { value: 'designation', label: 'Digits' },
+  { value: 'values', label: 'Values' },
+  { value: 'free', label: 'Free form' },
 ];
 const EDGES = [
   { value: 'open', label: 'Open, as published' },
@@ -58,7 +58,7 @@ export function StartFields({ form }: { form: UseFormReturn<NewSectionForm> }) {
           {...register('designation')}
         />
       )}
-      <div className="grid grid-cols-2 gap-4">
+      <div className="grid gap-4 sm:grid-cols-2">
         <SelectField label="Trailing edge" options={EDGES} {...register('trailingEdge')} />
         {start === 'free' && (
           <SelectField

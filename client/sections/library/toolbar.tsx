@@ -11,9 +11,9 @@ const STATUSES = [
   { value: 'archived', label: 'Archived' },
 ] as const;
 const KINDS = [
-  { value: '', label: '4-digit and free-form' },
+  { value: '', label: 'Any kind' },
   { value: 'naca4', label: '4-digit' },
-  { value: 'cst', label: 'Free-form' },
+  { value: 'cst', label: 'Free form' },
 ] as const;
 const SORTS: readonly { readonly value: Sort; readonly label: string }[] = [
   { value: 'updated', label: 'Last changed' },
@@ -22,50 +22,30 @@ const SORTS: readonly { readonly value: Sort; readonly label: string }[] = [
   { value: 'camber', label: 'Camber' },
 ];
 
+/** A table with heads to sort by, two-line rows, or the large rows of who sees what is released only. */
+export type Layout = 'table' | 'list' | 'released';
+
 export interface ToolbarProps {
   address: ListAddress;
   onChange: (change: Partial<ListAddress>) => void;
-  /** Offers the filter by status: for readers who see more than what is released. */
-  withStatus: boolean;
-  /** Offers the order as a field: where there are no column heads to press. */
-  withSort: boolean;
+  layout: Layout;
   onNew: (() => void) | undefined;
 }
 
-export function Toolbar({ address, onChange, withStatus, withSort, onNew }: ToolbarProps) {
+export function Toolbar({ address, onChange, layout, onNew }: ToolbarProps) {
   return (
-    <search className="flex flex-wrap items-center gap-2">
+    <div role="search" className="flex flex-wrap items-center gap-2 max-sm:grid max-sm:grid-cols-2">
       <SearchField
         label="Search name, purpose, designation"
         value={address.search ?? ''}
         onSearch={(search) => {
           onChange({ search });
         }}
-        className="max-w-90 min-w-0 flex-[1_1_16rem] max-sm:max-w-none"
+        large={layout === 'released'}
+        className={`max-sm:col-span-2 ${layout === 'released' ? 'sm:max-w-120' : 'sm:max-w-90'}`}
       />
-      {withStatus && (
-        <SelectField
-          label="Status"
-          hideLabel
-          options={STATUSES}
-          value={address.status ?? ''}
-          onChange={(event) => {
-            onChange({ status: (event.target.value || undefined) as ListAddress['status'] });
-          }}
-          className="w-36 max-sm:flex-1"
-        />
-      )}
-      <SelectField
-        label="Kind of shape"
-        hideLabel
-        options={KINDS}
-        value={address.kind ?? ''}
-        onChange={(event) => {
-          onChange({ kind: (event.target.value || undefined) as ListAddress['kind'] });
-        }}
-        className="w-52 max-sm:w-36 max-sm:flex-1"
-      />
-      {withSort && (
+      {layout !== 'released' && <Filters address={address} onChange={onChange} />}
+      {layout !== 'table' && (
         <SelectField
           label="Order"
           hideLabel
@@ -74,7 +54,8 @@ export function Toolbar({ address, onChange, withStatus, withSort, onNew }: Tool
           onChange={(event) => {
             onChange({ sort: event.target.value as Sort, direction: undefined });
           }}
-          className="w-36 max-sm:flex-1"
+          className={layout === 'released' ? 'max-sm:col-span-2 sm:w-48' : 'sm:w-40'}
+          size={layout === 'released' ? 'large' : 'normal'}
         />
       )}
       {onNew && (
@@ -82,6 +63,33 @@ export function Toolbar({ address, onChange, withStatus, withSort, onNew }: Tool
           New section
         </Button>
       )}
-    </search>
+    </div>
+  );
+}
+
+function Filters({ address, onChange }: Pick<ToolbarProps, 'address' | 'onChange'>) {
+  return (
+    <>
+      <SelectField
+        label="Status"
+        hideLabel
+        options={STATUSES}
+        value={address.status ?? ''}
+        onChange={(event) => {
+          onChange({ status: (event.target.value || undefined) as ListAddress['status'] });
+        }}
+        className="sm:w-36"
+      />
+      <SelectField
+        label="Kind of shape"
+        hideLabel
+        options={KINDS}
+        value={address.kind ?? ''}
+        onChange={(event) => {
+          onChange({ kind: (event.target.value || undefined) as ListAddress['kind'] });
+        }}
+        className="sm:w-36"
+      />
+    </>
   );
 }
