@@ -25,8 +25,8 @@ function isAlive(pid: number): boolean {
   }
 }
 
-/** Removes what killed runs have left; their servers ended with them. */
-function sweep(folder: string): void {
+/** Removes from a folder what killed runs have left there; their servers ended with them. */
+export function sweep(folder: string): void {
   for (const name of readdirSync(folder)) {
     const pid = new RegExp(`^${prefix}(\\d+)-`).exec(name)?.[1];
     if (pid !== undefined && !isAlive(Number(pid)))
