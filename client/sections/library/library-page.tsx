@@ -45,9 +45,11 @@ export function Component() {
     <LibraryNoticeContext value={setEvent}>
       <div data-page="flowing" className="mx-auto flex w-full max-w-[100rem] flex-col gap-3 px-4 pt-4 pb-10">
         <title>Sections · Ribwright</title>
-        <h1 className="text-xl font-extrabold">{readsAll ? 'Sections' : 'Released sections'}</h1>
+        <div className="flex min-h-8 flex-wrap items-center gap-x-6 gap-y-2">
+          <h1 className="text-xl font-extrabold">{readsAll ? 'Sections' : 'Released sections'}</h1>
+          {event && <LibraryNotice event={event} />}
+        </div>
         <Toolbar address={address} onChange={change} layout={layout} onNew={mayWrite ? make : undefined} />
-        {event && <LibraryNotice event={event} />}
         <Sections address={address} onChange={change} layout={layout} onNew={mayWrite ? make : undefined} />
         {makes && (
           <Suspense>

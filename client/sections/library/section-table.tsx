@@ -32,7 +32,7 @@ export function SectionTable({ sections, address, onSort, stale, mayWrite }: Sec
       <colgroup>
         <col className="w-34" />
         <col />
-        <col className="w-44" />
+        <col className={`w-44 ${ROOMY}`} />
         <col className="w-20" />
         <col className="w-22" />
         <col className="w-36" />
@@ -46,11 +46,11 @@ export function SectionTable({ sections, address, onSort, stale, mayWrite }: Sec
             <span className="sr-only">Shape</span>
           </PlainHead>
           {head('name', 'Name')}
-          <PlainHead>Designation</PlainHead>
+          <PlainHead className={`text-left ${ROOMY}`}>Designation</PlainHead>
           {head('thickness', 't/c', true)}
           {head('camber', 'Camber', true)}
-          <PlainHead>Status</PlainHead>
-          <PlainHead end>Version</PlainHead>
+          <PlainHead className="pl-5 text-left">Status</PlainHead>
+          <PlainHead className="text-right">Version</PlainHead>
           {head('updated', 'Changed')}
           <PlainHead>
             <span className="sr-only">Actions</span>
@@ -66,6 +66,8 @@ export function SectionTable({ sections, address, onSort, stale, mayWrite }: Sec
   );
 }
 
+/** A column that gives way to the name where both have no room. */
+const ROOMY = 'max-[76rem]:hidden';
 const CELL = 'h-14 px-2 align-middle';
 
 function Row({ section, mayWrite }: { section: Section; mayWrite: boolean }) {
@@ -87,7 +89,7 @@ function Row({ section, mayWrite }: { section: Section; mayWrite: boolean }) {
           {section.purpose}
         </span>
       </th>
-      <td className={CELL}>
+      <td className={`${CELL} ${ROOMY}`}>
         <span className="line-clamp-2">{latest.description}</span>
       </td>
       <td className={`${CELL} text-right text-sm`}>{formatPercent(latest.maxThickness, 1)}</td>
@@ -129,9 +131,9 @@ function SkeletonRow() {
   );
 }
 
-function PlainHead({ children, end = false }: { children: ReactNode; end?: boolean }) {
+function PlainHead({ children, className = 'text-left' }: { children: ReactNode; className?: string }) {
   return (
-    <th scope="col" className={`h-9 px-2 font-normal ${end ? 'text-right' : 'text-left nth-6:pl-5'}`}>
+    <th scope="col" className={`h-9 px-2 font-normal ${className}`}>
       {children}
     </th>
   );
