@@ -42,7 +42,11 @@ export const sectionSchema = z.object({
 export type Section = z.infer<typeof sectionSchema>;
 
 export const sectionSorts = ['updated', 'name', 'thickness', 'camber'] as const;
-/** `status` is the status of the latest version; `released` also finds sections whose released version is older. */
+/**
+ * `status` is the status of the latest version; `released` also finds sections whose released version is older.
+ * Archived sections are listed under `archived` and nowhere else. Without a direction: newest first when sorted by
+ * `updated`, ascending otherwise. `search` finds text anywhere in name, purpose and description.
+ */
 export const sectionListQuerySchema = pageQuerySchema.extend({
   search: z.string().trim().max(80).optional(),
   status: z.enum(['draft', 'released', 'withdrawn', 'archived']).optional(),

@@ -16,7 +16,8 @@ export interface Scope {
 
 /**
  * The one way to the rows of a workshop: what it gives can neither read nor write another workshop's. (Sign-in, which
- * does not know the workshop yet, is the exception and stands in account/store.ts.)
+ * does not know the workshop yet, is the exception and stands in account/store.ts.) Alternatives belong into a group,
+ * `where((either) => either.where(…).orWhere(…))`: an `orWhere` beside the scope would lead out of it.
  */
 export function scoped(db: Knex, workshopId: string): Scope {
   return {

@@ -2,6 +2,7 @@ import { type Knex } from 'knex';
 import { canonicalShape, type Shape } from '#geometry/shapes/shape.ts';
 import { type Draft } from '#server/contracts/sections.ts';
 import { scoped } from '#server/database/scoped.ts';
+import { inTransaction } from '#server/database/transaction.ts';
 import { Refusal, refuseField } from '#server/refusal.ts';
 import { type Author, isSavedWork } from '../rules.ts';
 import { sectionState } from '../store.ts';
@@ -53,17 +54,19 @@ export async function keepDraft(
       `There is no version ${draft.basedOn}; the newest is ${section.latestNumber}.`,
     );
   }
-  await scoped(db, author.workshopId)
-    .insert('section_drafts', {
-      section_id: section.id,
-      person_id: author.personId,
-      based_on: draft.basedOn,
-      shape: canonicalShape(draft.shape),
-      chord_mm: draft.chordMm,
-      updated_at: author.at,
-    })
-    .onConflict(['workshop_id', 'section_id', 'person_id'])
-    .merge();
+  await inTransaction(db, (transaction) =>
+    scoped(transaction, author.workshopId)
+      .insert('section_drafts', {
+        section_id: section.id,
+        person_id: author.personId,
+        based_on: draft.basedOn,
+        shape: canonicalShape(draft.shape),
+        chord_mm: draft.chordMm,
+        updated_at: author.at,
+      })
+      .onConflict(['workshop_id', 'section_id', 'person_id'])
+      .merge(),
+  );
   return { ...draft, updatedAt: author.at.toISOString() };
 }
 

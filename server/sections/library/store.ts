@@ -54,11 +54,13 @@ const versionColumns = ['number', 'status', 'description', 'thickness', 'camber'
 
 /** Adds version and person to sections that are already chosen: a page is cut before anything is joined to it. */
 function withVersions(db: Knex, chosen: Knex.QueryBuilder): Knex.QueryBuilder {
-  const rows = db.from(chosen.as('s')).select(
-    's.*',
-    'p.name as shown_by_name',
-    ...versionColumns.map((column) => `v.${column} as version_${column}`),
-  );
+  const rows = db
+    .from(chosen.as('s'))
+    .select(
+      's.*',
+      'p.name as shown_by_name',
+      ...versionColumns.map((column) => `v.${column} as version_${column}`),
+    );
   joinScoped(rows, 'inner', ['section_versions', 'v'], 's', [
     ['v.section_id', 's.id'],
     ['v.number', 's.shown_number'],
