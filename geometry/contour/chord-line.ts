@@ -86,10 +86,9 @@ export interface Ordinate {
  * @param station 0 … 1
  */
 export function ordinateAtStation(side: Side, station: number): Ordinate {
-  const { line, surface, end, otherEnd } = side;
+  const { line, end, otherEnd } = side;
   if (station >= end.x) return faceOrdinate(end, otherEnd, station);
-  const t = parameterAtStation(side, station);
-  const point = surface.derivatives(t);
+  const point = pointAtStation(side, station);
   const run = point.dx * line.along.x + point.dy * line.along.y;
   const rise = point.dy * line.along.x - point.dx * line.along.y;
   return { ordinate: ordinateOn(line, point), slope: run === 0 ? 0 : (rise / run) * line.length };
@@ -102,14 +101,16 @@ function faceOrdinate(end: Point, otherEnd: Point, station: number): Ordinate {
   return { ordinate: end.y + slope * (station - end.x), slope };
 }
 
-/** t of a surface at a station that it reaches; on the part behind its foremost point. */
-export function parameterAtStation({ line, surface, foremost }: Side, station: number): number {
+/** The point of a surface at a station that it reaches, on the part behind its foremost point. */
+export function pointAtStation({ line, surface, foremost }: Side, station: number): CurvePoint {
+  let point = surface.derivatives(foremost);
   const evaluate = (t: number) => {
-    const point = surface.derivatives(t);
+    point = surface.derivatives(t);
     return {
       value: stationOn(line, point) - station,
       slope: (point.dx * line.along.x + point.dy * line.along.y) / line.length,
     };
   };
-  return safeguardedRoot(evaluate, foremost, 1, parameterOf(station), T_TOLERANCE);
+  safeguardedRoot(evaluate, foremost, 1, parameterOf(station), T_TOLERANCE);
+  return point;
 }

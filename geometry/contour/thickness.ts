@@ -43,7 +43,7 @@ export interface Extremes {
 
 /** Camber below this is rounding: the section is symmetric. */
 const NO_CAMBER = 1e-12;
-const STEPS = 64;
+const STEPS = 48;
 /** The value is stationary, so its own error is of the order of the square of this. */
 const STATION_TOLERANCE = 1e-10;
 const MOST_STEPS = 90;

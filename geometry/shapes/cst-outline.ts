@@ -19,14 +19,21 @@ function power(base: number, exponent: number): number {
   return Math.pow(base, exponent);
 }
 
-/** Class function C = s^a c^b with s = sin(πt/2), c = cos(πt/2), a = 2 n1, b = 2 n2, and its derivatives by t. */
-function classFunction(s: number, c: number, a: number, b: number): readonly [number, number, number] {
-  const value = power(s, a) * power(c, b);
-  const first = a * power(s, a - 1) * power(c, b + 1) - b * power(s, a + 1) * power(c, b - 1);
-  let second = -(a * (b + 1) + b * (a + 1)) * value;
-  if (a !== 1) second += a * (a - 1) * power(a < 2 ? Math.max(s, END_OFFSET) : s, a - 2) * power(c, b + 2);
-  if (b !== 1) second += b * (b - 1) * power(s, a + 2) * power(b < 2 ? Math.max(c, END_OFFSET) : c, b - 2);
-  return [value, QUARTER * first, QUARTER * QUARTER * second];
+/** Class function C = s^a c^b with s = sin(πt/2), c = cos(πt/2), a = 2 n1, b = 2 n2, with its first and second derivative by t. */
+interface ClassFunction {
+  readonly value: number;
+  readonly first: number;
+  readonly second: number;
+}
+
+function classFunction(s: number, c: number, a: number, b: number): ClassFunction {
+  const sa = power(s, a);
+  const cb = power(c, b);
+  const first = a * power(s, a - 1) * cb * c - b * sa * s * power(c, b - 1);
+  let second = -(a * (b + 1) + b * (a + 1)) * sa * cb;
+  if (a !== 1) second += a * (a - 1) * power(a < 2 ? Math.max(s, END_OFFSET) : s, a - 2) * cb * c * c;
+  if (b !== 1) second += b * (b - 1) * sa * s * s * power(b < 2 ? Math.max(c, END_OFFSET) : c, b - 2);
+  return { value: sa * cb, first: QUARTER * first, second: QUARTER * QUARTER * second };
 }
 
 /** Ordinate of a surface in the shape's own chord frame. @param station 0 … 1 */
@@ -82,7 +89,7 @@ function surfaceCurve(shape: CstShape, surface: Surface): SurfaceCurve {
       const rest = c * c;
       const x1 = 2 * QUARTER * s * c;
       const x2 = 2 * QUARTER * QUARTER * (rest - x);
-      const [c0, c1, c2] = classFunction(s, c, a, b);
+      const { value: c0, first: c1, second: c2 } = classFunction(s, c, a, b);
       const s0 = evaluateScaled(value, x, rest);
       const s1 = evaluateScaled(first, x, rest);
       const s2 = evaluateScaled(second, x, rest);

@@ -39,6 +39,7 @@ describe('golden section', () => {
     expect(Math.abs(at - 0.3)).toBeLessThan(1e-7);
     expect(value).toBeCloseTo(2, 14);
     expect(goldenMaximum((x) => x, 0, 1, 1e-9).at).toBeCloseTo(1, 8);
+    expect(Math.abs(goldenMaximum((x) => -((x - 0.7) ** 2), 0, 1, 0).at - 0.7)).toBeLessThan(1e-7);
     expect(goldenMaximum(Math.abs, 2, 2, 1e-9)).toEqual({ at: 2, value: 2 });
   });
 });
