@@ -124,9 +124,8 @@ function placeHorizontal<Id extends string>(
   const start = Math.min(area.y + area.height - TEXT_HEIGHT, Math.max(lowest, edge + towards * levels.first));
   for (let level = 0; level < MOST_LEVELS; level++) {
     const y = start + towards * level * levels.step;
-    const centres = fits
-      ? [(seen.left + seen.right) / 2]
-      : [right + ARROW.length * 2 + CLEAR + width / 2, left - ARROW.length * 2 - CLEAR - width / 2];
+    const outside = ARROW.length * 2 + CLEAR + width / 2;
+    const centres = fits ? [(seen.left + seen.right) / 2] : [left - outside, right + outside];
     for (const x of centres) {
       const textBox = boxAround(x, y, width);
       const line = horizontalLine(left, right, x, width, fits);
@@ -138,10 +137,11 @@ function placeHorizontal<Id extends string>(
         )
       )
         continue;
+      const extensions = [spec.from, spec.to].map((end) => extension(end, y, towards));
+      if (extensions.some((ends) => occupied.crossesText(...ends))) continue;
       occupied.addText(textBox);
       for (const [a, b] of line) occupied.addLine({ x: a, y }, { x: b, y });
-      const extensions = [spec.from, spec.to].map((end) => extension(end, y, towards));
-      for (const [a, b] of extensions) occupied.addLine(a, b);
+      for (const ends of extensions) occupied.addLine(...ends);
       return {
         id: spec.id,
         text: spec.text,

@@ -56,7 +56,7 @@ export function sheetLayout(width: number, height: number): SheetLayout {
     width: frame.width,
     height: frame.height - titleBlock.height - remarkHeight,
   };
-  const sectionHeight = Math.round(drawing.height * (compact ? 0.6 : 0.63));
+  const sectionHeight = Math.round(drawing.height * (compact ? 0.6 : 0.65));
   const inset = compact ? { left: 26, right: 20 } : { left: w > 1000 ? 96 : 76, right: w > 1000 ? 104 : 72 };
   return {
     width: w,

@@ -42,7 +42,7 @@ export function sheetTransform(
 ): SheetTransform {
   const { section, chord } = layout;
   const height = Math.max(1e-6, (ordinates.maxY - ordinates.minY) * exaggeration);
-  const room = Math.max(40, section.height - (layout.compact ? 120 : 190));
+  const room = Math.max(40, section.height - (layout.compact ? 116 : 164));
   const fitted = Math.min(chord.right - chord.left, room / height);
   const middle = (chord.left + chord.right) / 2;
   const chordPixels = fitted * view.zoom;

@@ -69,7 +69,7 @@ function boatTailRange(shape: CstShape): FieldRange {
 /** Sets one typed value. Refused with a reason when it is out of range or the surfaces would cross. */
 export function withField(present: Present, field: FieldId, value: number): Edit {
   const range = fieldRange(present.shape, field);
-  if (!Number.isFinite(value)) return refused('type a number.');
+  if (!Number.isFinite(value)) return refused('Type a number.');
   if (value < range.min || value > range.max) return refused(outOfRange(range, field));
   if (field === 'chordMm') return { present: { ...present, chordMm: value }, notice: null };
   const result = checked(() =>
@@ -141,9 +141,9 @@ function refused(reason: string): Edit {
 
 function outOfRange({ min, max }: FieldRange, field: FieldId): string {
   const number = (value: number) => String(Number(value.toFixed(4)));
-  if (field === 'chordMm') return `the chord must lie between ${min} mm and ${max} mm.`;
-  if (field.startsWith('boatTail')) return `the angle must lie between ${number(min)}° and ${number(max)}°.`;
+  if (field === 'chordMm') return `The chord must lie between ${min} mm and ${max} mm.`;
+  if (field.startsWith('boatTail')) return `The angle must lie between ${number(min)}° and ${number(max)}°.`;
   if (field === 'n1' || field === 'n2' || /-\d+$/.test(field))
-    return `the value must lie between ${number(min)} and ${number(max)}.`;
-  return `the value must lie between ${number(min * 100)} % and ${number(max * 100)} % of chord.`;
+    return `The value must lie between ${number(min)} and ${number(max)}.`;
+  return `The value must lie between ${number(min * 100)} % and ${number(max * 100)} % of chord.`;
 }

@@ -180,7 +180,7 @@ function proposeNose(shape: CstShape, to: Point): Proposal | null {
   if (shape.n1 !== 0.5)
     return {
       shape,
-      notice: { code: 'refused', reason: 'the nose is round only with a nose exponent of 0.5.' },
+      notice: { code: 'refused', reason: 'The nose is round only with a nose exponent of 0.5.' },
     };
   return { shape: withNoseRadiusInProportion(shape, radius.value), notice: radius.notice };
 }

@@ -25,7 +25,7 @@ export function noticeText(notice: Notice, chordMm: number, units: Units): strin
     case 'limit':
       return `${notice.quantity} stops at its limit, ${notice.limit}.`;
     case 'refused':
-      return `Not applied: ${notice.reason}`;
+      return `Not applied. ${notice.reason}`;
     case 'nose-follows-thickness':
       return `In a 4-digit section the nose radius follows the thickness, now ${formatPercent(notice.maxThickness, 2)}.`;
     case 'converted':

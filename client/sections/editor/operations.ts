@@ -1,14 +1,16 @@
+import { type Point } from '#geometry/point.ts';
 import { fitCst } from '#geometry/contour/fitting.ts';
-import { measure } from '#geometry/contour/measures.ts';
 import { type CstShape, lowerOrder, raiseOrder, withEqualNoseRadius } from '#geometry/shapes/cst.ts';
 import { ShapeError } from '#geometry/shapes/error.ts';
 import { NACA4_LIMITS, type Naca4Shape } from '#geometry/shapes/naca4.ts';
 import { outlineOf, type Shape } from '#geometry/shapes/shape.ts';
 import { type Outline } from '#geometry/shapes/outline.ts';
+import { thicknessDistribution } from '#client/drawing/distribution.ts';
+import { drawSection } from '#client/drawing/section-drawing.ts';
 import { type Edit, type Present } from './present.ts';
 import { type Surface } from './handle-ids.ts';
 import { type Notice } from './notices.ts';
-import { checked, sentence } from './validity.ts';
+import { checked, reasonOf } from './validity.ts';
 
 const NOTHING: Edit = { present: null, notice: null };
 
@@ -25,27 +27,48 @@ export function convertToFreeForm(present: Present, order: number): Edit {
   });
 }
 
-/** The nearest 4-digit section by the measured thickness and camber, to a hundredth of a per cent. */
+/**
+ * The nearest 4-digit section by the thickness and camber of the outline where it lies on the sheet, to a hundredth of a
+ * per cent. (Measured from its own nose, the camber of a turned outline would come out different.)
+ */
 export function convertToDigits(present: Present): Edit {
   if (present.shape.kind === 'naca4') return NOTHING;
-  const outline = outlineOf(present.shape);
-  const measures = measure(outline);
-  const round = (value: number) => Math.round(value * 1e4) / 1e4;
-  const within = (value: number, { min, max }: { min: number; max: number }) =>
-    Math.min(max, Math.max(min, round(value)));
-  const maxCamber = within(measures.maxCamber, NACA4_LIMITS.maxCamber);
+  const drawing = drawSection(present.shape);
+  const { outline, measures } = drawing;
+  const crest = thicknessDistribution(drawing).camber.reduce((best, point) =>
+    point.y > best.y ? point : best,
+  );
+  const maxCamber = nearest(crest.y, NACA4_LIMITS.maxCamber);
   const shape: Naca4Shape = {
     kind: 'naca4',
     maxCamber,
-    maxCamberPosition:
-      maxCamber === 0 ? 0 : within(measures.maxCamberPosition, NACA4_LIMITS.maxCamberPosition),
-    maxThickness: within(measures.maxThickness, NACA4_LIMITS.maxThickness),
+    maxCamberPosition: maxCamber === 0 ? 0 : nearest(crest.x, NACA4_LIMITS.maxCamberPosition),
+    maxThickness: nearest(measures.maxThickness, NACA4_LIMITS.maxThickness),
     trailingEdge: outline.sharp ? 'closed' : 'open',
   };
   return attempt(present, () => ({
     shape,
     notice: { code: 'digits-taken', deviation: largestShift(outline, outlineOf(shape)) },
   }));
+}
+
+/** The highest point of a curve: of the parabola through its highest sample and the samples beside it. */
+function crestOf(points: readonly Point[]): Point {
+  const top = points.reduce((best, point, i) => (point.y > (points[best]?.y ?? -Infinity) ? i : best), 0);
+  const [a, b, c] = [points[top - 1], points[top], points[top + 1]];
+  if (!b) return { x: 0, y: 0 };
+  if (!a || !c) return b;
+  const rising = (b.y - a.y) / (b.x - a.x);
+  const falling = (c.y - b.y) / (c.x - b.x);
+  const bend = (falling - rising) / (c.x - a.x);
+  if (bend >= 0) return b;
+  const x = Math.min(c.x, Math.max(a.x, (a.x + b.x) / 2 - rising / (2 * bend)));
+  return { x, y: b.y + (x - b.x) * (rising + bend * (x - a.x)) };
+}
+
+/** The nearest accepted value in hundredths of a per cent. */
+function nearest(value: number, { min, max }: { readonly min: number; readonly max: number }): number {
+  return Math.min(max, Math.max(min, Math.round(value * 1e4) / 1e4));
 }
 
 /** Sets the order of one surface or both: raised without change, lowered by least squares. */
@@ -96,23 +119,32 @@ function attempt(present: Present, make: () => { shape: Shape; notice: Notice | 
     return { present: null, notice: { code: 'refused', reason: result.reason } };
   } catch (error) {
     if (!(error instanceof ShapeError)) throw error;
-    return {
-      present: null,
-      notice: { code: 'refused', reason: sentence(error.issues[0]?.message ?? error.message) },
-    };
+    return { present: null, notice: { code: 'refused', reason: reasonOf(error) } };
   }
 }
 
-/** Largest distance between points of the same station of two outlines, an upper bound of how far the outline moved. */
+const SHIFT_POINTS = 200;
+
+/** Largest distance of one outline from another, from points of the first to the chords between points of the second. */
 function largestShift(before: Outline, after: Outline): number {
-  let largest = 0;
-  for (let i = 0; i <= 200; i++) {
-    const t = i / 200;
-    for (const surface of ['upper', 'lower'] as const) {
-      const a = before[surface].at(t);
-      const b = after[surface].at(t);
-      largest = Math.max(largest, Math.hypot(a.x - b.x, a.y - b.y));
-    }
+  const along = (outline: Outline) => [
+    ...Array.from({ length: SHIFT_POINTS }, (_, i) => outline.upper.at(1 - i / SHIFT_POINTS)),
+    ...Array.from({ length: SHIFT_POINTS + 1 }, (_, i) => outline.lower.at(i / SHIFT_POINTS)),
+  ];
+  const chords = along(before);
+  return Math.max(...along(after).map((point) => distanceToPolyline(point, chords)));
+}
+
+function distanceToPolyline(point: Point, chords: readonly Point[]): number {
+  let nearest = Infinity;
+  for (let i = 1; i < chords.length; i++) {
+    const [a, b] = [chords[i - 1], chords[i]];
+    if (!a || !b) continue;
+    const [dx, dy] = [b.x - a.x, b.y - a.y];
+    const square = dx * dx + dy * dy;
+    const along = square === 0 ? 0 : ((point.x - a.x) * dx + (point.y - a.y) * dy) / square;
+    const share = Math.min(1, Math.max(0, along));
+    nearest = Math.min(nearest, Math.hypot(a.x + share * dx - point.x, a.y + share * dy - point.y));
   }
-  return largest;
+  return nearest;
 }

@@ -1,0 +1,77 @@
+import { useMemo, useRef } from 'react';
+import { type Shape } from '#geometry/shapes/shape.ts';
+import { drawSection } from '#client/drawing/section-drawing.ts';
+import { sheetLayout } from '#client/drawing/sheet-layout.ts';
+import { type TitleBlockFields } from '#client/drawing/title-block.tsx';
+import { useSize } from '#client/drawing/use-sheet-size.ts';
+import { EditorSheet } from './editor-sheet.tsx';
+import { type EditorAction, type EditorState } from './editor-state.ts';
+import { type SheetSettings } from './sheet-settings.ts';
+import { SheetTools } from './sheet-tools.tsx';
+import { useEditorKeys } from './use-editor-keys.ts';
+import { useSheetView } from './use-sheet-view.ts';
+
+interface SheetStageProps {
+  readonly state: EditorState;
+  readonly dispatch: (action: EditorAction) => void;
+  readonly settings: SheetSettings;
+  readonly onSettings: (change: Partial<SheetSettings>) => void;
+  readonly title: TitleBlockFields;
+  readonly ghost: Shape | null;
+  readonly enabled: boolean;
+  readonly onSave?: (() => void) | undefined;
+}
+
+/** The sheet in its place, with the row of tools above it and the part of the drawing that is in sight. */
+export function SheetStage({
+  state,
+  dispatch,
+  settings,
+  onSettings,
+  title,
+  ghost,
+  enabled,
+  onSave,
+}: SheetStageProps) {
+  const { shape } = state.present;
+  const [box, size] = useSize<HTMLDivElement>({ width: 960, height: 600 });
+  const layout = useMemo(() => sheetLayout(size.width, size.height), [size]);
+  const svg = useRef<SVGSVGElement>(null);
+  const control = useSheetView(svg, layout, drawSection(shape).measures.extents, settings.exaggeration);
+  useEditorKeys({
+    dispatch,
+    dragging: state.drag !== null,
+    onSave,
+    onZoom: control.zoom,
+    onFit: control.fit,
+  });
+  return (
+    <>
+      <SheetTools
+        settings={settings}
+        onSettings={onSettings}
+        snaps={enabled && shape.kind === 'naca4'}
+        zoomPercent={Math.round(control.view.zoom * 100)}
+        onZoom={control.zoom}
+        onFit={control.fit}
+      />
+      <div
+        ref={box}
+        className="h-[min(34rem,150vw)] min-h-110 w-full shrink-0 overflow-hidden border border-rule bg-sheet lg:h-auto lg:min-h-0 lg:flex-1"
+      >
+        <EditorSheet
+          element={svg}
+          layout={layout}
+          control={control}
+          state={state}
+          dispatch={dispatch}
+          settings={settings}
+          onSettings={onSettings}
+          title={title}
+          ghost={ghost}
+          enabled={enabled}
+        />
+      </div>
+    </>
+  );
+}

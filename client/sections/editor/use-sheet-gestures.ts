@@ -1,0 +1,129 @@
+import { useGesture } from '@use-gesture/react';
+import { type Dispatch, type RefObject, type SetStateAction, useEffect, useState } from 'react';
+import { type SheetLayout } from '#client/drawing/sheet-layout.ts';
+import { panBy, type SheetView, zoomAbout } from '#client/drawing/sheet-view.ts';
+
+const WHEEL_STEP = 0.0016;
+/** A wheel that counts lines instead of pixels. */
+const LINE_PIXELS = 16;
+
+interface PinchMemo {
+  readonly scale: number;
+  readonly x: number;
+  readonly y: number;
+}
+
+/**
+ * The gestures on the sheet: wheel and pinch zoom about the pointer; a drag on empty paper, with the middle button or
+ * with the space bar held pans; a double click fits. One finger up or down is left to the page, which scrolls.
+ * @returns Whether the paper is being moved, or would be by the next drag.
+ */
+export function useSheetGestures(
+  element: RefObject<SVGSVGElement | null>,
+  layout: SheetLayout,
+  setView: Dispatch<SetStateAction<SheetView>>,
+  fit: () => void,
+): boolean {
+  const space = useSpaceKey();
+  const [panning, setPanning] = useState(false);
+  useGesture(
+    {
+      onDrag: ({ delta: [dx, dy], event, first, last, pinching, cancel, tap }) => {
+        if (pinching || (first && !pansFrom(event, space))) {
+          cancel();
+          return;
+        }
+        if (first) setPanning(true);
+        if (!tap) setView((before) => panBy(before, layout, dx, dy));
+        if (last) setPanning(false);
+      },
+      onDragEnd: () => {
+        setPanning(false);
+      },
+      onWheel: ({ event, delta: [, dy] }) => {
+        event.preventDefault();
+        const factor = Math.exp(
+          -dy * WHEEL_STEP * (event.deltaMode === WheelEvent.DOM_DELTA_LINE ? LINE_PIXELS : 1),
+        );
+        setView((before) =>
+          zoomAbout(before, layout, pixelOf(element, event.clientX, event.clientY), factor),
+        );
+      },
+      onPinch: ({ origin: [x, y], offset: [scale], memo, event, first }) => {
+        event.preventDefault();
+        const last = first ? { scale, x, y } : (memo as PinchMemo);
+        const pixel = pixelOf(element, x, y);
+        setView((before) =>
+          zoomAbout(panBy(before, layout, x - last.x, y - last.y), layout, pixel, scale / last.scale),
+        );
+        return { scale, x, y } satisfies PinchMemo;
+      },
+      onDoubleClick: ({ event }) => {
+        if (isPaper(event.target)) fit();
+      },
+    },
+    {
+      target: element,
+      eventOptions: { passive: false },
+      drag: { pointer: { keys: false, buttons: [1, 4] }, filterTaps: true },
+      pinch: { scaleBounds: { min: 1e-3, max: 1e3 } },
+    },
+  );
+  return panning || space;
+}
+
+/** Is the space bar held down outside of fields, buttons and handles? */
+function useSpaceKey(): boolean {
+  const [held, setHeld] = useState(false);
+  useEffect(() => {
+    const down = (event: KeyboardEvent) => {
+      if (
+        event.key !== ' ' ||
+        event.defaultPrevented ||
+        event.ctrlKey ||
+        event.metaKey ||
+        takesSpace(event.target)
+      )
+        return;
+      event.preventDefault();
+      setHeld(true);
+    };
+    const up = (event: KeyboardEvent) => {
+      if (event.key === ' ') setHeld(false);
+    };
+    const away = () => {
+      setHeld(false);
+    };
+    window.addEventListener('keydown', down);
+    window.addEventListener('keyup', up);
+    window.addEventListener('blur', away);
+    return () => {
+      window.removeEventListener('keydown', down);
+      window.removeEventListener('keyup', up);
+      window.removeEventListener('blur', away);
+    };
+  }, []);
+  return held;
+}
+
+function takesSpace(target: EventTarget | null): boolean {
+  const takers =
+    'input, textarea, select, button, a, summary, dialog, [role="button"], [role="switch"], [role="slider"]';
+  return target instanceof Element && target.closest(takers) !== null;
+}
+
+const MIDDLE_BUTTON = 4;
+
+function pansFrom(event: Event, space: boolean): boolean {
+  return space || (event instanceof MouseEvent && event.buttons === MIDDLE_BUTTON) || isPaper(event.target);
+}
+
+/** Empty paper: neither a handle nor a dimension that can be pressed. */
+function isPaper(target: EventTarget | null): boolean {
+  return target instanceof Element && target.closest('[data-handle], [role="button"]') === null;
+}
+
+function pixelOf(element: RefObject<SVGSVGElement | null>, x: number, y: number): { x: number; y: number } {
+  const box = element.current?.getBoundingClientRect();
+  return { x: x - (box?.left ?? 0), y: y - (box?.top ?? 0) };
+}
