@@ -35,9 +35,7 @@ export function convertToDigits(present: Present): Edit {
   if (present.shape.kind === 'naca4') return NOTHING;
   const drawing = drawSection(present.shape);
   const { outline, measures } = drawing;
-  const crest = thicknessDistribution(drawing).camber.reduce((best, point) =>
-    point.y > best.y ? point : best,
-  );
+  const crest = crestOf(thicknessDistribution(drawing).camber);
   const maxCamber = nearest(crest.y, NACA4_LIMITS.maxCamber);
   const shape: Naca4Shape = {
     kind: 'naca4',
