@@ -1,0 +1,122 @@
+import { createServer } from 'node:http';
+import { type AddressInfo } from 'node:net';
+import { type Browser, chromium, type Page } from 'playwright-core';
+import { pino } from 'pino';
+import { createApp } from '#server/app.ts';
+import { demoEmail } from '#server/start/demo/people.ts';
+import { seedDemo } from '#server/start/demo/seed.ts';
+import { createTestDatabase, type TestDatabase } from '#tests/database.ts';
+import { type Watch, watch } from './watch.ts';
+
+export const password = 'marsh-reed-heron-7';
+export type DemoRole = 'owner' | 'designer' | 'builder' | 'technician';
+
+/** The whole application with the demo workshop in a database of its own, and a browser to use it with. */
+export interface TestApp {
+  readonly origin: string;
+  readonly database: TestDatabase;
+  /** A page of a fresh browser profile; what goes wrong in it is collected and fails the test at `close`. */
+  open(options?: OpenOptions): Promise<Visit>;
+  stop(): Promise<void>;
+}
+
+export interface OpenOptions {
+  readonly width?: number;
+  readonly height?: number;
+  readonly theme?: 'light' | 'dark';
+  readonly touch?: boolean;
+  /** Signs in as this person of the demo workshop, by the sign-in screen. */
+  readonly as?: DemoRole;
+}
+
+/** A page with the record of what went wrong on it. */
+export interface Visit {
+  readonly page: Page;
+  readonly watch: Watch;
+  /** Another tab of the same browser profile. */
+  tab(): Promise<Visit>;
+  /** Closes the profile; throws when there were console errors, page errors or failed requests. */
+  close(): Promise<void>;
+}
+
+/** Starts the application and the browser; TEST_CHROMIUM and TEST_CLIENT come from the project's set-up. */
+export async function startApp(): Promise<TestApp> {
+  const database = await createTestDatabase();
+  await seedDemo(database.knex, password);
+  const server = createServer();
+  await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve));
+  const origin = `http://127.0.0.1:${String((server.address() as AddressInfo).port)}`;
+  server.on(
+    'request',
+    createApp({
+      config: {
+        authSecret: 'a secret of tests, long enough to be one',
+        publicUrl: origin,
+        trustProxy: false,
+      },
+      knex: database.knex,
+      logger: pino({ level: 'silent' }),
+      clientFolder: process.env['TEST_CLIENT'] ?? null,
+    }),
+  );
+  const browser = await chromium.launch({
+    executablePath: process.env['TEST_CHROMIUM'] ?? '/usr/bin/chromium',
+    args: [
+      '--no-sandbox',
+      '--disable-gpu',
+      '--disable-quic',
+      '--no-first-run',
+      '--disable-background-networking',
+    ],
+  });
+  return {
+    origin,
+    database,
+    open: (options = {}) => visit(browser, origin, options),
+    stop: async () => {
+      await browser.close();
+      server.closeAllConnections();
+      await new Promise((resolve) => server.close(resolve));
+      await database.drop();
+    },
+  };
+}
+
+async function visit(browser: Browser, origin: string, options: OpenOptions): Promise<Visit> {
+  const { width = 1280, height = 800, theme = 'light', touch = false, as } = options;
+  const context = await browser.newContext({
+    baseURL: origin,
+    viewport: { width, height },
+    colorScheme: theme,
+    hasTouch: touch,
+    acceptDownloads: true,
+    timezoneId: 'UTC',
+    locale: 'en-GB',
+    reducedMotion: 'reduce',
+  });
+  context.setDefaultTimeout(15_000);
+  const watches: Watch[] = [];
+  const tab = async (): Promise<Visit> => {
+    const page = await context.newPage();
+    const watched = watch(page);
+    watches.push(watched);
+    return { page, watch: watched, tab, close };
+  };
+  const close = async () => {
+    await context.close();
+    const wrong = watches.flatMap(({ problems }) => problems());
+    if (wrong.length > 0) throw new Error(`On the page:\n${wrong.join('\n')}`);
+  };
+  const first = await tab();
+  if (as) await signIn(first.page, as);
+  return first;
+}
+
+/** Signs in by the sign-in screen and waits for the library. */
+export async function signIn(page: Page, role: DemoRole): Promise<void> {
+  await page.goto('/sign-in');
+  await page.getByLabel('E-mail').fill(demoEmail(role));
+  await page.getByLabel('Password', { exact: true }).fill(password);
+  await page.getByRole('button', { name: 'Sign in' }).click();
+  await page.waitForURL(/\/sections(\?|$)/);
+}
