@@ -47,6 +47,7 @@ export default function SignInForm({ email = '', onSignedIn }: SignInFormProps) 
         label="Password"
         type="password"
         autoComplete="current-password"
+        autoFocus={email !== ''}
         error={errors.password?.message}
         {...form.register('password')}
       />

@@ -7,10 +7,15 @@ export function sentenceOf(error: unknown): string {
   if (error instanceof ProblemError) {
     if (error.status === 503 || error.status === 502)
       return 'The server is not ready at the moment. Try again shortly.';
-    return error.message;
+    if (error.status === 401) return 'Your session has ended.';
+    return ended(error.message);
   }
-  if (error instanceof Error && error.message !== '') return error.message;
+  if (error instanceof Error && error.message !== '') return ended(error.message);
   return 'Something went wrong that this page did not expect.';
+}
+
+function ended(sentence: string): string {
+  return /[.!?]$/.test(sentence) ? sentence : `${sentence}.`;
 }
 
 export interface ErrorStateProps {

@@ -1,5 +1,11 @@
-import { keepPreviousData, useInfiniteQuery } from '@tanstack/react-query';
+import {
+  type InfiniteData,
+  keepPreviousData,
+  useInfiniteQuery,
+  type UseInfiniteQueryResult,
+} from '@tanstack/react-query';
 import { lazy, Suspense, useState } from 'react';
+import { type Reply } from '#client/api/request.ts';
 import { sectionsQuery } from '#client/api/sections.ts';
 import { type KeyGroup, useHotkey, useKeys } from '#client/app/keys.tsx';
 import { useMedia } from '#client/app/media.ts';
@@ -16,12 +22,10 @@ import { type Layout, Toolbar } from './toolbar.tsx';
 
 const NewSectionDialog = lazy(() => import('./new-section-dialog.tsx'));
 
-const KEYS: KeyGroup = {
+const KEYS: KeyGroup = { title: 'Sections', entries: [{ keys: ['/'], does: 'Search' }] };
+const WRITER_KEYS: KeyGroup = {
   title: 'Sections',
-  entries: [
-    { keys: ['/'], does: 'Search' },
-    { keys: ['N'], does: 'New section' },
-  ],
+  entries: [...KEYS.entries, { keys: ['N'], does: 'New section' }],
 };
 /** From here on the table has room for all its columns (rem, so that larger type counts). */
 const WIDE = '(min-width: 64rem)';
@@ -33,24 +37,28 @@ export function Component() {
   const wide = useMedia(WIDE);
   const readsAll = useMay('sections.read');
   const mayWrite = useMay('sections.write');
+  const list = useInfiniteQuery({ ...sectionsQuery(filterOf(address)), placeholderData: keepPreviousData });
+  const count = list.data?.pages.reduce((sum, page) => sum + page.items.length, 0);
   const layout = readsAll ? (wide ? 'table' : 'list') : 'released';
   const make = () => {
     setMakes(true);
   };
-  useKeys(KEYS);
-  useHotkey('n', () => {
-    if (mayWrite) make();
-  });
+  const onNew = mayWrite ? make : undefined;
+  useKeys(mayWrite ? WRITER_KEYS : KEYS);
+  useHotkey('n', () => onNew?.());
   return (
     <LibraryNoticeContext value={setEvent}>
       <div data-page="flowing" className="mx-auto flex w-full max-w-[100rem] flex-col gap-3 px-4 pt-4 pb-10">
         <title>Sections · Ribwright</title>
-        <div className="flex min-h-8 flex-wrap items-center gap-x-6 gap-y-2">
+        <div className="flex min-h-8 flex-wrap items-center gap-x-4 gap-y-2">
           <h1 className="text-xl font-extrabold">{readsAll ? 'Sections' : 'Released sections'}</h1>
+          <p role="status" className="text-graphite">
+            {count !== undefined && countOf(count, list.hasNextPage)}
+          </p>
           {event && <LibraryNotice event={event} />}
         </div>
-        <Toolbar address={address} onChange={change} layout={layout} onNew={mayWrite ? make : undefined} />
-        <Sections address={address} onChange={change} layout={layout} onNew={mayWrite ? make : undefined} />
+        <Toolbar address={address} onChange={change} layout={layout} onNew={onNew} />
+        <Sections list={list} address={address} onChange={change} layout={layout} onNew={onNew} />
         {makes && (
           <Suspense>
             <NewSectionDialog
@@ -66,14 +74,14 @@ export function Component() {
 }
 
 interface SectionsProps {
+  list: UseInfiniteQueryResult<InfiniteData<Reply<'listSections'>>>;
   address: ListAddress;
   onChange: (change: Partial<ListAddress>) => void;
   layout: Layout;
   onNew: (() => void) | undefined;
 }
 
-function Sections({ address, onChange, layout, onNew }: SectionsProps) {
-  const list = useInfiniteQuery({ ...sectionsQuery(filterOf(address)), placeholderData: keepPreviousData });
+function Sections({ list, address, onChange, layout, onNew }: SectionsProps) {
   if (list.isError && !list.data) {
     return (
       <ErrorState
@@ -91,22 +99,24 @@ function Sections({ address, onChange, layout, onNew }: SectionsProps) {
       {layout === 'table' && <SectionTable {...rows} address={address} onSort={onChange} />}
       {layout === 'list' && <SectionList {...rows} />}
       {layout === 'released' && <ReleasedList {...rows} />}
-      <div className="flex min-h-11 flex-wrap items-center gap-4 text-xs text-graphite">
-        <p role="status">{sections !== null && countOf(sections.length, list.hasNextPage)}</p>
-        {list.hasNextPage && (
-          <Button busy={list.isFetchingNextPage} onClick={() => void list.fetchNextPage()}>
-            Show more
-          </Button>
-        )}
-        {list.isError && (
-          <Notice tone="error">{sentenceOf(list.error)} What is shown was loaded before.</Notice>
-        )}
-      </div>
+      {list.isError && (
+        <Notice tone="error">{sentenceOf(list.error)} What is shown was loaded before.</Notice>
+      )}
+      {list.hasNextPage && (
+        <Button
+          busy={list.isFetchingNextPage}
+          onClick={() => void list.fetchNextPage()}
+          className="self-start"
+        >
+          Show more
+        </Button>
+      )}
     </>
   );
 }
 
 function countOf(count: number, more: boolean): string {
-  if (more) return `The first ${String(count)} sections`;
-  return count === 1 ? '1 section' : `${String(count)} sections`;
+  if (more) return `${String(count)} shown, there are more`;
+  if (count === 0) return 'none';
+  return `${String(count)} shown`;
 }

@@ -22,7 +22,7 @@ describe('library', () => {
       expect(within(row).getByText(text)).toBeTruthy();
     expect(row.textContent).toContain('v3 released');
     expect(within(row).getByRole('link').getAttribute('href')).toBe(`/sections/${heron.id}`);
-    expect(screen.getByText('2 sections')).toBeTruthy();
+    expect(screen.getByText('2 shown')).toBeTruthy();
   });
 
   it('shows rows of the true size while the first page is on its way', async () => {
@@ -113,7 +113,7 @@ describe('library', () => {
         ),
     });
     openAt('/sections');
-    expect(await screen.findByText('The first 1 sections')).toBeTruthy();
+    expect(await screen.findByText('1 shown, there are more')).toBeTruthy();
     await userEvent.click(screen.getByRole('button', { name: 'Show more' }));
     expect(await screen.findByText('Tail fin')).toBeTruthy();
     expect(screen.getByText('Heron outer panel')).toBeTruthy();
