@@ -2,6 +2,7 @@ import type { Point } from '../point.ts';
 import type { Outline, SurfaceCurve } from '../shapes/outline.ts';
 import { arcDistance, arcExtremes, arcHeight, biarc, type Arc } from './biarc.ts';
 import { goldenMaximum } from './roots.ts';
+import { TOLERANCE_FRACTION } from './sampling.ts';
 
 /**
  * An outline of circular arcs and straight pieces, in fractions of chord: upper trailing edge, nose, lower trailing edge, as a
@@ -22,15 +23,19 @@ export interface ArcContour {
 }
 
 /** Points at which an arc is compared with the outline while it is sought; the lobes of the error need about ten each. */
-const SAMPLES = 20;
-/** Part of the tolerance that the search uses; what lies between the compared points stays within the rest. */
+const SEARCH_SAMPLES = 20;
+/** Part of the tolerance that the search may use, and by which it takes less when the arcs found turn out to exceed the tolerance. */
 const SEARCH_SHARE = 0.98;
+/** Points at which the arcs found are compared with the outline; then the peak is refined. */
+const CHECK_SAMPLES = 100;
 /** The reach of a pair is found to this part of itself. */
 const REACH_PRECISION = 1e-3;
 /** A remainder shorter than this part of the piece before it is shared out between the two. */
 const SHORT_REMAINDER = 0.1;
 /** A peak of the error is found to this part of the distance between samples. */
-const PEAK_PRECISION = 1e-4;
+const PEAK_PRECISION = 0.02;
+/** Places nearer than this are too near to be told apart when halved. */
+const SMALLEST_STEP = 1e-14;
 /** An arc that is lower than this part of the tolerance is a straight piece. */
 const FLAT_SHARE = 1e-3;
 
@@ -43,21 +48,25 @@ const FLAT_SHARE = 1e-3;
  * Source: that the tangent arcs through two points with given tangents have one free parameter: K. M. Bolton, "Biarc curves",
  * Computer-Aided Design 7 (1975), from memory; the joint on the curve is derived at {@link biarc}.
  *
- * @param tolerance largest distance between outline and arcs, fraction of chord, greater than 0
+ * @param tolerance largest distance between outline and arcs, fraction of chord, 1e-8 to 0.1
  * @param shortest shortest arc that is written, fraction of chord, from 0 to `tolerance`
  * @throws RangeError when `tolerance` or `shortest` is outside its range
  */
 export function arcContour(outline: Outline, tolerance: number, shortest = 0): ArcContour {
-  if (!(tolerance > 0 && tolerance < Infinity))
-    throw new RangeError(`tolerance must be greater than 0, not ${tolerance}`);
+  const { min, max } = TOLERANCE_FRACTION;
+  if (!(tolerance >= min && tolerance <= max))
+    throw new RangeError(`tolerance must be from ${min} to ${max}, not ${tolerance}`);
   if (!(shortest >= 0 && shortest <= tolerance))
     throw new RangeError(`shortest must be from 0 to the tolerance, not ${shortest}`);
   const track = trackOf(outline);
-  const fit = (from: number, to: number) => fitPieces(track, from, to, tolerance, shortest);
-  const pieces = track.breaks
-    .slice(1)
-    .flatMap((to, i) => piecesBetween(track, fit, track.breaks[i] ?? to, to));
-  return assemble(track, pieces, outline.sharp);
+  for (let allowed = SEARCH_SHARE * tolerance; ; allowed *= SEARCH_SHARE) {
+    const fit = (from: number, to: number) => fitPieces(track, from, to, allowed, shortest);
+    const pieces = track.breaks
+      .slice(1)
+      .flatMap((to, i) => piecesBetween(track, fit, track.breaks[i] ?? to, to));
+    const arcs = assemble(track, pieces, outline.sharp);
+    if (largestArcError(outline, arcs) <= tolerance) return arcs;
+  }
 }
 
 /** Largest distance of the outline from its arcs, fraction of chord, by dense comparison and refinement at its peak. */
@@ -146,7 +155,11 @@ function piecesBetween(track: Track, fit: Fit, from: number, to: number): readon
     pieces.push(...found);
     start = found.at(-1)?.end ?? to;
   }
-  return pieces;
+  const [only, ...more] = pieces;
+  if (to - from < 1 || more.length > 0 || only?.bulge !== 0) return pieces;
+  // A whole surface as one straight piece would leave the outline without area.
+  const middle = (from + to) / 2;
+  return [...piecesBetween(track, fit, from, middle), ...piecesBetween(track, fit, middle, to)];
 }
 
 /** The pieces that reach farthest from `start`, by bisection; a short enough straight piece always fits. */
@@ -203,11 +216,15 @@ function flattened(arc: Arc, tolerance: number): Arc {
 }
 
 function follows(track: Track, arc: Arc, from: number, to: number, tolerance: number): boolean {
-  for (let i = 1; i < SAMPLES; i += 1) {
-    if (arcDistance(track.at(from + ((to - from) * i) / SAMPLES), arc) > SEARCH_SHARE * tolerance)
-      return false;
+  for (let i = 1; i < SEARCH_SAMPLES; i += 1) {
+    if (arcDistance(track.at(placeAt(from, to, i / SEARCH_SAMPLES)), arc) > tolerance) return false;
   }
   return true;
+}
+
+/** Places between two, closer to each other at both ends, where the outline may bend fast. */
+function placeAt(from: number, to: number, share: number): number {
+  return from + ((to - from) * (1 - Math.cos(Math.PI * share))) / 2;
 }
 
 function assemble(track: Track, pieces: readonly Piece[], sharp: boolean): ArcContour {
@@ -239,17 +256,13 @@ function arcsOf({ x, y, bulge, place }: ArcContour) {
 
 /** Largest value of `error` between two places: dense sampling, then golden section about the largest sample. */
 function peakBetween(error: (place: number) => number, from: number, to: number): number {
-  const step = (to - from) / (4 * SAMPLES);
-  let [largest, at] = [0, from];
-  for (let i = 1; i < 4 * SAMPLES; i += 1) {
-    const value = error(from + i * step);
-    if (value > largest) [largest, at] = [value, from + i * step];
+  const at = (i: number) => placeAt(from, to, i / CHECK_SAMPLES);
+  let [largest, peak] = [0, 1];
+  for (let i = 1; i < CHECK_SAMPLES; i += 1) {
+    const value = error(at(i));
+    if (value > largest) [largest, peak] = [value, i];
   }
-  const peak = goldenMaximum(
-    error,
-    Math.max(at - step, from),
-    Math.min(at + step, to),
-    step * PEAK_PRECISION,
-  );
-  return Math.max(largest, peak.value);
+  const [low, high] = [at(peak - 1), at(peak + 1)];
+  const precision = Math.max((high - low) * PEAK_PRECISION, SMALLEST_STEP);
+  return Math.max(largest, goldenMaximum(error, low, high, precision).value);
 }

@@ -18,6 +18,7 @@ import {
   dxfOptionsSchema,
   svgOptionsSchema,
 } from './options.ts';
+import { roundContour, roundTo, withoutRepeats } from './rounding.ts';
 import { sectionDrawing } from './section-drawing.ts';
 import { SVG_DECIMALS, writeSvg } from './svg.ts';
 
@@ -132,11 +133,12 @@ function datFile(outline: Outline, identity: FileIdentity, options: DatOptions):
     ? `tolerance ${options.toleranceMm} mm`
     : `${options.points} points per surface`;
   const rounded = roundContour(scaleContour(contour, chordMm ?? 1), options.decimals);
+  const written = toTolerance ? withoutRepeats(rounded) : rounded;
   const title = headerLines(identity, { chordMm, spacing }).join(', ');
   return {
     chordMm,
-    text: writeDat(rounded, title, options),
-    facts: contourFacts(outline, rounded, chordMm, options.decimals),
+    text: writeDat(written, title, options),
+    facts: contourFacts(outline, written, chordMm, options.decimals),
   };
 }
 
@@ -163,7 +165,7 @@ function svgFile(
 
 function lineForm(outline: Outline, chordMm: number, toleranceMm: number, decimals: number) {
   const contour = sampleToTolerance(outline, (toleranceMm - roundingReach(decimals)) / chordMm);
-  const chain = roundContour(scaleContour(contour, chordMm), decimals);
+  const chain = withoutRepeats(roundContour(scaleContour(contour, chordMm), decimals));
   return { chain, extents: extents(chain), facts: contourFacts(outline, chain, chordMm, decimals) };
 }
 
@@ -215,14 +217,4 @@ function contourFacts(
 /** How far rounding to `decimals` can move a point; taken off the tolerance beforehand, so that the written file keeps it. */
 function roundingReach(decimals: number): number {
   return Math.SQRT1_2 * 10 ** -decimals;
-}
-
-function roundTo(value: number, decimals: number): number {
-  const unit = 10 ** decimals;
-  return Math.round(value * unit) / unit;
-}
-
-function roundContour(contour: Contour, decimals: number): Contour {
-  const round = (value: number) => roundTo(value, decimals);
-  return { ...contour, x: contour.x.map(round), y: contour.y.map(round) };
 }

@@ -232,6 +232,22 @@ describe('every format', () => {
     }
   });
 
+  test('states a finite error and its points where points fall together when rounded', () => {
+    const flat = checkShape({
+      kind: 'cst',
+      upper: [0.07, 0.033, 0.14, 0.02],
+      lower: [0, 0, 0, 1e-9, 0, 0],
+      n1: 0.5356,
+      n2: 0.559,
+      trailingEdgeGap: 0.002,
+    });
+    for (const arcs of [false, true]) {
+      const { text, facts } = dxfOf(flat, { chordMm: 18, toleranceMm: 1, arcs });
+      expect(facts.points).toBe(outlineVertices(text).length);
+      expect(facts.largestErrorMm).toBeLessThanOrEqual(1);
+    }
+  });
+
   test('checks the options again', () => {
     const hostile = {
       ...parseExportOptions('dxf', { chordMm: 220 }),
