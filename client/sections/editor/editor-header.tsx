@@ -28,10 +28,15 @@ export const EditorHeader = memo(function EditorHeader(props: EditorHeaderProps)
   const { onUndo, onRedo, onExport, onSave } = props;
   return (
     <header className="flex flex-wrap items-center justify-between gap-x-4 gap-y-2 print:hidden">
-      <div className="flex min-w-0 flex-1 basis-72 flex-wrap items-baseline gap-x-3">
+      <div className="min-w-0 flex-1 basis-72">
         <SectionName sectionId={sectionId} name={name} />
-        <span className="text-graphite">{description}</span>
-        <DraftState dirty={dirty} basedOn={basedOn} keeper={keeper} />
+        {/* One line whatever it says, so that the sheet below keeps its place while values change. */}
+        <div className="flex min-w-0 items-baseline gap-x-3 max-sm:flex-col">
+          <span className="max-w-full min-w-0 shrink-[999] truncate text-graphite" title={description}>
+            {description}
+          </span>
+          <DraftState dirty={dirty} basedOn={basedOn} keeper={keeper} />
+        </div>
       </div>
       <div className="flex flex-wrap gap-2">
         <Button disabled={!canUndo} onClick={onUndo} title="Undo (Ctrl Z)">
