@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import { Link, useParams } from 'react-router';
-import { versionSchema } from '#server/contracts/sections.ts';
+import { type Section, versionSchema } from '#server/contracts/sections.ts';
 import { ProblemError } from '#client/api/request.ts';
 import { sectionQuery, versionQuery } from '#client/api/sections.ts';
 import { useMay } from '#client/app/session.tsx';
@@ -21,7 +21,7 @@ export function Component() {
 function VersionByNumber({ sectionId, number }: { readonly sectionId: string; readonly number: number }) {
   const version = useQuery(versionQuery(sectionId, number));
   const section = useQuery(sectionQuery(sectionId));
-  if (version.data) return <VersionView version={version.data} section={section.data ?? null} />;
+  if (version.data) return <VersionView version={version.data} inForce={inForceOf(section)} />;
   if (version.isPending) return <VersionSkeleton />;
   if (version.error instanceof ProblemError && [404, 422].includes(version.error.status)) {
     return <NoSuchVersion sectionId={sectionId} number={number} />;
@@ -35,6 +35,18 @@ function VersionByNumber({ sectionId, number }: { readonly sectionId: string; re
       />
     </div>
   );
+}
+
+/** A section that a technician cannot see any more has no version in force; undefined while it is not known. */
+function inForceOf({
+  data,
+  error,
+}: {
+  readonly data?: Section | undefined;
+  readonly error: unknown;
+}): number | null | undefined {
+  if (data) return data.releasedNumber;
+  return error instanceof ProblemError && error.status === 404 ? null : undefined;
 }
 
 /** A person who may read released versions only is led to the one in force. */

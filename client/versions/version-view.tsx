@@ -1,17 +1,16 @@
 import { useMemo, useState } from 'react';
 import { Link, useSearchParams } from 'react-router';
-import { measure } from '#geometry/contour/measures.ts';
-import { outlineOf } from '#geometry/shapes/shape.ts';
-import { type Section, type SectionVersion } from '#server/contracts/sections.ts';
+import { type SectionVersion } from '#server/contracts/sections.ts';
 import { useMay, useMe } from '#client/app/session.tsx';
 import { formatLength, useUnits } from '#client/app/units.ts';
+import { drawSection } from '#client/drawing/section-drawing.ts';
 import { StaticSheet, type TitleBlockFields } from '#client/drawing/static-sheet.tsx';
+import { MeasuredValues } from '#client/sections/editor/measured-values.tsx';
 import { Button } from '#client/ui/button.tsx';
 import { QuantityField } from '#client/ui/quantity-field.tsx';
 import { StatusMark } from '#client/ui/status-mark.tsx';
 import { DownloadsList } from './downloads-list.tsx';
 import { ExportPanel } from './export-panel.tsx';
-import { MeasuredValues } from './measured-values.tsx';
 import { Part } from './part.tsx';
 import { ReleaseDialog, WithdrawDialog } from './release-dialog.tsx';
 import { ShapeValues } from './shape-values.tsx';
@@ -20,25 +19,25 @@ import { VersionRecord } from './version-record.tsx';
 
 interface VersionViewProps {
   readonly version: SectionVersion;
-  /** The section it belongs to, or null while that is not known. */
-  readonly section: Section | null;
+  /** Number of the version in force, null when none is, undefined while it is not known. */
+  readonly inForce: number | null | undefined;
 }
 type OpenDialog = 'export' | 'release' | 'withdraw' | null;
 
 /** One immutable version: its drawing, what it measures, who made it and why, its standing and its files. */
-export function VersionView({ version, section }: VersionViewProps) {
+export function VersionView({ version, inForce }: VersionViewProps) {
   const [open, setOpen] = useState<OpenDialog>(null);
   const [chordMm, setChordMm] = useChord();
   const units = useUnits();
   const owner = useMe().workshop.name;
-  const measures = useMemo(() => measure(outlineOf(version.shape)), [version.shape]);
+  const drawing = useMemo(() => drawSection(version.shape), [version.shape]);
   const close = () => setOpen(null);
   return (
     <div data-page="flowing" className="grid flex-1 lg:grid-cols-[minmax(0,1fr)_22rem] print:block">
       <title>{`${version.sectionName} v${version.number} · Ribwright`}</title>
       <div className="flex min-w-0 flex-col gap-3 p-4">
         <Head version={version} onOpen={setOpen} />
-        <Standing version={version} inForce={section ? section.releasedNumber : undefined} />
+        <Standing version={version} inForce={inForce} />
         <div className="lg:max-w-[calc((100dvh-11rem)*1.5)] print:max-w-none">
           <StaticSheet shape={version.shape} chordMm={chordMm} title={titleOf(version, owner)} />
         </div>
@@ -62,7 +61,7 @@ export function VersionView({ version, section }: VersionViewProps) {
           <ShapeValues shape={version.shape} chordMm={chordMm} units={units} />
         </Part>
         <Part title="Measured on the contour">
-          <MeasuredValues measures={measures} chordMm={chordMm} units={units} />
+          <MeasuredValues drawing={drawing} chordMm={chordMm} units={units} station={SPAR_STATION} />
         </Part>
         <Part title="Record">
           <VersionRecord version={version} />
@@ -145,6 +144,8 @@ function Downloads({ version }: { readonly version: SectionVersion }) {
 }
 
 const FIRST_CHORD_MM = 220;
+/** Where the thickness is read off beside the sheet: about where the spar of most wings stands. */
+const SPAR_STATION = 0.3;
 
 /** The chord that the sheet is drawn at, kept in the address so that a link shows the same sheet. */
 function useChord(): readonly [number, (chordMm: number) => void] {
