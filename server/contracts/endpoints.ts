@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { datOptionsSchema, dxfOptionsSchema, svgOptionsSchema } from '#geometry/formats/export.ts';
+import { datOptionsSchema, dxfOptionsSchema, svgOptionsSchema } from '#geometry/formats/options.ts';
 import { idSchema, pageQuerySchema } from './common.ts';
 import { healthSchema, meSchema, passwordChangeSchema, preferencesSchema } from './people.ts';
 import { type Permission } from './permissions.ts';
