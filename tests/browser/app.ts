@@ -1,6 +1,6 @@
 import { createServer } from 'node:http';
 import { type AddressInfo } from 'node:net';
-import { type Browser, chromium, type Page } from 'playwright-core';
+import { type Browser, type BrowserContext, chromium, type Page } from 'playwright-core';
 import { pino } from 'pino';
 import { createApp } from '#server/app.ts';
 import { demoEmail } from '#server/start/demo/people.ts';
@@ -25,7 +25,7 @@ export interface OpenOptions {
   readonly height?: number;
   readonly theme?: 'light' | 'dark';
   readonly touch?: boolean;
-  /** Signs in as this person of the demo workshop, by the sign-in screen. */
+  /** Signs in as this person of the demo workshop: by the sign-in screen at first, then with the session it gave. */
   readonly as?: DemoRole;
 }
 
@@ -35,7 +35,9 @@ export interface Visit {
   readonly watch: Watch;
   /** Another tab of the same browser profile. */
   tab(): Promise<Visit>;
-  /** Closes the profile; throws when there were console errors, page errors or failed requests. */
+  /** Throws when there were console errors, page errors or failed requests since the profile was opened. */
+  check(): void;
+  /** Closes the profile, after the same check. */
   close(): Promise<void>;
 }
 
@@ -69,10 +71,11 @@ export async function startApp(): Promise<TestApp> {
       '--disable-background-networking',
     ],
   });
+  const sessions: Sessions = new Map();
   return {
     origin,
     database,
-    open: (options = {}) => visit(browser, origin, options),
+    open: (options = {}) => visit(browser, origin, sessions, options),
     stop: async () => {
       await browser.close();
       server.closeAllConnections();
@@ -82,8 +85,17 @@ export async function startApp(): Promise<TestApp> {
   };
 }
 
-async function visit(browser: Browser, origin: string, options: OpenOptions): Promise<Visit> {
+/** The cookies of those who have signed in, so that not every story pays for hashing a password. */
+type Sessions = Map<DemoRole, Awaited<ReturnType<BrowserContext['storageState']>>>;
+
+async function visit(
+  browser: Browser,
+  origin: string,
+  sessions: Sessions,
+  options: OpenOptions,
+): Promise<Visit> {
   const { width = 1280, height = 800, theme = 'light', touch = false, as } = options;
+  const session = as && sessions.get(as);
   const context = await browser.newContext({
     baseURL: origin,
     viewport: { width, height },
@@ -93,6 +105,7 @@ async function visit(browser: Browser, origin: string, options: OpenOptions): Pr
     timezoneId: 'UTC',
     locale: 'en-GB',
     reducedMotion: 'reduce',
+    ...(session ? { storageState: session } : {}),
   });
   context.setDefaultTimeout(15_000);
   const watches: Watch[] = [];
@@ -100,15 +113,24 @@ async function visit(browser: Browser, origin: string, options: OpenOptions): Pr
     const page = await context.newPage();
     const watched = watch(page);
     watches.push(watched);
-    return { page, watch: watched, tab, close };
+    return { page, watch: watched, tab, check, close };
   };
-  const close = async () => {
-    await context.close();
+  const check = () => {
     const wrong = watches.flatMap(({ problems }) => problems());
     if (wrong.length > 0) throw new Error(`On the page:\n${wrong.join('\n')}`);
   };
+  const close = async () => {
+    await context.close();
+    check();
+  };
   const first = await tab();
-  if (as) await signIn(first.page, as);
+  if (as && session) {
+    await first.page.goto('/');
+    await first.page.waitForURL(/\/sections(\?|$)/);
+  } else if (as) {
+    await signIn(first.page, as);
+    sessions.set(as, await context.storageState());
+  }
   return first;
 }
 
