@@ -28,4 +28,4 @@ export function ExportCautions({ format, unitChord }: ExportCautionsProps) {
 }
 
 const units =
-  'Check units and origin: the file is in mm, with the nose at x = 0 and the chord line on y = 0, whatever unit this page shows.';
+  'Check units and origin: the file is in mm, whatever unit this page shows; its chord line begins at x = 0 on y = 0.';

@@ -10,7 +10,7 @@ export function FactList({
     <dl className="grid grid-cols-[auto_1fr] gap-x-4 gap-y-1">
       {facts.map(([name, value]) => (
         <Fragment key={name}>
-          <dt className="text-graphite">{name}</dt>
+          <dt>{name}</dt>
           <dd className="min-w-0 text-right font-semibold break-words">{value}</dd>
         </Fragment>
       ))}

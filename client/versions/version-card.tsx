@@ -8,7 +8,7 @@ import { shortDate } from '#client/app/dates.ts';
 const thumbnail = { width: 148, height: 40 };
 const frame = 'flex h-full w-44 shrink-0 flex-col border-t-2 px-2 pt-2';
 const action =
-  'min-h-8 px-1 text-xs text-graphite underline decoration-rule underline-offset-4 hover:text-ink aria-pressed:bg-ink aria-pressed:text-sheet aria-pressed:no-underline pointer-coarse:min-h-11';
+  'my-1 h-6 rounded px-1 text-xs text-graphite underline decoration-rule underline-offset-4 hover:text-ink aria-pressed:bg-ink aria-pressed:text-sheet aria-pressed:no-underline pointer-coarse:my-0 pointer-coarse:h-11';
 
 interface VersionCardProps {
   readonly version: SectionVersion;
