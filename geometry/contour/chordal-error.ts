@@ -56,7 +56,8 @@ function segmentDistance(vertices: readonly Point[], segment: number, point: Poi
   if (!a || !b) return Infinity;
   const [dx, dy] = [b.x - a.x, b.y - a.y];
   const [px, py] = [point.x - a.x, point.y - a.y];
-  const share = Math.min(1, Math.max(0, (px * dx + py * dy) / (dx * dx + dy * dy)));
+  const squared = dx * dx + dy * dy;
+  const share = squared === 0 ? 0 : Math.min(1, Math.max(0, (px * dx + py * dy) / squared));
   const [ex, ey] = [px - share * dx, py - share * dy];
   return Math.sqrt(ex * ex + ey * ey);
 }

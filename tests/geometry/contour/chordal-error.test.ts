@@ -67,4 +67,14 @@ describe('the largest chordal error', () => {
     const moved = { ...contour, y: contour.y.map((y) => y + 0.001) };
     expect(Math.abs(largestChordalError(outline, moved) - 0.001)).toBeLessThan(5e-5);
   });
+
+  test('is a number when two vertices coincide', () => {
+    const outline = cstOutline(UNIT);
+    const { x, y, noseIndex, sharp } = sampleCosine(outline, 40);
+    const twice = (values: Float64Array) => Float64Array.from([...values.slice(0, 6), ...values.slice(5)]);
+    const doubled = { x: twice(x), y: twice(y), noseIndex: noseIndex + 1, sharp };
+    expect(largestChordalError(outline, doubled)).toBe(
+      largestChordalError(outline, { x, y, noseIndex, sharp }),
+    );
+  });
 });
