@@ -2,6 +2,7 @@ import { zodResolver } from '@hookform/resolvers/zod';
 import { type FormEvent, useMemo, useRef } from 'react';
 import { type UseFormReturn, useForm, useWatch } from 'react-hook-form';
 import { useNavigate } from 'react-router';
+import { v4 } from 'uuid';
 import { fieldErrors } from '#client/api/request.ts';
 import { useCreateSection } from '#client/api/sections.ts';
 import { Button } from '#client/ui/button.tsx';
@@ -77,7 +78,7 @@ function useMakeSection(form: UseFormReturn<NewSectionForm>) {
     }
     const section = { name: typed.name, purpose: typed.purpose, shape: starting.shape };
     const as = JSON.stringify(section);
-    if (intended.current?.as !== as) intended.current = { key: crypto.randomUUID(), as };
+    if (intended.current?.as !== as) intended.current = { key: v4(), as };
     try {
       const made = await create.mutateAsync({ ...section, key: intended.current.key });
       await navigate(`/sections/${made.id}`);
