@@ -53,7 +53,8 @@ export async function announcedChecksum(url: string, signal?: AbortSignal): Prom
 }
 
 async function ask(url: string, method: 'GET' | 'HEAD', signal?: AbortSignal): Promise<Response> {
-  const response = await send(url, { method, ...(signal ? { signal } : {}) });
+  // Past the browser's cache: each file handed out is to be on the server's record.
+  const response = await send(url, { method, cache: 'no-store', ...(signal ? { signal } : {}) });
   if (!response.ok) throw await problemOf(response);
   return response;
 }

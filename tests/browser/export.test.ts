@@ -47,14 +47,15 @@ describe('the export panel', () => {
     expect(file.name).toBe('heron-outer-panel_v3_unit.dat');
     expect(file.sum.slice(0, 12)).toBe(announced?.replaceAll(' ', ''));
     expect(readDat(file.text).points).toHaveLength(79);
-    const record: { file_name: string; checksum: string } = await app.database
-      .knex('downloads')
-      .first('file_name', 'checksum');
-    expect(record).toEqual({ file_name: file.name, checksum: file.sum });
+    expect(await download(page)).toEqual(file);
+    const records: unknown[] = await app.database.knex('downloads').select('file_name', 'checksum');
+    const record = { file_name: file.name, checksum: file.sum };
+    expect(records).toEqual([record, record]);
     await page.keyboard.press('Escape');
     await page
       .getByRole('region', { name: 'Downloads' })
       .getByText('heron-outer-panel_v3_unit.dat')
+      .first()
       .waitFor();
     await visit.close();
   });
