@@ -32,10 +32,26 @@ export default tseslint.config(
     rules: {
       ...forbid(
         folders(['server', 'client', 'migrations', 'tests'], 'geometry/ imports nothing of ours but itself.'),
-        { group: ['node:*', 'react', 'react-*', 'express', 'knex'], message: 'geometry/ is pure: no I/O, no DOM, no Node.' },
+        {
+          group: ['node:*', 'react', 'react-*', 'express', 'knex'],
+          message: 'geometry/ is pure: no I/O, no DOM, no Node.',
+        },
       ),
-      'no-restricted-globals': ['error', 'Date', 'fetch', 'window', 'document', 'process', 'console', 'performance', 'crypto'],
-      'no-restricted-properties': ['error', { object: 'Math', property: 'random', message: 'geometry/ is deterministic.' }],
+      'no-restricted-globals': [
+        'error',
+        'Date',
+        'fetch',
+        'window',
+        'document',
+        'process',
+        'console',
+        'performance',
+        'crypto',
+      ],
+      'no-restricted-properties': [
+        'error',
+        { object: 'Math', property: 'random', message: 'geometry/ is deterministic.' },
+      ],
     },
   },
   {
@@ -45,7 +61,14 @@ export default tseslint.config(
       ...reactHooks.configs.flat.recommended.rules,
       ...forbid(
         {
-          group: ['#server/*', '!#server/contracts', '!#server/contracts/*', '**/server/**', '#migrations/*', '#tests/*'],
+          group: [
+            '#server/*',
+            '!#server/contracts',
+            '!#server/contracts/*',
+            '**/server/**',
+            '#migrations/*',
+            '#tests/*',
+          ],
           message: 'client/ may import geometry/ and server/contracts/ only.',
         },
         { group: ['node:*', 'express', 'knex', 'mysql2'], message: 'This runs in the browser.' },
@@ -60,7 +83,19 @@ export default tseslint.config(
     files: ['server/contracts/**/*.ts'],
     rules: forbid(
       folders(['client', 'tests', 'migrations'], 'Contracts are schemas: they import geometry/ only.'),
-      { group: ['node:*', 'express', 'knex', 'mysql2', '#server/*', '!#server/contracts', '!#server/contracts/*', '../*'], message: 'Contracts are schemas: they import geometry/ only.' },
+      {
+        group: [
+          'node:*',
+          'express',
+          'knex',
+          'mysql2',
+          '#server/*',
+          '!#server/contracts',
+          '!#server/contracts/*',
+          '../*',
+        ],
+        message: 'Contracts are schemas: they import geometry/ only.',
+      },
     ),
   },
   {
@@ -79,6 +114,10 @@ export default tseslint.config(
   },
   {
     files: ['tests/**', 'server/start/**', 'migrations/**'],
-    rules: { 'max-lines-per-function': 'off', '@typescript-eslint/no-non-null-assertion': 'off', 'no-console': 'off' },
+    rules: {
+      'max-lines-per-function': 'off',
+      '@typescript-eslint/no-non-null-assertion': 'off',
+      'no-console': 'off',
+    },
   },
 );
