@@ -45,6 +45,8 @@ export interface PlacedDimension<Id extends string = string> {
   readonly id: Id;
   readonly text: string;
   readonly textBox: Box;
+  /** What the text stands on. */
+  readonly ground: 'sheet' | 'foam';
   /** Dimension, extension and leader lines as one path. */
   readonly path: string;
   readonly arrows: readonly Arrow[];
@@ -56,7 +58,9 @@ export interface DimensionRoom {
   /** Highest and lowest pixel of the section: dimensions along the chord stand outside. */
   readonly top: number;
   readonly bottom: number;
-  /** What texts must not cover: handles, and the outline as a row of boxes. */
+  /** The section as a row of boxes: a text stands outside it, or quite inside. */
+  readonly section: readonly Box[];
+  /** What no text may cover: the handles. */
   readonly keepClear: readonly Box[];
   /** Distance from the section to the first level, and from level to level. */
   readonly levels: { readonly first: number; readonly step: number };
@@ -71,7 +75,7 @@ export function layoutDimensions<Id extends string>(
   specs: readonly DimensionSpec<Id>[],
   room: DimensionRoom,
 ): PlacedDimension<Id>[] {
-  const occupied = new Occupied(room.area, room.keepClear);
+  const occupied = new Occupied(room.area, room.section, room.keepClear);
   const placed = new Map<Id, PlacedDimension<Id>>();
   const inOrder = [...specs].sort((a, b) => rank(a) - rank(b));
   for (const spec of inOrder) {
@@ -146,6 +150,7 @@ function placeHorizontal<Id extends string>(
         id: spec.id,
         text: spec.text,
         textBox,
+        ground: 'sheet',
         path: [
           ...line.map(([a, b]) => segment({ x: a, y }, { x: b, y })),
           ...extensions.map(([a, b]) => segment(a, b)),
@@ -235,7 +240,7 @@ function placeAcross<Id extends string>(
     const textBox = boxAround(spot.x, spot.y, width);
     const end = spot.tail > 0 ? lower : upper;
     const tail: readonly [Point, Point] = [end, { x: spot.x, y: spot.y - spot.tail * (TEXT_HEIGHT / 2 + 2) }];
-    const covered = spot.tail === 0 ? occupied.isFree(textBox, 2, true) : occupied.isFree(textBox, CLEAR);
+    const covered = spot.tail === 0 ? occupied.isFree(textBox, 2, 'inside') : occupied.isFree(textBox, CLEAR);
     if (!covered || !within(textBox, room.area) || occupied.crossesText(upper, lower)) continue;
     if (spot.tail !== 0 && occupied.crossesText(...tail)) continue;
     occupied.addText(textBox);
@@ -246,6 +251,7 @@ function placeAcross<Id extends string>(
       id: spec.id,
       text: spec.text,
       textBox,
+      ground: spot.tail === 0 ? 'foam' : 'sheet',
       path: segment(upper, lower) + (spot.tail === 0 ? '' : segment(...tail)),
       arrows: [
         { ...upper, dx: -unit.x * outward, dy: -unit.y * outward },
@@ -282,6 +288,7 @@ function placeLeader<Id extends string>(
         id: spec.id,
         text: spec.text,
         textBox,
+        ground: 'sheet',
         path: segment(spec.at, elbow) + segment(elbow, end),
         arrows: [{ ...spec.at, dx: (spec.at.x - elbow.x) / length, dy: (spec.at.y - elbow.y) / length }],
       };

@@ -49,14 +49,17 @@ export function DimensionText({
   dimension: PlacedSectionDimension;
   className: string;
 }) {
-  const { textBox, text } = dimension;
+  const { textBox, text, ground } = dimension;
   return (
     <text
       x={textBox.x + textBox.width / 2}
       y={textBox.y + textBox.height / 2 + DIMENSION_TEXT * 0.35}
       fontSize={DIMENSION_TEXT}
       textAnchor="middle"
-      className={`font-semibold ${className}`}
+      paintOrder="stroke"
+      strokeWidth={4}
+      strokeLinejoin="round"
+      className={`font-semibold ${ground === 'foam' ? 'stroke-foam' : 'stroke-sheet'} ${className}`}
     >
       {text}
     </text>

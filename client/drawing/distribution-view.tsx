@@ -39,6 +39,9 @@ function ThicknessView({ layout, transform, drawing, chordMm, units }: ViewProps
   const highest = Math.max(0.02, drawing.measures.maxThickness) * perUnit;
   const scale = scaleLinear().domain([lowest, highest]).nice(4).range([bottom, top]);
   const ticks = scale.ticks(layout.compact ? 2 : 4);
+  const labelAt = apart(thickness, camber);
+  const toY = (y: number) => scale(y * perUnit);
+  const curve = { toX: transform.toX, toY, labelAt };
   return (
     <Plot
       layout={layout}
@@ -47,24 +50,20 @@ function ThicknessView({ layout, transform, drawing, chordMm, units }: ViewProps
       unit={units === 'mm' ? 'mm' : 'in'}
       zero={scale(0)}
     >
-      <Curve
-        points={thickness}
-        toX={transform.toX}
-        toY={(y) => scale(y * perUnit)}
-        name="thickness"
-        labelAt={0.62}
-        above
-      />
-      <Curve
-        points={camber}
-        toX={transform.toX}
-        toY={(y) => scale(y * perUnit)}
-        name="camber"
-        labelAt={0.62}
-        dash={DASH.longDashDot}
-        above
-      />
+      <Curve {...curve} points={thickness} name="thickness" above />
+      <Curve {...curve} points={camber} name="camber" dash={DASH.longDashDot} above />
     </Plot>
+  );
+}
+
+/** The station, of a few near the middle, where two curves lie furthest apart: their names have room there. */
+function apart(one: readonly Point[], other: readonly Point[]): number {
+  const distance = (station: number) => {
+    const i = one.findIndex(({ x }) => x >= station);
+    return Math.abs((one[i]?.y ?? 0) - (other[i]?.y ?? 0));
+  };
+  return [0.5, 0.62, 0.38, 0.25].reduce((best, next) =>
+    distance(next) > distance(best) * 1.4 ? next : best,
   );
 }
 
@@ -80,15 +79,14 @@ function CurvatureView({ layout, transform, drawing }: ViewProps) {
     .domain([Math.min(-1, ...values), Math.max(10, ...values)])
     .range([bottom, top]);
   const [low = 0, high = 0] = scale.domain();
-  const ticks = CURVATURE_TICKS.filter((tick) => tick >= low && tick <= high);
+  const ticks = spaced(
+    CURVATURE_TICKS.filter((tick) => tick >= low && tick <= high).map((tick) => ({
+      y: scale(tick),
+      text: String(tick),
+    })),
+  );
   return (
-    <Plot
-      layout={layout}
-      transform={transform}
-      ticks={ticks.map((tick) => ({ y: scale(tick), text: String(tick) }))}
-      unit="1/chord"
-      zero={scale(0)}
-    >
+    <Plot layout={layout} transform={transform} ticks={ticks} unit="1/chord" zero={scale(0)}>
       <Curve points={upper} toX={transform.toX} toY={scale} name="curvature, upper" labelAt={0.5} above />
       <Curve
         points={lower}
@@ -98,15 +96,32 @@ function CurvatureView({ layout, transform, drawing }: ViewProps) {
         labelAt={0.75}
         dash={DASH.short}
         above={false}
+        floor={bottom - 3}
       />
     </Plot>
   );
 }
 
+const TICK_ROOM = 12;
+
+/** The ticks that have room, from zero outwards. */
+function spaced(ticks: readonly Tick[]): Tick[] {
+  const shown: Tick[] = [];
+  for (const tick of [...ticks].sort((a, b) => Math.abs(Number(a.text)) - Math.abs(Number(b.text)))) {
+    if (shown.every(({ y }) => Math.abs(y - tick.y) >= TICK_ROOM)) shown.push(tick);
+  }
+  return shown;
+}
+
+interface Tick {
+  readonly y: number;
+  readonly text: string;
+}
+
 interface PlotProps {
   readonly layout: SheetLayout;
   readonly transform: SheetTransform;
-  readonly ticks: readonly { y: number; text: string }[];
+  readonly ticks: readonly Tick[];
   readonly unit: string;
   readonly zero: number;
   readonly children: ReactNode;
@@ -151,10 +166,12 @@ interface CurveProps {
   /** Station where its name stands. */
   readonly labelAt: number;
   readonly above: boolean;
+  /** Names stand no lower than this. */
+  readonly floor?: number;
   readonly dash?: string;
 }
 
-function Curve({ points, toX, toY, name, labelAt, above, dash }: CurveProps) {
+function Curve({ points, toX, toY, name, labelAt, above, floor = Infinity, dash }: CurveProps) {
   const path = line<Point>(
     (point) => toX(point.x),
     (point) => toY(point.y),
@@ -170,7 +187,11 @@ function Curve({ points, toX, toY, name, labelAt, above, dash }: CurveProps) {
         strokeLinejoin="round"
       />
       {label && (
-        <text x={toX(label.x) + 6} y={toY(label.y) + (above ? -7 : 15)} className="fill-graphite text-[11px]">
+        <text
+          x={toX(label.x) + 6}
+          y={above ? toY(label.y) - 7 : Math.min(toY(label.y) + 15, floor)}
+          className="fill-graphite text-[11px]"
+        >
           {name}
         </text>
       )}

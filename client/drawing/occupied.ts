@@ -1,27 +1,42 @@
 import { type Point } from '#geometry/point.ts';
 import { type Box, overlaps, within } from './sheet-layout.ts';
 
+/** Distance from the surfaces at which a text inside the section is clear of the wide outline. */
+const INSIDE = 3;
+
 /** What stands on the sheet already, while dimensions find their places. */
 export class Occupied {
   readonly #area: Box;
+  readonly #section: readonly Box[];
   readonly #kept: readonly Box[];
   readonly #texts: Box[] = [];
   readonly #lines: (readonly [Point, Point])[] = [];
 
-  constructor(area: Box, keepClear: readonly Box[]) {
+  constructor(area: Box, section: readonly Box[], keepClear: readonly Box[]) {
     this.#area = area;
+    this.#section = section;
     this.#kept = keepClear;
   }
 
   /**
-   * Can a text stand here? It must be in sight, and off all texts, lines and what is to be kept clear.
-   * @param insideSection Texts of dimensions across the section stand inside it and keep clear of texts and lines only.
+   * Can a text stand here? It must be in sight, off all texts, lines and handles, and outside the section or quite
+   * inside it.
    */
-  isFree(box: Box, gap: number, insideSection = false): boolean {
+  isFree(box: Box, gap: number, where: 'outside' | 'inside' = 'outside'): boolean {
     if (!within(box, this.#area)) return false;
     if (this.#texts.some((text) => overlaps(box, text, gap))) return false;
     if (this.#lines.some(([a, b]) => crosses(a, b, box, 2))) return false;
-    return insideSection || !this.#kept.some((kept) => overlaps(box, kept, 2));
+    if (this.#kept.some((kept) => overlaps(box, kept, 1))) return false;
+    const strips = this.#section.filter(
+      (strip) => strip.x < box.x + box.width && box.x < strip.x + strip.width,
+    );
+    if (where === 'outside') return !strips.some((strip) => overlaps(box, strip, 2));
+    return (
+      strips.length > 0 &&
+      strips.every(
+        (strip) => box.y >= strip.y + INSIDE && box.y + box.height <= strip.y + strip.height - INSIDE,
+      )
+    );
   }
 
   crossesText(a: Point, b: Point): boolean {

@@ -245,14 +245,12 @@ export function dimensionRoom(
     },
     top: transform.toY(extents.maxY),
     bottom: transform.toY(extents.minY),
-    keepClear: [
-      ...outlineStrips(drawing, transform),
-      ...handles.map((point) => {
-        const { x, y } = pixel(transform, point);
-        return { x: x - HANDLE_ROOM, y: y - HANDLE_ROOM, width: 2 * HANDLE_ROOM, height: 2 * HANDLE_ROOM };
-      }),
-    ],
-    levels: layout.compact ? { first: 24, step: 22 } : { first: 34, step: 28 },
+    section: outlineStrips(drawing, transform),
+    keepClear: handles.map((point) => {
+      const { x, y } = pixel(transform, point);
+      return { x: x - HANDLE_ROOM, y: y - HANDLE_ROOM, width: 2 * HANDLE_ROOM, height: 2 * HANDLE_ROOM };
+    }),
+    levels: layout.compact ? { first: 22, step: 21 } : { first: 27, step: 25 },
   };
 }
 

@@ -3,7 +3,8 @@ import { type Contour } from '#geometry/contour/contour.ts';
 import { measure, type Measures } from '#geometry/contour/measures.ts';
 import { sampleCosine } from '#geometry/contour/sampling.ts';
 import { type Outline } from '#geometry/shapes/outline.ts';
-import { outlineOf, type Shape } from '#geometry/shapes/shape.ts';
+import { type Shape } from '#geometry/shapes/shape.ts';
+import { outlineFor } from './section-points.ts';
 
 /** Everything that is drawn of a shape, computed once for each shape. Lengths in fractions of chord. */
 export interface SectionDrawing {
@@ -25,7 +26,7 @@ const kept = new WeakMap<Shape, SectionDrawing>();
 export function drawSection(shape: Shape): SectionDrawing {
   const known = kept.get(shape);
   if (known) return known;
-  const outline = outlineOf(shape);
+  const outline = outlineFor(shape);
   const drawing: SectionDrawing = {
     shape,
     outline,

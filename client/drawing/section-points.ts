@@ -1,7 +1,7 @@
 import { type Point } from '#geometry/point.ts';
 import { type CstShape, noseRadiusOf } from '#geometry/shapes/cst.ts';
 import { meanLine, type Naca4Shape } from '#geometry/shapes/naca4.ts';
-import { parameterOf } from '#geometry/shapes/outline.ts';
+import { type Outline, parameterOf } from '#geometry/shapes/outline.ts';
 import { outlineOf, type Shape } from '#geometry/shapes/shape.ts';
 
 /**
@@ -25,9 +25,20 @@ export function thickestStation(shape: Naca4Shape): number {
   return THICKEST_STATION[shape.trailingEdge];
 }
 
+const outlines = new WeakMap<Shape, Outline>();
+
+/** The outline of a shape, made once for each shape: shapes are immutable. */
+export function outlineFor(shape: Shape): Outline {
+  const known = outlines.get(shape);
+  if (known) return known;
+  const outline = outlineOf(shape);
+  outlines.set(shape, outline);
+  return outline;
+}
+
 /** The point of a surface at a construction station, 0 … 1. */
 export function surfacePoint(shape: Shape, surface: 'upper' | 'lower', station: number): Point {
-  return outlineOf(shape)[surface].at(parameterOf(station));
+  return outlineFor(shape)[surface].at(parameterOf(station));
 }
 
 /**
@@ -45,7 +56,7 @@ export function noseCircle(shape: Shape): NoseCircle {
     };
   }
   return {
-    nose: outlineOf(shape).upper.at(0),
+    nose: outlineFor(shape).upper.at(0),
     radius: meanNoseRadius(shape) * scaleOf(shape),
     axis: chordAxis(shape),
   };
@@ -69,6 +80,6 @@ export function chordAxis(shape: CstShape): Point {
 
 /** Ends of the trailing edge on the sheet, upper first. */
 export function edgePoints(shape: Shape): readonly [Point, Point] {
-  const outline = outlineOf(shape);
+  const outline = outlineFor(shape);
   return [outline.upper.at(1), outline.lower.at(1)];
 }

@@ -35,14 +35,15 @@ export const StationLabels = memo(function StationLabels({
   const every = transform.chordPixels / 10 < 34 ? 20 : 10;
   const shown = stations(layout, transform).filter(({ percent }) => percent % every === 0);
   const last = shown.find(({ percent }) => percent === 100);
+  const named = last !== undefined && last.x + 84 < layout.frame.x + layout.frame.width;
   return (
     <g aria-hidden="true" className="fill-graphite text-[10px]" textAnchor="middle">
       {shown.map(({ x, percent }) => (
         <text key={percent} x={x} y={y}>
-          {percent}
+          {percent === 100 && !named ? '100 %' : percent}
         </text>
       ))}
-      {last && !layout.compact && last.x + 84 < layout.frame.x + layout.frame.width && (
+      {named && (
         <text x={last.x + 16} y={y} textAnchor="start">
           % chord
         </text>

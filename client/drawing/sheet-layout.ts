@@ -31,13 +31,16 @@ const COMPACT_BELOW = 640;
 /** Sheets never get flatter than this; the page scrolls instead. */
 export const SMALLEST_SHEET = { width: 280, height: 440 } as const;
 
+/** How much room the second view gets: its full share, less (while thickness is exaggerated), or none. */
+export type SecondViewRoom = 'full' | 'small' | 'none';
+
 /**
  * Lays out a sheet of the given size: a zoned frame (ISO 5457), the title block at the lower right (ISO 7200), and two
  * views under each other on common stations.
  * @param width Width of the sheet in pixels; sizes below `SMALLEST_SHEET` are laid out at that size.
  * @param height Height of the sheet in pixels.
  */
-export function sheetLayout(width: number, height: number): SheetLayout {
+export function sheetLayout(width: number, height: number, second: SecondViewRoom = 'full'): SheetLayout {
   const w = Math.max(SMALLEST_SHEET.width, Math.round(width));
   const h = Math.max(SMALLEST_SHEET.height, Math.round(height));
   const compact = w < COMPACT_BELOW;
@@ -56,7 +59,8 @@ export function sheetLayout(width: number, height: number): SheetLayout {
     width: frame.width,
     height: frame.height - titleBlock.height - remarkHeight,
   };
-  const sectionHeight = Math.round(drawing.height * (compact ? 0.6 : 0.65));
+  const secondHeight = secondViewHeight(drawing.height, compact, second);
+  const sectionHeight = drawing.height - secondHeight;
   const inset = compact ? { left: 26, right: 20 } : { left: w > 1000 ? 96 : 76, right: w > 1000 ? 104 : 72 };
   return {
     width: w,
@@ -70,7 +74,7 @@ export function sheetLayout(width: number, height: number): SheetLayout {
     distribution: {
       ...drawing,
       y: drawing.y + sectionHeight,
-      height: drawing.height - sectionHeight,
+      height: secondHeight,
     },
     remark: compact
       ? { x: frame.x, y: titleBlock.y - remarkHeight, width: frame.width, height: remarkHeight }
@@ -79,8 +83,17 @@ export function sheetLayout(width: number, height: number): SheetLayout {
   };
 }
 
+/** Height of the axis labels under the views, which stay without a second view. */
+const AXIS_HEIGHT = 28;
+
+function secondViewHeight(height: number, compact: boolean, second: SecondViewRoom): number {
+  if (second === 'none') return AXIS_HEIGHT;
+  const share = second === 'full' ? (compact ? 0.38 : 0.34) : 0.24;
+  return Math.round(height * share);
+}
+
 function titleBlockBox(frame: Box, compact: boolean): Box {
-  const height = compact ? 104 : 112;
+  const height = 102;
   const width = compact ? frame.width : Math.min(520, Math.max(440, frame.width * 0.46));
   return { x: frame.x + frame.width - width, y: frame.y + frame.height - height, width, height };
 }

@@ -42,13 +42,13 @@ export function sheetTransform(
 ): SheetTransform {
   const { section, chord } = layout;
   const height = Math.max(1e-6, (ordinates.maxY - ordinates.minY) * exaggeration);
-  const room = Math.max(40, section.height - (layout.compact ? 116 : 164));
+  const room = Math.max(40, section.height - above(layout) - below(layout));
   const fitted = Math.min(chord.right - chord.left, room / height);
   const middle = (chord.left + chord.right) / 2;
   const chordPixels = fitted * view.zoom;
   const crossPixels = chordPixels * exaggeration;
   const centreX = middle + view.panX;
-  const centreY = section.y + section.height * (layout.compact ? 0.5 : 0.54) + view.panY;
+  const centreY = restY(layout) + view.panY;
   const middleOrdinate = (ordinates.maxY + ordinates.minY) / 2;
   return {
     toX: (x) => centreX + (x - 0.5) * chordPixels,
@@ -73,16 +73,26 @@ export function zoomAbout(
 ): SheetView {
   const zoom = Math.min(ZOOM_LIMITS.largest, Math.max(ZOOM_LIMITS.smallest, view.zoom * factor));
   const applied = zoom / view.zoom;
+  const rest = restY(layout);
   const restX = (layout.chord.left + layout.chord.right) / 2;
-  const restY = layout.section.y + layout.section.height * (layout.compact ? 0.5 : 0.54);
   return keepInSight(
     {
       zoom,
       panX: pixel.x - restX - (pixel.x - restX - view.panX) * applied,
-      panY: pixel.y - restY - (pixel.y - restY - view.panY) * applied,
+      panY: pixel.y - rest - (pixel.y - rest - view.panY) * applied,
     },
     layout,
   );
+}
+
+/** Room for two levels of dimensions above the fitted section and one below. */
+const above = (layout: SheetLayout) => (layout.compact ? 58 : 68);
+const below = (layout: SheetLayout) => (layout.compact ? 38 : 44);
+
+/** Where the middle of the fitted section lies. */
+function restY(layout: SheetLayout): number {
+  const { section } = layout;
+  return section.y + above(layout) + (section.height - above(layout) - below(layout)) / 2;
 }
 
 /** Moves the drawing by pixels; some part of the chord line always stays on the sheet. */

@@ -1,6 +1,7 @@
-import { useId } from 'react';
+import { memo, useId } from 'react';
 import { designationOf, type Naca4Shape, parseDesignation } from '#geometry/shapes/naca4.ts';
 import { type Units } from '#client/app/units.ts';
+import { CheckboxField } from '#client/ui/checkbox-field.tsx';
 import { SegmentedControl } from '#client/ui/segmented-control.tsx';
 import { FieldError } from '#client/ui/field.tsx';
 import { type EditorAction } from './editor-state.ts';
@@ -8,6 +9,7 @@ import { fieldRange } from './fields.ts';
 import { handlePoint } from './handle-points.ts';
 import { valueFieldClass } from './number-field.tsx';
 import { type ReadText, useTypedText } from './use-typed-text.ts';
+import { type SheetSettings } from './sheet-settings.ts';
 import { ValueField } from './value-field.tsx';
 
 interface DigitFieldsProps {
@@ -15,10 +17,13 @@ interface DigitFieldsProps {
   readonly chordMm: number;
   readonly units: Units;
   readonly dispatch: (action: EditorAction) => void;
+  /** Handles are held to whole digits. */
+  readonly snap: boolean;
+  readonly onSettings: (change: Partial<SheetSettings>) => void;
 }
 
 /** The values of a 4-digit section. */
-export function DigitFields({ shape, chordMm, units, dispatch }: DigitFieldsProps) {
+export function DigitFields({ shape, chordMm, units, dispatch, snap, onSettings }: DigitFieldsProps) {
   const common = { chordMm, units, dispatch, kind: 'fraction' as const };
   const position = shape.maxCamber > 0 ? shape.maxCamberPosition : (handlePoint(shape, 'camber')?.x ?? 0.4);
   return (
@@ -48,24 +53,51 @@ export function DigitFields({ shape, chordMm, units, dispatch }: DigitFieldsProp
         decimals={2}
         {...fieldRange(shape, 'maxThickness')}
       />
-      <div className="grid grid-cols-[minmax(0,1fr)_13rem] items-center gap-x-2">
-        <span aria-hidden="true">Trailing edge</span>
-        <SegmentedControl
-          label="Trailing edge"
-          hideLabel
-          value={shape.trailingEdge}
-          segments={[
-            { value: 'open', label: 'open' },
-            { value: 'closed', label: 'closed' },
-          ]}
-          onChange={(trailingEdge) => {
-            dispatch({ type: 'edge', trailingEdge });
-          }}
-        />
-      </div>
+      <EdgeField trailingEdge={shape.trailingEdge} dispatch={dispatch} />
+      <SnapField snap={snap} onSettings={onSettings} />
     </>
   );
 }
+
+interface EdgeFieldProps {
+  readonly trailingEdge: Naca4Shape['trailingEdge'];
+  readonly dispatch: DigitFieldsProps['dispatch'];
+}
+
+const EdgeField = memo(function EdgeField({ trailingEdge, dispatch }: EdgeFieldProps) {
+  return (
+    <div className="grid grid-cols-[minmax(0,1fr)_13rem] items-center gap-x-2">
+      <span aria-hidden="true">Trailing edge</span>
+      <SegmentedControl
+        label="Trailing edge"
+        hideLabel
+        value={trailingEdge}
+        segments={[
+          { value: 'open', label: 'open' },
+          { value: 'closed', label: 'closed' },
+        ]}
+        onChange={(trailingEdge) => {
+          dispatch({ type: 'edge', trailingEdge });
+        }}
+      />
+    </div>
+  );
+});
+
+const SnapField = memo(function SnapField({
+  snap,
+  onSettings,
+}: Pick<DigitFieldsProps, 'snap' | 'onSettings'>) {
+  return (
+    <CheckboxField
+      label="Hold handles to whole digits"
+      checked={snap}
+      onChange={(event) => {
+        onSettings({ snap: event.target.checked });
+      }}
+    />
+  );
+});
 
 function DesignationField({
   shape,

@@ -5,10 +5,10 @@ import { type Draft, type Section } from '#server/contracts/sections.ts';
 import { draftQuery, sectionQuery, versionQuery } from '#client/api/sections.ts';
 import { useMay } from '#client/app/session.tsx';
 import { ErrorState } from '#client/ui/error-state.tsx';
-import { chooseDraft } from './draft-mirror.ts';
+import { type ChosenDraft, chooseDraft } from './draft-mirror.ts';
 import { EditorSkeleton } from './editor-skeleton.tsx';
 import { EditorWorkspace } from './editor-workspace.tsx';
-import { hasEqualNose } from './present.ts';
+import { hasEqualNose, sameShape } from './present.ts';
 import { ReadOnlySheet } from './read-only-sheet.tsx';
 import { useDraftMirror } from './use-draft-keeper.ts';
 
@@ -49,7 +49,7 @@ function WriterScreen({ section }: { section: Section }) {
 function OpenedSection({ section, serverDraft }: { section: Section; serverDraft: Draft | null }) {
   const mirror = useDraftMirror(section.id);
   const [chosen] = useState(() => chooseDraft(serverDraft, mirror.read()));
-  const [number] = useState(() => chosen.draft?.basedOn ?? section.latest.number);
+  const [number] = useState(() => standingOn(chosen.draft, section));
   const base = useQuery(versionQuery(section.id, number));
   if (base.isError && !base.data) return <ErrorState error={base.error} retry={() => void base.refetch()} />;
   if (!base.data) return <EditorSkeleton />;
@@ -63,4 +63,9 @@ function OpenedSection({ section, serverDraft }: { section: Section; serverDraft
       mirror={mirror}
     />
   );
+}
+
+/** A draft that is the newest version itself (its save and its last keeping crossed) stands on that version. */
+function standingOn(draft: ChosenDraft['draft'], { latest }: Section): number {
+  return draft === null || sameShape(draft.shape, latest.shape) ? latest.number : draft.basedOn;
 }

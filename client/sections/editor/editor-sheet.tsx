@@ -47,6 +47,7 @@ export function EditorSheet(props: EditorSheetProps) {
   const dimensions = useDimensions(props, units);
   const typing = useTyping(dimensions, element);
   const gridMm = settings.grid ? gridStepMm(transform, chordMm, units) : null;
+  const remarks = useMemo(() => sheetRemarks({ ...settings, units, gridMm }), [settings, units, gridMm]);
   return (
     <div className="relative h-full w-full" data-testid="sheet">
       <svg
@@ -56,7 +57,7 @@ export function EditorSheet(props: EditorSheetProps) {
         height={layout.height}
         role="group"
         aria-label="Drawing sheet"
-        className={`block touch-pan-y select-none ${control.panning ? 'cursor-grabbing [&_[data-handle]]:pointer-events-none' : ''}`}
+        className="block touch-pan-y select-none data-panning:cursor-grabbing data-panning:[&_[data-handle]]:pointer-events-none"
       >
         <SheetFrame layout={layout} />
         <Drawing
@@ -67,7 +68,7 @@ export function EditorSheet(props: EditorSheetProps) {
           selected={selected}
           typing={typing}
         />
-        <SheetRemarks layout={layout} remarks={sheetRemarks({ ...settings, units, gridMm })} />
+        <SheetRemarks layout={layout} remarks={remarks} />
         <TitleBlock
           layout={layout}
           fields={title}
@@ -151,15 +152,18 @@ function Drawing(props: DrawingProps) {
 /** The dimensions of the section as it is now, each at its place. */
 function useDimensions({ state, control, layout, enabled }: EditorSheetProps, units: Units) {
   const { shape, chordMm } = state.present;
+  const inHand = state.drag?.handle ?? null;
   const { transform } = control;
   return useMemo(() => {
     const drawing = drawSection(shape);
     const handles = enabled ? handleIds(shape).flatMap((handle) => handlePoint(shape, handle) ?? []) : [];
-    return layoutDimensions(
-      sectionDimensions({ drawing, transform, chordMm, units }),
-      dimensionRoom(layout, drawing, transform, handles),
+    // The tag beside the pointer says what a leader of the handle in hand would say.
+    const said = dimensionsOf(inHand, shape);
+    const specs = sectionDimensions({ drawing, transform, chordMm, units }).filter(
+      ({ id, kind }) => kind !== 'leader' || !said.includes(id),
     );
-  }, [shape, chordMm, units, transform, layout, enabled]);
+    return layoutDimensions(specs, dimensionRoom(layout, drawing, transform, handles));
+  }, [shape, chordMm, units, transform, layout, enabled, inHand]);
 }
 
 /** Which dimension is being typed; Tab goes through them in their order. */

@@ -32,7 +32,7 @@ export function FreeFormFields({ shape, equalNose, chordMm, units, dispatch }: F
           {...common}
           kind="fraction"
           field={`noseRadius-${surface}`}
-          label={`Nose radius, ${surface}`}
+          label={`Nose R, ${surface}`}
           value={noseRadiusOf(shape, surface) * scale}
           decimals={3}
           {...fieldRange(shape, 'noseRadius')}

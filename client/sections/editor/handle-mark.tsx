@@ -17,7 +17,6 @@ interface HandleMarkProps {
   readonly kind: 'slider' | 'plane' | 'switch';
   readonly selected: boolean;
   readonly dragged: boolean;
-  readonly enabled: boolean;
   readonly transform: SheetTransform;
   readonly snap: boolean;
   readonly dispatch: (action: EditorAction) => void;
@@ -29,21 +28,9 @@ const HALF = 6;
 
 /** A point of the section that can be taken: by pointer, touch or keys. */
 export const HandleMark = memo(function HandleMark(props: HandleMarkProps) {
-  const { handle, kind, value, selected, dragged, enabled, transform, snap, dispatch, onSelect } = props;
-  const turn = () => {
-    dispatch({ type: 'edge', trailingEdge: value > 0 ? 'closed' : 'open' });
-  };
-  const bind = useHandleDrag({
-    handle,
-    transform,
-    dispatch,
-    snap,
-    enabled,
-    onTap: kind === 'switch' ? turn : undefined,
-  });
+  const { handle, kind, value, selected, dragged, transform, snap, dispatch, onSelect } = props;
   return (
     <g
-      {...bind()}
       {...roleOf(props)}
       tabIndex={0}
       aria-label={props.name}
@@ -57,11 +44,15 @@ export const HandleMark = memo(function HandleMark(props: HandleMarkProps) {
         onSelect(null);
       }}
       onKeyDown={(event) => {
-        keyDown(event, handle, kind, dispatch, turn);
+        keyDown(event, props);
       }}
-      className={`group touch-none outline-none ${enabled ? (dragged ? 'cursor-grabbing' : 'cursor-grab') : ''}`}
+      className={`group touch-none outline-none ${dragged ? 'cursor-grabbing' : 'cursor-grab'}`}
     >
-      <Diamond filled={selected || dragged} />
+      <Grip
+        {...{ handle, transform, snap, dispatch }}
+        turns={kind === 'switch' ? (value > 0 ? 'closed' : 'open') : null}
+        filled={selected || dragged}
+      />
     </g>
   );
 });
@@ -77,10 +68,23 @@ function roleOf({ kind, value, min, max, spoken }: HandleMarkProps) {
   };
 }
 
-/** The mark, its ring when it has the focus, and the room in which it can be taken: 24 px, 44 px by touch. */
-function Diamond({ filled }: { filled: boolean }) {
+interface GripProps extends Pick<HandleMarkProps, 'handle' | 'transform' | 'snap' | 'dispatch'> {
+  /** What a press on it makes of the trailing edge; null for handles that slide. */
+  readonly turns: 'open' | 'closed' | null;
+  readonly filled: boolean;
+}
+
+/**
+ * The mark, its ring when it has the focus, and the room in which it can be taken: 24 px, 44 px by touch. Apart from its
+ * place, so that the many handles that a drag carries along keep their listeners.
+ */
+const Grip = memo(function Grip({ handle, transform, snap, dispatch, turns, filled }: GripProps) {
+  const turn = () => {
+    if (turns !== null) dispatch({ type: 'edge', trailingEdge: turns });
+  };
+  const bind = useHandleDrag({ handle, transform, dispatch, snap, onTap: turns === null ? undefined : turn });
   return (
-    <>
+    <g {...bind()} className="touch-none">
       <circle r={12} className="fill-transparent pointer-coarse:hidden" />
       <circle r={22} className="hidden fill-transparent pointer-coarse:block" />
       <rect
@@ -101,17 +105,11 @@ function Diamond({ filled }: { filled: boolean }) {
         }
         strokeWidth={1.6}
       />
-    </>
+    </g>
   );
-}
+});
 
-function keyDown(
-  event: KeyboardEvent,
-  handle: HandleId,
-  kind: HandleMarkProps['kind'],
-  dispatch: (action: EditorAction) => void,
-  turn: () => void,
-): void {
+function keyDown(event: KeyboardEvent, { handle, kind, value, dispatch }: HandleMarkProps): void {
   if (event.ctrlKey || event.metaKey || event.altKey) return;
   const steps = STEPS[event.key];
   if (steps) {
@@ -120,7 +118,7 @@ function keyDown(
   } else if (event.key === 'Home' || event.key === 'End') {
     dispatch({ type: 'to-limit', handle, end: event.key === 'Home' ? 'smallest' : 'largest' });
   } else if (kind === 'switch' && (event.key === 'Enter' || event.key === ' ')) {
-    turn();
+    dispatch({ type: 'edge', trailingEdge: value > 0 ? 'closed' : 'open' });
   } else return;
   event.preventDefault();
   event.stopPropagation();

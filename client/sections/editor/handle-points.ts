@@ -1,9 +1,10 @@
 import { type Point } from '#geometry/point.ts';
 import { weightStation } from '#geometry/shapes/cst.ts';
 import { type Naca4Shape } from '#geometry/shapes/naca4.ts';
-import { outlineOf, type Shape } from '#geometry/shapes/shape.ts';
+import { type Shape } from '#geometry/shapes/shape.ts';
 import {
   noseCircle,
+  outlineFor,
   type NoseCircle,
   surfacePoint,
   thickestStation,
@@ -24,7 +25,7 @@ export function handlePoint(shape: Shape, handle: HandleId): Point | null {
     case 'nose':
       return nosePoint(noseCircle(shape));
     case 'edge':
-      return outlineOf(shape).upper.at(1);
+      return outlineFor(shape).upper.at(1);
     case 'camber':
       return shape.kind === 'naca4' ? camberCrest(shape) : null;
     case 'thickness-upper':

@@ -62,7 +62,6 @@ export function Handles({
           kind={isSwitch(shape, handle) ? 'switch' : handle === 'camber' ? 'plane' : 'slider'}
           selected={selected === handle}
           dragged={dragged}
-          enabled
           transform={transform}
           snap={snap}
           dispatch={dispatch}

@@ -9,6 +9,7 @@ import { ExportPanel } from '#client/versions/export-panel.tsx';
 import { EditorFrame } from './editor-frame.tsx';
 import { ghostOf } from './ghost.ts';
 import { type EditorAction, reduceEditor, startState } from './editor-state.ts';
+import { LiveState } from './live-state.ts';
 import { SectionVersions } from './section-versions.tsx';
 import { SheetStage } from './sheet-stage.tsx';
 import { SideColumn } from './side-column.tsx';
@@ -30,48 +31,40 @@ export function ReadOnlySheet({ section, version }: { section: Section; version:
   const units = useUnits();
   const { present } = state;
   return (
-    <EditorFrame
-      title={section.name}
-      header={
-        <ReaderHeader
-          name={section.name}
-          version={version}
-          onExport={mayDownload ? () => setExporting(true) : undefined}
-        />
-      }
-      stage={
-        <SheetStage
-          {...{ state, dispatch, settings, title, ghost }}
-          onSettings={setSettings}
-          enabled={false}
-        />
-      }
-      strip={
-        <SectionVersions
-          sectionId={section.id}
-          shape={version.shape}
-          dirty={false}
-          basedOn={version.number}
-          ghost={settings.ghost}
-          onSettings={setSettings}
-          dispatch={dispatch}
-        />
-      }
-      side={
-        <SideColumn
-          present={present}
-          notice={null}
-          station={settings.station}
-          enabled={false}
-          dispatch={dispatch}
-        />
-      }
-      print={<PrintedSheet {...present} title={title} ghost={ghostOf(ghost, settings.ghost)} units={units} />}
-    >
-      {exporting && (
-        <ExportPanel version={version} chordMm={present.chordMm} onClose={() => setExporting(false)} />
-      )}
-    </EditorFrame>
+    <LiveState value={state}>
+      <EditorFrame
+        title={section.name}
+        header={
+          <ReaderHeader
+            name={section.name}
+            version={version}
+            onExport={mayDownload ? () => setExporting(true) : undefined}
+          />
+        }
+        stage={
+          <SheetStage {...{ dispatch, settings, title, ghost }} onSettings={setSettings} enabled={false} />
+        }
+        strip={
+          <SectionVersions
+            sectionId={section.id}
+            shape={version.shape}
+            dirty={false}
+            basedOn={version.number}
+            ghost={settings.ghost}
+            onSettings={setSettings}
+            dispatch={dispatch}
+          />
+        }
+        side={<SideColumn settings={settings} onSettings={setSettings} enabled={false} dispatch={dispatch} />}
+        print={
+          <PrintedSheet {...present} title={title} ghost={ghostOf(ghost, settings.ghost)} units={units} />
+        }
+      >
+        {exporting && (
+          <ExportPanel version={version} chordMm={present.chordMm} onClose={() => setExporting(false)} />
+        )}
+      </EditorFrame>
+    </LiveState>
   );
 }
 

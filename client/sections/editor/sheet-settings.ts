@@ -8,7 +8,7 @@ export interface SheetSettings {
   readonly exaggeration: Exaggeration;
   /** Hold handles of a 4-digit section to whole digits. */
   readonly snap: boolean;
-  readonly secondView: 'thickness' | 'curvature';
+  readonly secondView: 'thickness' | 'curvature' | 'none';
   /** The station looked at, as a fraction of chord: where the spar is to stand. */
   readonly station: number;
   /** Number of the version drawn behind the section. */
@@ -33,7 +33,7 @@ const keptSchema = z
     comb: z.boolean(),
     exaggeration: z.union([z.literal(1), z.literal(2), z.literal(4)]),
     snap: z.boolean(),
-    secondView: z.enum(['thickness', 'curvature']),
+    secondView: z.enum(['thickness', 'curvature', 'none']),
     station: z.number().min(STATION_LIMITS.smallest).max(STATION_LIMITS.largest),
   })
   .partial();

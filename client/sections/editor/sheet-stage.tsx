@@ -5,14 +5,16 @@ import { sheetLayout } from '#client/drawing/sheet-layout.ts';
 import { type TitleBlockFields } from '#client/drawing/title-block.tsx';
 import { useSize } from '#client/drawing/use-sheet-size.ts';
 import { EditorSheet } from './editor-sheet.tsx';
-import { type EditorAction, type EditorState } from './editor-state.ts';
+import { type EditorAction } from './editor-state.ts';
+import { useLiveState } from './live-state.ts';
+import { NoticeLine } from './notice-line.tsx';
+import { SheetGestures } from './sheet-gestures.ts';
 import { type SheetSettings } from './sheet-settings.ts';
 import { SheetTools } from './sheet-tools.tsx';
 import { useEditorKeys } from './use-editor-keys.ts';
 import { useSheetView } from './use-sheet-view.ts';
 
 interface SheetStageProps {
-  readonly state: EditorState;
   readonly dispatch: (action: EditorAction) => void;
   readonly settings: SheetSettings;
   readonly onSettings: (change: Partial<SheetSettings>) => void;
@@ -23,21 +25,16 @@ interface SheetStageProps {
 }
 
 /** The sheet in its place, with the row of tools above it and the part of the drawing that is in sight. */
-export function SheetStage({
-  state,
-  dispatch,
-  settings,
-  onSettings,
-  title,
-  ghost,
-  enabled,
-  onSave,
-}: SheetStageProps) {
+export function SheetStage(props: SheetStageProps) {
+  const { dispatch, settings, onSettings, title, ghost, enabled, onSave } = props;
+  const state = useLiveState();
   const { shape } = state.present;
   const [box, size] = useSize<HTMLDivElement>({ width: 960, height: 600 });
-  const layout = useMemo(() => sheetLayout(size.width, size.height), [size]);
+  const { exaggeration, secondView } = settings;
+  const second = secondView === 'none' ? 'none' : exaggeration > 1 ? 'small' : 'full';
+  const layout = useMemo(() => sheetLayout(size.width, size.height, second), [size, second]);
   const svg = useRef<SVGSVGElement>(null);
-  const control = useSheetView(svg, layout, drawSection(shape).measures.extents, settings.exaggeration);
+  const control = useSheetView(layout, drawSection(shape).measures.extents, exaggeration);
   useEditorKeys({
     dispatch,
     dragging: state.drag !== null,
@@ -45,20 +42,21 @@ export function SheetStage({
     onZoom: control.zoom,
     onFit: control.fit,
   });
+  const notice = <NoticeLine notice={state.notice} chordMm={state.present.chordMm} layout={layout} />;
   return (
     <>
       <SheetTools
         settings={settings}
         onSettings={onSettings}
-        snaps={enabled && shape.kind === 'naca4'}
         zoomPercent={Math.round(control.view.zoom * 100)}
         onZoom={control.zoom}
         onFit={control.fit}
       />
       <div
         ref={box}
-        className="h-[min(34rem,150vw)] min-h-110 w-full shrink-0 overflow-hidden border border-rule bg-sheet lg:h-auto lg:min-h-0 lg:flex-1"
+        className="h-[min(34rem,150vw)] min-h-110 w-full shrink-0 relative overflow-hidden border border-rule bg-sheet lg:h-auto lg:min-h-0 lg:flex-1"
       >
+        <SheetGestures element={svg} layout={layout} setView={control.setView} fit={control.fit} />
         <EditorSheet
           element={svg}
           layout={layout}
@@ -71,7 +69,9 @@ export function SheetStage({
           ghost={ghost}
           enabled={enabled}
         />
+        {enabled && !layout.compact && notice}
       </div>
+      {enabled && layout.compact && notice}
     </>
   );
 }

@@ -9,8 +9,6 @@ import { ZOOM_STEP } from './use-sheet-view.ts';
 interface SheetToolsProps {
   readonly settings: SheetSettings;
   readonly onSettings: (change: Partial<SheetSettings>) => void;
-  /** Offers holding to whole digits: for 4-digit sections that can be changed. */
-  readonly snaps: boolean;
   /** Zoom in per cent of the fitted sheet. */
   readonly zoomPercent: number;
   readonly onZoom: (factor: number) => void;
@@ -19,7 +17,7 @@ interface SheetToolsProps {
 
 /** How the sheet is shown: a thin row above it. */
 export const SheetTools = memo(function SheetTools(props: SheetToolsProps) {
-  const { settings, onSettings, snaps, zoomPercent, onZoom, onFit } = props;
+  const { settings, onSettings, zoomPercent, onZoom, onFit } = props;
   return (
     <div
       role="toolbar"
@@ -46,14 +44,15 @@ export const SheetTools = memo(function SheetTools(props: SheetToolsProps) {
           segments={[
             { value: 'thickness', label: 'Thickness' },
             { value: 'curvature', label: 'Curvature' },
+            { value: 'none', label: 'None' },
           ]}
           onChange={(secondView) => {
             onSettings({ secondView });
           }}
-          className="w-56"
+          className="w-66"
         />
       </Labelled>
-      <Toggles settings={settings} onSettings={onSettings} snaps={snaps} />
+      <Toggles settings={settings} onSettings={onSettings} />
       <ZoomTools zoomPercent={zoomPercent} onZoom={onZoom} onFit={onFit} />
     </div>
   );
@@ -70,11 +69,7 @@ function Labelled({ label, children }: { label: string; children: ReactNode }) {
   );
 }
 
-function Toggles({
-  settings,
-  onSettings,
-  snaps,
-}: Pick<SheetToolsProps, 'settings' | 'onSettings' | 'snaps'>) {
+function Toggles({ settings, onSettings }: Pick<SheetToolsProps, 'settings' | 'onSettings'>) {
   return (
     <div className="flex gap-1.5">
       <ToggleButton
@@ -93,17 +88,6 @@ function Toggles({
       >
         Comb
       </ToggleButton>
-      {snaps && (
-        <ToggleButton
-          size="small"
-          pressed={settings.snap}
-          onPressedChange={(snap) => onSettings({ snap })}
-          title="Hold handles to whole 4-digit values; Alt inverts it while dragging"
-          className="pointer-coarse:h-11"
-        >
-          Whole digits
-        </ToggleButton>
-      )}
     </div>
   );
 }

@@ -52,13 +52,17 @@ export function SheetViews(props: SheetViewsProps) {
       <ChordLine transform={transform} />
       {settings.comb && <CurvatureComb drawing={drawing} transform={transform} />}
       <DimensionLines dimensions={dimensions} live={live} />
-      <DistributionView view={settings.secondView} {...{ layout, transform, drawing, chordMm, units }} />
+      {settings.secondView !== 'none' && (
+        <DistributionView view={settings.secondView} {...{ layout, transform, drawing, chordMm, units }} />
+      )}
       <StationLabels layout={layout} transform={transform} />
-      <StationMarker
-        {...{ layout, transform, drawing, chordMm, units }}
-        station={settings.station}
-        onSettings={onSettings}
-      />
+      {settings.secondView !== 'none' && (
+        <StationMarker
+          {...{ layout, transform, drawing, chordMm, units }}
+          station={settings.station}
+          onSettings={onSettings}
+        />
+      )}
     </>
   );
 }

@@ -1,6 +1,6 @@
 import { memo, type ReactNode, useState } from 'react';
 import { CST_LIMITS } from '#geometry/shapes/cst.ts';
-import { describeShape } from '#geometry/shapes/shape.ts';
+import { describeShape, type ShapeKind } from '#geometry/shapes/shape.ts';
 import { useUnits } from '#client/app/units.ts';
 import { drawSection } from '#client/drawing/section-drawing.ts';
 import { SegmentedControl } from '#client/ui/segmented-control.tsx';
@@ -10,33 +10,28 @@ import { type EditorAction } from './editor-state.ts';
 import { CHORD_LIMITS } from './fields.ts';
 import { FreeFormFields } from './free-form-fields.tsx';
 import { MeasuredValues } from './measured-values.tsx';
-import { type Notice, noticeText, noticeTone } from './notices.ts';
-import { type Present } from './present.ts';
+import { useLiveState } from './live-state.ts';
+import { type SheetSettings } from './sheet-settings.ts';
 import { ValueField } from './value-field.tsx';
 
 interface SideColumnProps {
-  readonly present: Present;
-  readonly notice: Notice | null;
-  readonly station: number;
+  readonly settings: SheetSettings;
+  readonly onSettings: (change: Partial<SheetSettings>) => void;
   readonly enabled: boolean;
   readonly dispatch: (action: EditorAction) => void;
 }
 
 /** The values of the section beside the sheet: the same as on it, as ordinary labelled fields, and what it measures. */
-export const SideColumn = memo(function SideColumn({
-  present,
-  notice,
-  station,
-  enabled,
-  dispatch,
-}: SideColumnProps) {
+export const SideColumn = memo(function SideColumn(props: SideColumnProps) {
+  const { settings, onSettings, enabled, dispatch } = props;
+  const { present } = useLiveState();
   const { shape, chordMm } = present;
   const units = useUnits();
   return (
     <>
       <Part title="Shape">
         {enabled ? (
-          <KindSwitch present={present} dispatch={dispatch} />
+          <KindSwitch kind={shape.kind} dispatch={dispatch} />
         ) : (
           <p className="font-semibold">{describeShape(shape)}</p>
         )}
@@ -52,7 +47,11 @@ export const SideColumn = memo(function SideColumn({
           dispatch={dispatch}
         />
         {enabled && shape.kind === 'naca4' && (
-          <DigitFields shape={shape} chordMm={chordMm} units={units} dispatch={dispatch} />
+          <DigitFields
+            {...{ shape, chordMm, units, dispatch }}
+            snap={settings.snap}
+            onSettings={onSettings}
+          />
         )}
         {enabled && shape.kind === 'cst' && (
           <FreeFormFields
@@ -63,10 +62,14 @@ export const SideColumn = memo(function SideColumn({
             dispatch={dispatch}
           />
         )}
-        {enabled && <NoticeLine notice={notice} chordMm={chordMm} units={units} />}
       </Part>
       <Part title="Measured on the contour">
-        <MeasuredValues drawing={drawSection(shape)} chordMm={chordMm} units={units} station={station} />
+        <MeasuredValues
+          drawing={drawSection(shape)}
+          chordMm={chordMm}
+          units={units}
+          station={settings.station}
+        />
       </Part>
     </>
   );
@@ -89,8 +92,12 @@ const ORDERS = Array.from({ length: CST_LIMITS.order.max - CST_LIMITS.order.min 
 /** Reproduces 4-digit sections to a few ten-thousandths of chord. */
 const FIRST_ORDER = '8';
 
-function KindSwitch({ present, dispatch }: Pick<SideColumnProps, 'present' | 'dispatch'>) {
-  const { kind } = present.shape;
+interface KindSwitchProps {
+  readonly kind: ShapeKind;
+  readonly dispatch: SideColumnProps['dispatch'];
+}
+
+const KindSwitch = memo(function KindSwitch({ kind, dispatch }: KindSwitchProps) {
   const [order, setOrder] = useState(FIRST_ORDER);
   return (
     <div className="mb-1 flex items-end gap-2">
@@ -121,31 +128,4 @@ function KindSwitch({ present, dispatch }: Pick<SideColumnProps, 'present' | 'di
       )}
     </div>
   );
-}
-
-/** What there is to say about the last change. Its two lines are kept free, so that nothing below moves. */
-function NoticeLine({
-  notice,
-  chordMm,
-  units,
-}: {
-  notice: Notice | null;
-  chordMm: number;
-  units: ReturnType<typeof useUnits>;
-}) {
-  const tone = notice ? noticeTone(notice) : 'info';
-  return (
-    <p
-      role="status"
-      className={`mt-1 min-h-[4.5em] border-l-2 pl-3 text-xs ${
-        notice
-          ? tone === 'caution'
-            ? 'border-amber text-amber'
-            : 'border-graphite text-graphite'
-          : 'border-transparent'
-      }`}
-    >
-      {notice && noticeText(notice, chordMm, units)}
-    </p>
-  );
-}
+});

@@ -1,5 +1,6 @@
 import { useDrag } from '@use-gesture/react';
 import { useEffect, useLayoutEffect, useRef } from 'react';
+import { flushSync } from 'react-dom';
 import { type SheetTransform } from '#client/drawing/sheet-view.ts';
 import { type EditorAction } from './editor-state.ts';
 import { type HandleId } from './handle-ids.ts';
@@ -10,7 +11,6 @@ interface HandleDragOptions {
   readonly dispatch: (action: EditorAction) => void;
   /** Holding to whole digits; the Alt key inverts it while dragging. */
   readonly snap: boolean;
-  readonly enabled: boolean;
   /** A press without a move; such a handle starts to move only after some pixels. */
   readonly onTap?: (() => void) | undefined;
 }
@@ -28,7 +28,7 @@ interface Hold {
  * the pointer rests. Pointer events end here; from here on a drag is data.
  */
 export function useHandleDrag(options: HandleDragOptions) {
-  const { handle, dispatch, enabled, onTap } = options;
+  const { handle, dispatch, onTap } = options;
   const latest = useRef(options);
   useLayoutEffect(() => {
     latest.current = options;
@@ -80,14 +80,17 @@ export function useHandleDrag(options: HandleDragOptions) {
       if (!canceled) move(latest.current, held);
       dispatch({ type: canceled ? 'drag-cancel' : 'drag-end' });
     },
-    { enabled, filterTaps: onTap !== undefined, pointer: { keys: false, buttons: 1 } },
+    { filterTaps: onTap !== undefined, pointer: { keys: false, buttons: 1 } },
   );
 }
 
+/** Draws in the frame of the move itself, not in a later one: the surface stays under the pointer. */
 function move({ transform, snap, dispatch }: HandleDragOptions, held: Hold): void {
-  dispatch({
-    type: 'drag-move',
-    by: { x: held.dx / transform.chordPixels, y: -held.dy / transform.crossPixels },
-    snap: snap !== held.alt,
+  flushSync(() => {
+    dispatch({
+      type: 'drag-move',
+      by: { x: held.dx / transform.chordPixels, y: -held.dy / transform.crossPixels },
+      snap: snap !== held.alt,
+    });
   });
 }

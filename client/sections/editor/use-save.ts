@@ -7,7 +7,8 @@ import { dropDraft, useSaveVersion, versionQuery } from '#client/api/sections.ts
 import { shapeSentence } from '#client/app/shape-words.ts';
 import { useAnnounce } from '#client/ui/announcer.tsx';
 import { type DraftKeeper } from './draft-keeper.ts';
-import { type EditorAction, type EditorState } from './editor-state.ts';
+import { type Shape } from '#geometry/shapes/shape.ts';
+import { type EditorAction } from './editor-state.ts';
 import { closeForm } from './present.ts';
 
 export type SaveStep =
@@ -17,13 +18,15 @@ export type SaveStep =
 
 interface SaveOptions {
   readonly sectionId: string;
-  readonly state: EditorState;
+  /** What is saved, and the version it stands on. */
+  readonly shape: Shape;
+  readonly basedOn: number;
   readonly dispatch: (action: EditorAction) => void;
   readonly keeper: DraftKeeper;
 }
 
 /** Saving as a version: asking for a note, the save itself, and what to do when another version came in between. */
-export function useSave({ sectionId, state, dispatch, keeper }: SaveOptions) {
+export function useSave({ sectionId, shape, basedOn, dispatch, keeper }: SaveOptions) {
   const [save, setSave] = useState<SaveStep>({ step: 'closed' });
   const [note, setNote] = useState('');
   const mutation = useSaveVersion(sectionId);
@@ -37,9 +40,9 @@ export function useSave({ sectionId, state, dispatch, keeper }: SaveOptions) {
     if (intent.current?.of !== of) intent.current = { of, key: v4() };
     return intent.current.key;
   };
-  const run = async (basedOn: number, typed: string) => {
+  const run = async (on: number, typed: string) => {
     setNote(typed);
-    const body = { basedOn, shape: closeForm(state.present.shape), note: typed };
+    const body = { basedOn: on, shape: closeForm(shape), note: typed };
     try {
       const version = await mutation.mutateAsync({ ...body, key: keyOf(body) });
       intent.current = null;
@@ -66,7 +69,7 @@ export function useSave({ sectionId, state, dispatch, keeper }: SaveOptions) {
       setNote(typed);
       setSave({ step: 'closed' });
     },
-    run: (typed: string) => void run(state.basedOn, typed),
+    run: (typed: string) => void run(basedOn, typed),
     /** After looking at both: the work stands on the newer version from now on, and is saved as the one after it. */
     saveOnTop: (latest: SectionVersion) => {
       dispatch({ type: 'rebase', number: latest.number });

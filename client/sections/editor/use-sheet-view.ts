@@ -1,4 +1,12 @@
-import { type RefObject, useCallback, useMemo, useState } from 'react';
+import {
+  type Dispatch,
+  type SetStateAction,
+  useCallback,
+  useLayoutEffect,
+  useMemo,
+  useRef,
+  useState,
+} from 'react';
 import { type SheetLayout } from '#client/drawing/sheet-layout.ts';
 import {
   type Exaggeration,
@@ -9,7 +17,6 @@ import {
   type SheetView,
   zoomAbout,
 } from '#client/drawing/sheet-view.ts';
-import { useSheetGestures } from './use-sheet-gestures.ts';
 
 export interface SheetControl {
   readonly transform: SheetTransform;
@@ -17,7 +24,8 @@ export interface SheetControl {
   readonly fit: () => void;
   /** Zooms by a factor about the middle of the sheet. */
   readonly zoom: (factor: number) => void;
-  readonly panning: boolean;
+  /** For the gestures on the sheet. */
+  readonly setView: Dispatch<SetStateAction<SheetView>>;
 }
 
 export const ZOOM_STEP = 1.25;
@@ -28,7 +36,6 @@ export const ZOOM_STEP = 1.25;
  *   that nothing moves while a handle is dragged.
  */
 export function useSheetView(
-  element: RefObject<SVGSVGElement | null>,
   layout: SheetLayout,
   ordinates: Ordinates,
   exaggeration: Exaggeration,
@@ -36,10 +43,14 @@ export function useSheetView(
   const [view, setView] = useState(FITTED);
   const [fitted, setFitted] = useState({ ordinates, exaggeration });
   if (fitted.exaggeration !== exaggeration) setFitted({ ordinates, exaggeration });
+  const latest = useRef(ordinates);
+  useLayoutEffect(() => {
+    latest.current = ordinates;
+  });
   const fit = useCallback(() => {
     setView(FITTED);
-    setFitted({ ordinates, exaggeration });
-  }, [ordinates, exaggeration]);
+    setFitted({ ordinates: latest.current, exaggeration });
+  }, [exaggeration]);
   const zoom = useCallback(
     (factor: number) => {
       const { chord, section } = layout;
@@ -48,10 +59,9 @@ export function useSheetView(
     },
     [layout],
   );
-  const panning = useSheetGestures(element, layout, setView, fit);
   const transform = useMemo(
     () => sheetTransform(layout, fitted.ordinates, exaggeration, view),
     [layout, fitted, exaggeration, view],
   );
-  return { transform, view, fit, zoom, panning };
+  return { transform, view, setView, fit, zoom };
 }

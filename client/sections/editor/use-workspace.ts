@@ -1,7 +1,7 @@
-import { useCallback, useMemo, useReducer, useState } from 'react';
+import { useCallback, useMemo, useState } from 'react';
 import { type Section, type SectionVersion } from '#server/contracts/sections.ts';
 import { type DraftMirror } from './draft-mirror.ts';
-import { reduceEditor, startState } from './editor-state.ts';
+import { type EditorAction } from './editor-state.ts';
 import { type Present, sameShape } from './present.ts';
 import { useDraftKeeper } from './use-draft-keeper.ts';
 import { useSave } from './use-save.ts';
@@ -18,18 +18,31 @@ export interface WorkspaceStart {
   readonly mirror: DraftMirror;
 }
 
-/** What the editor of one section holds: the state that undo knows, its draft on the server, and saving it. */
-export function useWorkspace({ section, base, start, from, mirror }: WorkspaceStart) {
-  const [state, dispatch] = useReducer(reduceEditor, null, () => startState(start, base.number));
-  const { present, drag, basedOn } = state;
+/** The state of the editor as the last finished step left it: a drag changes none of this. */
+export interface SettledState {
+  readonly settled: Present;
+  readonly basedOn: number;
+  readonly canUndo: boolean;
+  readonly canRedo: boolean;
+  readonly dispatch: (action: EditorAction) => void;
+}
+
+/** What stands around the sheet: the draft on the server, the version that the work stands on, and saving. */
+export function useWorkspace({
+  section,
+  base,
+  start,
+  from,
+  mirror,
+  settled,
+  basedOn,
+  dispatch,
+}: WorkspaceStart & SettledState) {
   const [settings, setSettings] = useSettings();
   const [keeper, keeping] = useDraftKeeper(section.id, mirror);
-  const saving = useSave({ sectionId: section.id, state, dispatch, keeper });
+  const saving = useSave({ sectionId: section.id, shape: settled.shape, basedOn, dispatch, keeper });
   const version = useStandingVersion(section.id, basedOn, base);
   const ghost = useGhost(section.id, settings.ghost);
-
-  // During a drag, everything but the sheet and the list shows the section as it was when the drag began.
-  const settled = drag ? drag.start : present;
   const dirty = useMemo(() => !sameShape(settled.shape, version.shape), [settled.shape, version.shape]);
   useKeeping(
     keeper,
@@ -40,24 +53,14 @@ export function useWorkspace({ section, base, start, from, mirror }: WorkspaceSt
   );
   const title = useTitle(section, settled.shape, version, dirty);
   const nextNumber = Math.max(section.versionCount, version.number, section.latest.number) + 1;
-  return {
-    state,
-    dispatch,
-    settings,
-    setSettings,
-    keeping,
-    saving,
-    version,
-    ghost,
-    settled,
-    dirty,
-    title,
-    nextNumber,
-  };
+  return { settings, setSettings, keeping, saving, version, ghost, dirty, title, nextNumber };
 }
 
-/** The buttons of the header as steady functions, so that it is left alone while a handle is dragged. */
-export function useWorkspaceActions({ dispatch, saving, dirty }: ReturnType<typeof useWorkspace>) {
+/** What the buttons of the header do. */
+export function useWorkspaceActions(
+  dispatch: SettledState['dispatch'],
+  { saving, dirty }: ReturnType<typeof useWorkspace>,
+) {
   const [exporting, setExporting] = useState(false);
   const { ask } = saving;
   return {

@@ -1,5 +1,5 @@
 import { useGesture } from '@use-gesture/react';
-import { type Dispatch, type RefObject, type SetStateAction, useEffect, useState } from 'react';
+import { type Dispatch, memo, type RefObject, type SetStateAction, useEffect, useState } from 'react';
 import { type SheetLayout } from '#client/drawing/sheet-layout.ts';
 import { panBy, type SheetView, zoomAbout } from '#client/drawing/sheet-view.ts';
 
@@ -13,17 +13,25 @@ interface PinchMemo {
   readonly y: number;
 }
 
+interface SheetGesturesProps {
+  readonly element: RefObject<SVGSVGElement | null>;
+  readonly layout: SheetLayout;
+  readonly setView: Dispatch<SetStateAction<SheetView>>;
+  readonly fit: () => void;
+}
+
 /**
  * The gestures on the sheet: wheel and pinch zoom about the pointer; a drag on empty paper, with the middle button or
  * with the space bar held pans; a double click fits. One finger up or down is left to the page, which scrolls.
- * @returns Whether the paper is being moved, or would be by the next drag.
+ * Shows nothing; it is a component so that its listeners stay while the sheet is drawn anew. The sheet carries
+ * `data-panning` while the paper is moved, or would be by the next drag.
  */
-export function useSheetGestures(
-  element: RefObject<SVGSVGElement | null>,
-  layout: SheetLayout,
-  setView: Dispatch<SetStateAction<SheetView>>,
-  fit: () => void,
-): boolean {
+export const SheetGestures = memo(function SheetGestures({
+  element,
+  layout,
+  setView,
+  fit,
+}: SheetGesturesProps) {
   const space = useSpaceKey();
   const [panning, setPanning] = useState(false);
   useGesture(
@@ -69,8 +77,12 @@ export function useSheetGestures(
       pinch: { scaleBounds: { min: 1e-3, max: 1e3 } },
     },
   );
-  return panning || space;
-}
+  const shown = panning || space;
+  useEffect(() => {
+    element.current?.toggleAttribute('data-panning', shown);
+  }, [element, shown]);
+  return null;
+});
 
 /** Is the space bar held down outside of fields, buttons and handles? */
 function useSpaceKey(): boolean {
