@@ -64,6 +64,12 @@ export async function createWorkshop(db: Knex, input: { name: string; at: Date }
   return id;
 }
 
+/** The id of the workshop of this name, the oldest if several bear it; null when there is none. */
+export async function workshopByName(db: Knex, name: string): Promise<string | null> {
+  const row: { id: string } | undefined = await db('workshops').where({ name }).orderBy('id').first('id');
+  return row?.id ?? null;
+}
+
 /**
  * Makes a person of a workshop and returns the id.
  * @throws ER_DUP_ENTRY when the address has an account already, in whatever workshop

@@ -1,5 +1,5 @@
 /**
- * The start of everything: `npm start`, `npm run dev`, `npm run bench`. Plain JavaScript without packages, because
+ * The start of everything: `npm start`, `npm run dev`, `npm run bench`, `npm run add-person`. Plain JavaScript without packages, because
  * on a fresh clone there are none; once they are installed the work goes on in TypeScript, in this same process.
  */
 import { realpathSync } from 'node:fs';
@@ -9,7 +9,12 @@ import { explain } from './steps.mjs';
 
 const begun = performance.now();
 const root = realpathSync(fileURLToPath(new URL('../..', import.meta.url)));
-const works = { start: './start.ts', dev: './dev.ts', bench: '../../tests/bench/run.ts' };
+const works = {
+  start: './start.ts',
+  dev: './dev.ts',
+  bench: '../../tests/bench/run.ts',
+  'add-person': './add-person.ts',
+};
 const mode = process.argv[2] ?? 'start';
 
 try {
