@@ -34,9 +34,9 @@ export function ConflictDialog(props: ConflictDialogProps) {
       }
     >
       <p className="mb-4">
-        {`${latest.author.name} saved version ${latest.number} `}
+        {`${latest.author.name} saved version ${latest.number} (`}
         <Moment at={latest.createdAt} />
-        {`, while your work stood on version ${basedOn}. Nothing is lost: look at both, then decide.`}
+        {`) while your work stood on version ${basedOn}. Nothing is lost: look at both, then decide.`}
       </p>
       <div className="grid gap-4 sm:grid-cols-2">
         <Side

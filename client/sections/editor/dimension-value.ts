@@ -39,5 +39,6 @@ export function readDimension(
   const value = isAngle || field === 'chordMm' ? read.value : read.value / chordMm;
   const { notice, present: next } = withField(present, field, value);
   if (next !== null) return { value };
+  if (notice?.code === 'refused') return { error: notice.reason };
   return { error: notice ? noticeText(notice, chordMm, units) : 'Not applied.' };
 }

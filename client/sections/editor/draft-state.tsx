@@ -15,12 +15,15 @@ export function DraftState({
 }) {
   const now = useNow(keeper.step === 'kept' && dirty);
   const inTrouble = keeper.step === 'retrying' || keeper.step === 'refused';
+  const words = draftWords(dirty, basedOn, keeper, now);
   return (
     <p
-      className={`flex min-w-0 items-baseline gap-1.5 ${inTrouble ? 'text-brick' : dirty ? 'text-amber' : 'text-graphite'}`}
+      className={`flex max-w-full shrink-0 items-baseline gap-1.5 ${inTrouble ? 'text-brick' : dirty ? 'text-amber' : 'text-graphite'}`}
     >
       {dirty && <StatusGlyph status="draft" className="size-[0.8em] translate-y-px" />}
-      <span className="min-w-0">{draftWords(dirty, basedOn, keeper, now)}</span>
+      <span className="min-w-0 truncate" title={words}>
+        {words}
+      </span>
     </p>
   );
 }

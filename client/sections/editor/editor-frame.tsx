@@ -16,7 +16,7 @@ interface EditorFrameProps {
 /** Places of the editor: the sheet is the largest; the list stands beside it, or below it on a narrow screen. */
 export function EditorFrame({ title, header, note, stage, strip, side, print, children }: EditorFrameProps) {
   return (
-    <div className="grid flex-1 lg:h-[calc(100dvh-2.75rem)] lg:min-h-170 lg:flex-none lg:grid-cols-[minmax(0,1fr)_24rem] lg:grid-rows-[minmax(0,1fr)_auto] print:block print:h-auto print:min-h-0">
+    <div className="grid flex-1 lg:h-[calc(100dvh-2.75rem)] lg:min-h-190 lg:flex-none lg:grid-cols-[minmax(0,1fr)_20rem] xl:grid-cols-[minmax(0,1fr)_24rem] lg:grid-rows-[minmax(0,1fr)_auto] print:block print:h-auto print:min-h-0">
       <title>{`${title} · Ribwright`}</title>
       <div className="flex min-h-0 min-w-0 flex-col gap-2 p-3 lg:pr-4 print:hidden">
         {header}

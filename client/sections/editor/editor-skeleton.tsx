@@ -19,7 +19,7 @@ export function EditorSkeleton() {
       stage={
         <>
           <Skeleton className="h-8 w-full" />
-          <div className="h-[min(34rem,150vw)] min-h-110 border border-rule bg-sheet lg:h-auto lg:min-h-0 lg:flex-1" />
+          <div className="h-[min(34rem,150vw)] min-h-110 border border-rule bg-sheet lg:h-auto lg:flex-1" />
         </>
       }
       strip={<div className="h-40 border-t border-rule pointer-coarse:h-44" />}

@@ -1,3 +1,4 @@
+import { useId } from 'react';
 import { type Shape } from '#geometry/shapes/shape.ts';
 import { type Units } from '#client/app/units.ts';
 import { CurvatureComb } from '#client/drawing/curvature-comb.tsx';
@@ -41,17 +42,23 @@ export function SheetViews(props: SheetViewsProps) {
     dimensions,
     live,
   } = props;
+  const clip = useId();
   return (
     <>
-      {gridMm !== null && (
-        <MillimetreGrid layout={layout} transform={transform} stepMm={gridMm} chordMm={chordMm} />
-      )}
       <StationLines layout={layout} transform={transform} />
-      <SectionLines drawing={drawing} transform={transform} />
-      {ghost && <GhostLines drawing={drawSection(ghost)} transform={transform} />}
-      <ChordLine transform={transform} />
-      {settings.comb && <CurvatureComb drawing={drawing} transform={transform} />}
-      <DimensionLines dimensions={dimensions} live={live} />
+      <clipPath id={clip}>
+        <rect {...layout.section} />
+      </clipPath>
+      <g clipPath={`url(#${clip})`}>
+        {gridMm !== null && (
+          <MillimetreGrid layout={layout} transform={transform} stepMm={gridMm} chordMm={chordMm} />
+        )}
+        <SectionLines drawing={drawing} transform={transform} />
+        {ghost && <GhostLines drawing={drawSection(ghost)} transform={transform} />}
+        <ChordLine transform={transform} />
+        {settings.comb && <CurvatureComb drawing={drawing} transform={transform} />}
+        <DimensionLines dimensions={dimensions} live={live} />
+      </g>
       {settings.secondView !== 'none' && (
         <DistributionView view={settings.secondView} {...{ layout, transform, drawing, chordMm, units }} />
       )}
