@@ -190,7 +190,9 @@ function Curve({ points, toX, toY, name, labelAt, above, floor = Infinity, dash 
         <text
           x={toX(label.x) + 6}
           y={above ? toY(label.y) - 7 : Math.min(toY(label.y) + 15, floor)}
-          className="fill-graphite text-[11px]"
+          paintOrder="stroke"
+          strokeWidth={4}
+          className="fill-graphite stroke-sheet text-[11px]"
         >
           {name}
         </text>

@@ -73,7 +73,7 @@ function furtherRows(measures: Measures, chordMm: number, units: Units): Row[] {
 
 function Rows({ rows }: { rows: readonly Row[] }) {
   return (
-    <dl className="grid grid-cols-[auto_minmax(0,1fr)] gap-x-3 gap-y-1">
+    <dl className="grid grid-cols-[minmax(0,1fr)_auto] gap-x-3 gap-y-1">
       {rows.map(([name, value]) => (
         <Fragment key={name.startsWith('Thickness at') ? 'station' : name}>
           <dt>{name}</dt>
