@@ -1,0 +1,66 @@
+import { type Polyline, at, polylineOf } from './arrays.ts';
+import { type ExpectedCore } from './expected-core.ts';
+import { type Finding, error, mm } from './findings.ts';
+import { limitBreaches } from './limits.ts';
+import { type Plan } from './plan.ts';
+import { type ReadMove, readProgram } from './read-program.ts';
+import { type PlaneDeviation, deviationAt } from './swept-core.ts';
+import { benchOf, fromTowers } from './towers.ts';
+
+/** The cut may differ from the plan by this much, mm. */
+export const SIMULATION_TOLERANCE_MM = 0.02;
+/** Planes across the span: both faces and five between. */
+export const PLANES = [0, 1 / 6, 2 / 6, 3 / 6, 4 / 6, 5 / 6, 1] as const;
+
+/** What a program does when it is run. */
+export interface Simulation {
+  /** Moves and waits together, s. */
+  readonly totalSeconds: number;
+  /** For each core and plane how far the cut is from the plan. */
+  readonly deviations: readonly (PlaneDeviation & { readonly core: number })[];
+  readonly largestDeviationMm: number;
+  readonly findings: readonly Finding[];
+}
+
+/**
+ * Reads a machine program back and runs it: the wire between both towers sweeps the foam, and the core it leaves is compared with the planned one at
+ * root, tip and five planes between; travel, feed and the block are checked on what the text says. Every breach is a finding with its
+ * line.
+ * @param text the program, from wherever it comes
+ * @param cores what must come out, in the order of the block
+ */
+export function simulate(text: string, plan: Plan, cores: readonly ExpectedCore[]): Simulation {
+  const read = readProgram(text, plan.machine);
+  const bench = benchOf(plan);
+  const towers = {
+    left: polylineOf(read.moves.map(({ leftX, leftY }) => ({ x: leftX, y: leftY }))),
+    right: polylineOf(read.moves.map(({ rightX, rightY }) => ({ x: rightX, y: rightY }))),
+  };
+  const plane = (share: number): Polyline =>
+    fromTowers(bench, towers, bench.leftFaceMm + share * (bench.rightFaceMm - bench.leftFaceMm));
+  const wires = PLANES.map((share) => plane(share));
+  const deviations = cores.flatMap((core, index) =>
+    PLANES.map((share, k) => ({ ...deviationAt(wires[k] ?? plane(share), core, share), core: index })),
+  );
+  const faces = { left: plane(0), right: plane(1) };
+  const findings = [
+    ...read.findings,
+    ...limitBreaches(plan, read.moves, faces, cores),
+    ...deviations.flatMap((of) => deviationFinding(plan, read.moves, of)),
+  ];
+  const largestDeviationMm = Math.max(0, ...deviations.map(({ deviationMm }) => deviationMm));
+  return { totalSeconds: read.totalSeconds, deviations, largestDeviationMm, findings };
+}
+
+function deviationFinding(plan: Plan, moves: readonly ReadMove[], of: PlaneDeviation): Finding[] {
+  if (of.deviationMm <= SIMULATION_TOLERANCE_MM) return [];
+  const line = moves[of.move]?.line ?? 0;
+  const left = at(
+    PLANES,
+    PLANES.findIndex((share) => share === of.share),
+  );
+  const fromRoot = plan.machine.rootFace === 'left' ? left : 1 - left;
+  const spanMm = fromRoot * plan.panel.spanMm;
+  const message = `Line ${line}: the cut differs from the plan by ${mm(of.deviationMm, 3)} at ${mm(spanMm, 0)} from the root.`;
+  return [error('cut-differs', 'cut.toleranceMm', message, { line, spanMm })];
+}

@@ -1,0 +1,46 @@
+import { planCore } from '#geometry/cutting/planner.ts';
+import { PLAN, planWith } from '#tests/geometry/cutting/plans.ts';
+import { type Bench, type Figure } from './figures.ts';
+
+const IDENTITY = { sheetName: 'Reed wing', versionNumber: 2, checksum: '0123456789abcdef', part: 'core' };
+const WARM_UP = 60;
+const RUNS = 101;
+/** As many points as the goal speaks of: the chain then has about 400 pairs, 400 points at each end. */
+const DENSE = planWith({ cut: { pointsPerSurface: 190 } });
+
+/** Median time of one call in ms, after the engine has compiled it. */
+function medianMs(work: () => unknown): number {
+  let kept: unknown;
+  for (let i = 0; i < WARM_UP; i += 1) kept = work();
+  const times = Array.from({ length: RUNS }, () => {
+    const start = performance.now();
+    kept = work();
+    return performance.now() - start;
+  });
+  if (kept === undefined) throw new Error('Nothing was measured.');
+  return times.sort((a, b) => a - b)[(RUNS - 1) / 2] ?? NaN;
+}
+
+function figures(): Figure[] {
+  const points = planCore(DENSE, IDENTITY).core?.core.panel.chain.station.length ?? 0;
+  return [
+    { what: 'points at each end of the plan measured', value: points, unit: 'points' },
+    {
+      what: 'whole core plan, program simulated',
+      value: medianMs(() => planCore(DENSE, IDENTITY)),
+      unit: 'ms',
+      goal: 25,
+    },
+    {
+      what: 'whole core plan at the default spacing',
+      value: medianMs(() => planCore(PLAN, IDENTITY)),
+      unit: 'ms',
+    },
+  ];
+}
+
+const bench: Bench = {
+  name: `Cutting (medians of ${RUNS} warm calls)`,
+  run: () => Promise.resolve(figures()),
+};
+export default bench;
