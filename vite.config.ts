@@ -8,7 +8,6 @@ const folder = (path: string): string => fileURLToPath(new URL(path, import.meta
 export default defineConfig({
   root: folder('client'),
   publicDir: folder('public'),
-  cacheDir: folder('.build/vite'),
   plugins: [react(), tailwindcss()],
   build: { outDir: folder('.build/client'), emptyOutDir: true, assetsInlineLimit: 0, sourcemap: true },
 });

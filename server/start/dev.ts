@@ -1,8 +1,9 @@
 import { spawn, type ChildProcess } from 'node:child_process';
 import { once } from 'node:events';
 import { join, relative } from 'node:path';
-import { createServer, type Plugin, type ViteDevServer } from 'vite';
+import { type ViteDevServer } from 'vite';
 import { defaultPort } from '../config.ts';
+import { clientServer } from './client-server.ts';
 import { freePort } from './ports.ts';
 import { greet, prepare, type Launch } from './prepare.ts';
 import { tied } from './processes.mjs';
@@ -66,19 +67,6 @@ class AppProcess {
   }
 }
 
-/** Lets requests wait while the server restarts, instead of failing. */
-function holdBack(app: AppProcess): Plugin {
-  return {
-    name: 'hold-back-during-restart',
-    configureServer: ({ middlewares }) => {
-      middlewares.use((request, _response, next) => {
-        if (!/^\/(api|auth)\//.test(request.url ?? '')) next();
-        else void app.settled().then(() => next());
-      });
-    },
-  };
-}
-
 function restartOnChange(vite: ViteDevServer, root: string, app: AppProcess): void {
   vite.watcher.add(serverFolders.map((folder) => join(root, folder)));
   let timer: NodeJS.Timeout | undefined;
@@ -105,15 +93,13 @@ async function startAll(launch: Launch, stops: Stops): Promise<void> {
   await knex.destroy();
   const app = new AppProcess(root, await freePort());
   const target = `http://127.0.0.1:${String(app.port)}`;
-  const vite = await createServer({
-    configFile: join(root, 'vite.config.ts'),
-    plugins: [holdBack(app)],
-    server: {
-      host: settings.host,
-      port: settings.port ?? defaultPort,
-      strictPort: settings.port !== null,
-      proxy: { '/api': { target }, '/auth': { target } },
-    },
+  const vite = await clientServer({
+    root,
+    target,
+    host: settings.host,
+    port: settings.port ?? defaultPort,
+    strictPort: settings.port !== null,
+    ready: () => app.settled(),
   });
   await vite.listen();
   stops.add(() => vite.close());

@@ -25,6 +25,8 @@ export interface OpenOptions {
   readonly height?: number;
   readonly theme?: 'light' | 'dark';
   readonly touch?: boolean;
+  /** Where the application is reached, if not at its own address. */
+  readonly origin?: string;
   /** Signs in as this person of the demo workshop: by the sign-in screen at first, then with the session it gave. */
   readonly as?: DemoRole;
 }
@@ -75,7 +77,7 @@ export async function startApp(): Promise<TestApp> {
   return {
     origin,
     database,
-    open: (options = {}) => visit(browser, origin, sessions, options),
+    open: (options = {}) => visit(browser, options.origin ?? origin, sessions, options),
     stop: async () => {
       await browser.close();
       server.closeAllConnections();
