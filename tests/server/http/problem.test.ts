@@ -1,3 +1,5 @@
+import { once } from 'node:events';
+import { type IncomingMessage, request } from 'node:http';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { problemSchema } from '#server/contracts/common.ts';
 import { problems } from '#server/contracts/problems.ts';
@@ -76,6 +78,19 @@ describe('problems', () => {
       expect(api.errors).toEqual([]);
     },
   );
+
+  it('do not arise where the length of an absent body is stated, whatever its type', async () => {
+    const made = await designer.call('createSection', { body: { name: 'Bare', shape: naca4() } });
+    const cookie = [...designer.cookies].map(([name, value]) => `${name}=${value}`).join('; ');
+    for (const more of [{}, { 'content-type': 'text/plain' }]) {
+      const headers = { cookie, 'content-length': '0', ...more };
+      const sent = request(`${api.origin}/api/sections/${made.reply.id}`, { method: 'DELETE', headers });
+      sent.end();
+      const [response] = (await once(sent, 'response')) as [IncomingMessage];
+      response.resume();
+      expect(response.statusCode).toBe(204);
+    }
+  });
 
   it('say which methods an address takes', async () => {
     const response = await designer.fetch('/api/sections', { method: 'PUT' });
