@@ -36,7 +36,7 @@ export function VersionView({ version, inForce }: VersionViewProps) {
     <div data-page="flowing" className="grid flex-1 lg:grid-cols-[minmax(0,1fr)_22rem] print:block">
       <title>{`${version.sectionName} v${version.number} · Ribwright`}</title>
       <div className="flex min-w-0 flex-col gap-3 p-4">
-        <Head version={version} onOpen={setOpen} />
+        <Head version={version} inForce={inForce} onOpen={setOpen} />
         <Standing version={version} inForce={inForce} />
         <div className="lg:max-w-[calc((100dvh-11rem)*1.5)] print:max-w-none">
           <StaticSheet shape={version.shape} chordMm={chordMm} title={titleOf(version, owner)} />
@@ -90,21 +90,26 @@ function titleOf(version: SectionVersion, owner: string): TitleBlockFields {
 
 function Head({
   version,
+  inForce,
   onOpen,
-}: {
-  readonly version: SectionVersion;
-  readonly onOpen: (dialog: OpenDialog) => void;
-}) {
+}: VersionViewProps & { readonly onOpen: (dialog: OpenDialog) => void }) {
   const mayRelease = useMay('versions.release');
   const mayDownload = useMay('files.download');
-  const size = useMay('sections.read') ? 'normal' : 'large';
+  const seesAll = useMay('sections.read');
+  const size = seesAll ? 'normal' : 'large';
+  // Who sees released versions only sees a section while one of its versions is in force.
+  const seesSection = seesAll || typeof inForce === 'number';
   return (
     <header className="flex flex-wrap items-center justify-between gap-x-4 gap-y-2 print:hidden">
       <div className="flex min-w-0 flex-wrap items-baseline gap-x-3">
         <h1 className="min-w-0 text-xl font-extrabold break-words">
-          <Link className="hover:underline" to={`/sections/${version.sectionId}`}>
-            {version.sectionName}
-          </Link>{' '}
+          {seesSection ? (
+            <Link className="hover:underline" to={`/sections/${version.sectionId}`}>
+              {version.sectionName}
+            </Link>
+          ) : (
+            version.sectionName
+          )}{' '}
           v{version.number}
         </h1>
         <span className="text-graphite">{version.description}</span>

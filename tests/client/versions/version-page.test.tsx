@@ -1,4 +1,4 @@
-import { screen, within } from '@testing-library/react';
+import { cleanup, screen, within } from '@testing-library/react';
 import { userEvent } from '@testing-library/user-event';
 import { Route, Routes, useLocation } from 'react-router';
 import { describe, expect, it } from 'vitest';
@@ -37,14 +37,14 @@ function open(
     number = '2',
     search = '',
   }: {
-    section?: Section;
+    section?: Section | Response;
     me?: Me;
     number?: string;
     search?: string;
   } = {},
 ) {
   fakeServer({
-    [`GET ${sectionPath}`]: () => json(section),
+    [`GET ${sectionPath}`]: () => (section instanceof Response ? section : json(section)),
     [`GET ${sectionPath}/versions/${number}`]: () => (version instanceof Response ? version : json(version)),
     [`GET ${sectionPath}/versions/${number}/downloads`]: () => json({ items: [], nextCursor: null }),
   });
@@ -122,6 +122,21 @@ describe('the version page', () => {
     const link = await screen.findByRole('link', { name: 'Version 3, in force' });
     expect(link.getAttribute('href')).toBe(`/sections/${sectionId}/versions/3`);
     expect(screen.getByText('There is no version 2 to show here.')).toBeTruthy();
+  });
+
+  it('leads to the section only who can see it', async () => {
+    const withdrawn = versionOf(2, { status: 'withdrawn', statusReason: 'Too thin', ...releasedBy });
+    open(withdrawn, { me: meOf('technician'), section: problem(404, 'Not found') });
+    await screen.findByText(/No version of this section is in force/);
+    expect(screen.getByRole('heading', { level: 1, name: 'Heron outer panel v2' })).toBeTruthy();
+    expect(screen.queryAllByRole('link')).toEqual([]);
+    cleanup();
+    open(superseded, { me: meOf('technician') });
+    const link = await screen.findByRole('link', { name: 'Heron outer panel' });
+    expect(link.getAttribute('href')).toBe(`/sections/${sectionId}`);
+    cleanup();
+    open(withdrawn, { section: sectionOf({ releasedNumber: null }) });
+    expect(await screen.findByRole('link', { name: 'Heron outer panel' })).toBeTruthy();
   });
 
   it('does not ask the server for a number that cannot be one', async () => {
