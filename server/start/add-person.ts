@@ -4,8 +4,9 @@ import { z } from 'zod';
 import { hashPassword } from '../account/passwords.ts';
 import { createPerson, createWorkshop, personByEmail, workshopByName } from '../account/store.ts';
 import { accountRoles } from '../contracts/permissions.ts';
+import { fillShop, shopDefaults } from '../shop/defaults.ts';
 import { prepare, type Launch } from './prepare.ts';
-import { readablePassword } from './secrets.ts';
+import { longSecret, readablePassword } from './secrets.ts';
 import { StartError } from './steps.mjs';
 import { onStop } from './stop.ts';
 
@@ -43,7 +44,7 @@ export function readPerson(args: readonly string[]): NewPerson {
 }
 
 /**
- * Gives a person an account; an owner of a workshop that is not there yet opens it.
+ * Gives a person an account; an owner of a workshop that is not there yet opens it, with common machines and materials.
  * @returns the password to hand over
  * @throws {StartError} where the address has an account already, or the workshop has no owner to belong to
  */
@@ -63,9 +64,18 @@ export async function addPerson(knex: Knex, person: NewPerson, at: Date): Promis
       );
     }
     const workshopId = found ?? (await createWorkshop(transaction, { name: workshop, at }));
-    await createPerson(transaction, workshopId, { name, email, role, passwordHash, at });
+    const personId = await createPerson(transaction, workshopId, { name, email, role, passwordHash, at });
+    if (found === null) await fillShop(transaction, { workshopId, personId, at }, shopDefaults);
   });
   return password;
+}
+
+/**
+ * The settings of such a start: it does not listen, signs nobody in, and fills nothing in, so it needs neither a free
+ * port nor a secret, and leaves the database without the demo.
+ */
+export function settingsToAdd(environment: NodeJS.ProcessEnv): NodeJS.ProcessEnv {
+  return { ...environment, PORT: '', DEMO: '0', AUTH_SECRET: longSecret() };
 }
 
 /** `npm run add-person`: an account in the database that `npm start` uses. */
@@ -73,7 +83,7 @@ export default async function run(launch: Launch): Promise<void> {
   const person = readPerson(process.argv.slice(3));
   const stops = onStop();
   await stops.guard(async () => {
-    const { knex } = await prepare(launch, stops);
+    const { knex } = await prepare({ ...launch, environment: settingsToAdd(launch.environment) }, stops);
     const password = await addPerson(knex, person, new Date());
     console.log(`\n${person.email} signs in to ${person.workshop} as ${person.role} with ${password}`);
     console.log('The password is shown this once; it can be changed on the account page.');
