@@ -1,10 +1,11 @@
 import { type Knex } from 'knex';
-import { exportFile, type ExportFormat, type ExportOptions } from '#geometry/formats/export.ts';
+import { type ExportFormat, type ExportOptions } from '#geometry/formats/export.ts';
 import { type Person } from '#server/account/person.ts';
 import { type FileReply, type Handlers } from '#server/http/handlers.ts';
 import { reachOf } from '#server/sections/rules.ts';
 import { sectionState } from '#server/sections/store.ts';
 import { findVersion } from '#server/sections/versions/store.ts';
+import { cutFileOf } from './cut-file.ts';
 import { checkDownload } from './rules.ts';
 import { listDownloads, recordDownload } from './store.ts';
 
@@ -27,14 +28,7 @@ function fileHandler<Format extends ExportFormat>(knex: Knex, format: Format) {
     );
     const section = await sectionState(knex, workshopId, params.sectionId);
     checkDownload(person.role, version, section.releasedNumber);
-    const identity = {
-      sectionName: version.sectionName,
-      versionNumber: version.number,
-      status: version.status,
-      designation: version.description,
-      checksum: version.checksum,
-    };
-    const file = exportFile(format, version.shape, identity, query);
+    const file = cutFileOf(version, format, query);
     return {
       file,
       record: (checksum) =>

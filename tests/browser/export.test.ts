@@ -48,7 +48,10 @@ describe('the export panel', () => {
     expect(file.sum.slice(0, 12)).toBe(announced?.replaceAll(' ', ''));
     expect(readDat(file.text).points).toHaveLength(79);
     expect(await download(page)).toEqual(file);
-    const records: unknown[] = await app.database.knex('downloads').select('file_name', 'checksum');
+    const records: unknown[] = await app.database
+      .knex('downloads')
+      .where({ file_name: file.name })
+      .select('file_name', 'checksum');
     const record = { file_name: file.name, checksum: file.sum };
     expect(records).toEqual([record, record]);
     await page.keyboard.press('Escape');

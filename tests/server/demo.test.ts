@@ -1,4 +1,8 @@
+import { createHash } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { parseExportOptions } from '#geometry/formats/export.ts';
+import { cutFileOf } from '#server/exports/cut-file.ts';
+import { findVersion } from '#server/sections/versions/store.ts';
 import { measure } from '#geometry/contour/measures.ts';
 import { camberAt, thicknessAt } from '#geometry/contour/thickness.ts';
 import { checkShape, outlineOf } from '#geometry/shapes/shape.ts';
@@ -39,7 +43,11 @@ async function contents({ knex }: TestDatabase) {
   const sections: unknown[] = await knex('sections')
     .select('name', 'purpose', 'latest_status', 'released_number', 'updated_at', 'archived_at')
     .orderBy('name');
-  return { versions, sections };
+  const downloads: unknown[] = await knex('downloads as d')
+    .join('sections as s', 's.id', 'd.section_id')
+    .select('s.name', 'd.version_number', 'd.file_name', 'd.checksum', 'd.downloaded_at')
+    .orderBy(['s.name', 'd.downloaded_at']);
+  return { versions, sections, downloads };
 }
 
 describe('the demo workshop', () => {
@@ -81,6 +89,39 @@ describe('the demo workshop', () => {
       const order = steps.map(({ at }) => -at.daysAgo * 1440 + minutesOf(at.time));
       expect(order, name).toEqual([...order].sort((a, b) => a - b));
     }
+  });
+
+  it('has files taken of every version in force, and only while it was in force', async () => {
+    const { knex } = database;
+    const inForce: { id: string; name: string; number: number }[] = await knex('sections')
+      .whereNotNull('released_number')
+      .whereNull('archived_at')
+      .select('id', 'name', 'released_number as number');
+    expect(inForce.length).toBeGreaterThanOrEqual(9);
+    for (const { id, name, number } of inForce) {
+      const taken = await knex('downloads').where({ section_id: id, version_number: number });
+      expect(taken.length, name).toBeGreaterThan(0);
+    }
+    for (const { name, steps } of demoSections) {
+      let released: number | null = null;
+      for (const step of steps) {
+        if (step.did === 'release') released = step.version;
+        if (step.did === 'withdraw') released = null;
+        if (step.did === 'take file') expect(step.version, name).toBe(released);
+      }
+    }
+  });
+
+  it('recorded the sum of the very bytes that a person gets', async () => {
+    const { knex } = database;
+    const [row] = (await knex('downloads as d')
+      .join('sections as s', 's.id', 'd.section_id')
+      .where({ 's.name': 'Heron outer panel', 'd.version_number': 3, 'd.format': 'svg' })
+      .select('d.*')) as { workshop_id: string; section_id: string; file_name: string; checksum: string }[];
+    const version = await findVersion(knex, row!.workshop_id, row!.section_id, 3, 'released');
+    const file = cutFileOf(version, 'svg', parseExportOptions('svg', { chordMm: 220 }));
+    expect(file.fileName).toBe(row!.file_name);
+    expect(createHash('sha256').update(file.text).digest('hex')).toBe(row!.checksum);
   });
 
   it('is the same each time for the same moment', async () => {

@@ -1,3 +1,4 @@
+import { type ExportFormat, type ExportOptions } from '#geometry/formats/export.ts';
 import { type Shape } from '#geometry/shapes/shape.ts';
 
 /** When a step was taken: whole days before the day of filling in, and the time of that day in UTC. */
@@ -8,8 +9,11 @@ export interface Moment {
 
 interface Signed {
   readonly at: Moment;
-  readonly by: 'owner' | 'designer';
+  readonly by: 'owner' | 'designer' | 'builder' | 'technician';
 }
+
+/** How a cut file was asked for; what is not said is as the export panel offers it. */
+export type FileOptions = Partial<ExportOptions[ExportFormat]> & { readonly chordMm: number };
 
 /** What happened to a section, in order. */
 export type Step = Signed &
@@ -17,6 +21,12 @@ export type Step = Signed &
     | { readonly did: 'save'; readonly shape: Shape; readonly note: string }
     | { readonly did: 'release' | 'withdraw'; readonly version: number; readonly reason: string }
     | { readonly did: 'archive' }
+    | {
+        readonly did: 'take file';
+        readonly version: number;
+        readonly format: ExportFormat;
+        readonly options: FileOptions;
+      }
     | { readonly did: 'keep draft'; readonly shape: Shape; readonly chordMm: number }
   );
 
@@ -35,6 +45,17 @@ export function save(daysAgo: number, time: Time, by: By, shape: Shape, note: st
 
 export function release(daysAgo: number, time: Time, by: By, version: number, reason: string) {
   return { did: 'release', at: { daysAgo, time }, by, version, reason } as const;
+}
+
+export function takeFile(
+  daysAgo: number,
+  time: Time,
+  by: By,
+  version: number,
+  format: ExportFormat,
+  options: FileOptions,
+) {
+  return { did: 'take file', at: { daysAgo, time }, by, version, format, options } as const;
 }
 
 export function withdraw(daysAgo: number, time: Time, by: By, version: number, reason: string) {

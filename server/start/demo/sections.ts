@@ -1,4 +1,4 @@
-import { type History, release, save, withdraw } from './histories.ts';
+import { type History, release, save, takeFile, withdraw } from './histories.ts';
 import { fourDigit, freeForms as forms } from './shapes.ts';
 
 const heron: readonly History[] = [
@@ -8,8 +8,10 @@ const heron: readonly History[] = [
     steps: [
       save(38, '09:12', 'designer', fourDigit(2, 40, 14), 'First from the sizing sheet.'),
       release(36, '14:40', 'owner', 1, 'For the first test panel.'),
+      takeFile(35, '08:20', 'technician', 1, 'dxf', { chordMm: 220 }),
       save(24, '10:05', 'designer', fourDigit(2, 40, 12.8), 'Thinner: less drag at cruise.'),
       release(22, '16:10', 'designer', 2, ''),
+      takeFile(21, '07:55', 'technician', 2, 'dxf', { chordMm: 220 }),
       save(
         9,
         '08:48',
@@ -18,6 +20,9 @@ const heron: readonly History[] = [
         'Spar cap of 24 mm still clears; whole digits again.',
       ),
       release(8, '11:30', 'owner', 3, 'Test panel cut and measured, within 0.2 mm.'),
+      takeFile(8, '13:05', 'builder', 3, 'svg', { chordMm: 220 }),
+      takeFile(7, '08:10', 'technician', 3, 'dxf', { chordMm: 220 }),
+      takeFile(3, '08:05', 'technician', 3, 'dxf', { chordMm: 180 }),
       save(2, '15:22', 'designer', fourDigit(2.3, 42, 12), 'Trial: a little more camber, crest further aft.'),
       {
         did: 'keep draft',
@@ -43,6 +48,8 @@ const heron: readonly History[] = [
         'Joiner box is 36 mm high: 14.4 % leaves 0.7 mm a side.',
       ),
       release(19, '10:30', 'designer', 3, 'Joiner box tried in a foam sample.'),
+      takeFile(18, '08:30', 'technician', 3, 'dxf', { chordMm: 260 }),
+      takeFile(7, '08:12', 'technician', 3, 'dxf', { chordMm: 260 }),
     ],
   },
   {
@@ -52,6 +59,8 @@ const heron: readonly History[] = [
       save(33, '15:05', 'designer', fourDigit(1, 40, 9), 'Little camber, turned inwards.'),
       save(18, '09:25', 'designer', fourDigit(1, 40, 10), 'One per cent thicker: the tip broke in handling.'),
       release(17, '13:50', 'designer', 2, ''),
+      takeFile(16, '10:15', 'builder', 2, 'svg', { chordMm: 140 }),
+      takeFile(15, '09:20', 'technician', 2, 'dat', { chordMm: 140 }),
     ],
   },
 ];
@@ -74,6 +83,7 @@ const tails: readonly History[] = [
         'Edge of 0.9 mm at 180 mm chord, stiff enough for the hinge.',
       ),
       release(6, '12:05', 'owner', 4, 'Fin flown on the test rig.'),
+      takeFile(5, '08:25', 'technician', 4, 'dxf', { chordMm: 180, arcs: true }),
     ],
   },
   {
@@ -83,6 +93,7 @@ const tails: readonly History[] = [
       save(30, '11:45', 'designer', forms.thinTailFirst, 'As thin as the 8 mm pivot tube allows.'),
       save(25, '13:15', 'designer', forms.thinTail, 'A little more foam over the tube.'),
       release(23, '09:05', 'designer', 2, 'Pivot tube fits with 1 mm of foam around it.'),
+      takeFile(22, '10:40', 'technician', 2, 'dxf', { chordMm: 150 }),
     ],
   },
   {
@@ -91,6 +102,7 @@ const tails: readonly History[] = [
     steps: [
       save(28, '15:40', 'designer', fourDigit(0, 0, 6), 'Thin, to match the old fin.'),
       release(26, '09:15', 'owner', 1, ''),
+      takeFile(25, '08:45', 'technician', 1, 'dxf', { chordMm: 90 }),
       withdraw(
         12,
         '17:00',
@@ -116,6 +128,8 @@ const wings: readonly History[] = [
         'Open edge as published: room for the glass cloth.',
       ),
       release(15, '09:45', 'designer', 2, 'Skin of 0.2 mm closes the edge.'),
+      takeFile(14, '08:15', 'technician', 2, 'dxf', { chordMm: 200 }),
+      takeFile(6, '09:30', 'builder', 2, 'dat', { chordMm: 200 }),
     ],
   },
   {
@@ -132,6 +146,7 @@ const wings: readonly History[] = [
         'Fuller over the nose for a softer stall, edge of 1.5 mm at 250 mm.',
       ),
       release(13, '16:15', 'owner', 2, 'Students flew it; lands slower than the first.'),
+      takeFile(12, '08:00', 'technician', 2, 'dxf', { chordMm: 250, release: 'r12' }),
     ],
   },
   {
@@ -142,6 +157,7 @@ const wings: readonly History[] = [
       release(31, '10:20', 'designer', 1, 'For the glide model.'),
       save(19, '15:00', 'designer', forms.reflex, 'More reflex: the model needed 3° of up trim.'),
       release(18, '10:40', 'owner', 2, 'Glides hands off.'),
+      takeFile(17, '08:35', 'technician', 2, 'dxf', { chordMm: 300 }),
       save(5, '13:35', 'designer', forms.reflexTrial, 'Trial with the battery 10 mm further forward.'),
     ],
   },
@@ -181,6 +197,7 @@ const wings: readonly History[] = [
         'Free form, 20 %: 6 mm around the tube at 260 mm chord.',
       ),
       release(18, '14:15', 'owner', 2, 'Tube glued in, no marks through the skin.'),
+      takeFile(16, '11:10', 'builder', 2, 'dxf', { chordMm: 260 }),
       save(1, '11:20', 'owner', forms.thickRootBlunter, 'Deeper at the nose for the cable duct.'),
     ],
   },

@@ -1,11 +1,15 @@
+import { createHash } from 'node:crypto';
 import { type Knex } from 'knex';
+import { parseExportOptions } from '#geometry/formats/export.ts';
 import { hashPassword } from '#server/account/passwords.ts';
 import { createPerson, createWorkshop } from '#server/account/store.ts';
 import { keepDraft } from '#server/sections/drafts/store.ts';
+import { cutFileOf } from '#server/exports/cut-file.ts';
+import { recordDownload } from '#server/exports/store.ts';
 import { type Author } from '#server/sections/rules.ts';
 import { changeSection, createSection } from '#server/sections/store.ts';
 import { releaseVersion, withdrawVersion } from '#server/sections/versions/status-store.ts';
-import { saveVersion } from '#server/sections/versions/store.ts';
+import { findVersion, saveVersion } from '#server/sections/versions/store.ts';
 import { type History, type Moment, type Step } from './histories.ts';
 import { demoEmail, demoPeople, demoWorkshop } from './people.ts';
 import { demoSections } from './sections.ts';
@@ -79,9 +83,32 @@ async function take(
       return withdrawVersion(db, author, sectionId, step.version, step.reason);
     case 'archive':
       return changeSection(db, author, sectionId, { archived: true });
+    case 'take file':
+      return takeFile(db, sectionId, step, author);
     case 'keep draft':
       return keepDraft(db, author, sectionId, { basedOn: newest, shape: step.shape, chordMm: step.chordMm });
   }
+}
+
+/** The bytes are made as they were at that moment, so that their sum is that of the file then taken. */
+async function takeFile(
+  db: Knex,
+  sectionId: string,
+  { version: number, format, options: asked }: Step & { readonly did: 'take file' },
+  author: Author,
+): Promise<void> {
+  const version = await findVersion(db, author.workshopId, sectionId, number, 'all');
+  const options = parseExportOptions(format, asked);
+  const { fileName, text } = cutFileOf(version, format, options);
+  const checksum = createHash('sha256').update(text, 'utf8').digest('hex');
+  await recordDownload(db, author, {
+    sectionId,
+    versionNumber: number,
+    fileName,
+    format,
+    options,
+    checksum,
+  });
 }
 
 function timeOf({ daysAgo, time }: Moment, now: Date): Date {
