@@ -8,6 +8,8 @@ import { buildPanel } from './panel.ts';
 import { type Plan, planSchema } from './plan.ts';
 import { type Program, type ProgramIdentity, writeProgram } from './program.ts';
 import { type Simulation, simulate } from './simulate.ts';
+import { type RibSet, buildRibs } from './ribs.ts';
+import { type Template, buildTemplates } from './template.ts';
 import { checkBench } from './towers.ts';
 import { type WirePath, buildWirePath } from './wire-path.ts';
 
@@ -18,6 +20,10 @@ export interface CorePlan {
   readonly features: readonly PlacedFeature[];
   readonly fit: BlockFit;
   readonly foam: FoamAmounts;
+  /** Null when the plan asks for no ribs. */
+  readonly ribs: RibSet | null;
+  /** Root and tip; none when the plan asks for none. */
+  readonly templates: readonly Template[];
   /** Null while the panel does not stand between the towers. */
   readonly cut: {
     readonly path: WirePath;
@@ -34,8 +40,8 @@ export interface Planned {
 }
 
 /**
- * Works out a core panel: contours in step, skins and kerf, features, place in the block, wire path, machine program, and that program read
- * back and simulated. Never throws because of a plan's values: what is wrong with them is among the findings.
+ * Works out a panel: contours in step, skins and kerf, features, place in the block, ribs and templates if wanted, wire path, machine program, and
+ * that program read back and simulated. Never throws because of a plan's values: what is wrong with them is among the findings.
  */
 export function planCore(values: unknown, identity: ProgramIdentity): Planned {
   const parsed = planSchema.safeParse(values);
@@ -47,9 +53,26 @@ export function planCore(values: unknown, identity: ProgramIdentity): Planned {
   const { core } = built;
   const placed = placeFeatures(plan, core);
   const fit = fitBlock(plan, core);
-  const findings = [...bench, ...built.findings, ...placed.findings, ...fit.findings];
-  const foam = foamAmounts(plan, core, placed.features);
-  const whole: CorePlan = { plan, core, features: placed.features, fit, foam, cut: null };
+  const ribs = plan.ribs && buildRibs(plan, core, placed.features, plan.ribs);
+  const templates = plan.template && buildTemplates(plan, core, plan.template);
+  const findings = [
+    ...bench,
+    ...built.findings,
+    ...placed.findings,
+    ...fit.findings,
+    ...(ribs?.findings ?? []),
+    ...(templates?.findings ?? []),
+  ];
+  const whole: CorePlan = {
+    plan,
+    core,
+    features: placed.features,
+    fit,
+    foam: foamAmounts(plan, core, placed.features),
+    ribs: ribs?.set ?? null,
+    templates: templates?.templates ?? [],
+    cut: null,
+  };
   if (hasErrors(bench)) return { core: whole, findings };
   const path = buildWirePath(plan, core, placed.features, fit.places);
   const program = writeProgram(plan, path, identity);

@@ -1,5 +1,11 @@
 import fc from 'fast-check';
-import { type Feature, type Plan, planSchema } from '#geometry/cutting/plan.ts';
+import {
+  type Feature,
+  type Plan,
+  type RibsPlan,
+  type TemplatePlan,
+  planSchema,
+} from '#geometry/cutting/plan.ts';
 import { parseDesignation } from '#geometry/shapes/naca4.ts';
 import { type Shape } from '#geometry/shapes/shape.ts';
 
@@ -87,6 +93,25 @@ export const PLAN: Plan = planSchema.parse({
   template: null,
   limits: { minimumWebMm: 1, minimumTrailingEdgeMm: 0.8, speedRatio: 3 },
 } satisfies Plan);
+
+/** A rib set of 3 mm material with all that a rib can carry. */
+export const RIBS: RibsPlan = {
+  stations: { kind: 'count', count: 8 },
+  materialThicknessMm: 3,
+  fitAllowanceMm: 0.1,
+  sheet: { widthMm: 600, heightMm: 300, borderMm: 5, spacingMm: 3 },
+  lighteningHoles: { most: 3, minimumWebMm: 4, smallestDiameterMm: 5 },
+  jigTabs: { stations: [0.15, 0.65], widthMm: 8, heightMm: 6 },
+  numberHeightMm: 3,
+};
+
+export const TEMPLATE: TemplatePlan = {
+  wireDiameterMm: 0.4,
+  ticks: 20,
+  rampFraction: 0.15,
+  pinDiameterMm: 3,
+  pinStations: [0.25, 0.6],
+};
 
 /** The plan with some of its parts replaced, one level deep. */
 export function planWith(changes: { readonly [Key in keyof Plan]?: Partial<Plan[Key]> | Plan[Key] }): Plan {
