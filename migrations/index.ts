@@ -4,6 +4,7 @@ import * as sectionsAndVersions from './0002_sections_and_versions.ts';
 import * as immutableVersions from './0003_immutable_versions.ts';
 import * as downloads from './0004_downloads.ts';
 import * as sessionEpoch from './0005_session_epoch.ts';
+import * as machinesAndMaterials from './0006_machines_and_materials.ts';
 
 /** Every migration under the name it is remembered by; a name that has been released never changes. */
 export const migrations: Readonly<Record<string, Knex.Migration>> = {
@@ -12,4 +13,5 @@ export const migrations: Readonly<Record<string, Knex.Migration>> = {
   '0003_immutable_versions': immutableVersions,
   '0004_downloads': downloads,
   '0005_session_epoch': sessionEpoch,
+  '0006_machines_and_materials': machinesAndMaterials,
 };

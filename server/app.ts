@@ -21,6 +21,7 @@ import { believeProxiesOnlyIf, securityHeaders } from './http/security.ts';
 import { openApiDocument } from './openapi.ts';
 import { Refusal } from './refusal.ts';
 import { sectionHandlers } from './sections/routes.ts';
+import { shopHandlers } from './shop/routes.ts';
 
 /** What the application is made of; nothing else is read from the environment. */
 export interface AppDependencies {
@@ -44,6 +45,7 @@ export function createApp({ config, knex, logger, clientFolder }: AppDependencie
     ...accountHandlers(knex, attempts),
     ...sectionHandlers(knex),
     ...exportHandlers(knex),
+    ...shopHandlers(knex),
   };
   const document = JSON.stringify(openApiDocument(version));
 

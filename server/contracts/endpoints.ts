@@ -18,6 +18,7 @@ import {
   versionSchema,
   withdrawSchema,
 } from './sections.ts';
+import { shopEndpoints } from './shop-endpoints.ts';
 
 /**
  * Every request of the API as data: the server registers its routes from it, the client calls by it, the OpenAPI
@@ -230,5 +231,7 @@ export const endpoints = {
     reply: z.string(),
     file: 'image/svg+xml',
   },
+
+  ...shopEndpoints,
 } as const satisfies Record<string, Endpoint>;
 export type EndpointName = keyof typeof endpoints;

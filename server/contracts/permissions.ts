@@ -17,6 +17,8 @@ export const permissions = {
   'versions.release': ['owner', 'designer'],
   'files.download': ['owner', 'designer', 'builder', 'technician'],
   'downloads.read': ['owner', 'designer', 'builder'],
+  'shop.read': ['owner', 'designer', 'builder', 'technician'],
+  'shop.write': ['owner', 'builder'],
 } as const satisfies Record<string, readonly Role[]>;
 export type Permission = keyof typeof permissions;
 

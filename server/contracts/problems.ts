@@ -10,6 +10,7 @@ export const problems = {
   'not-found': { status: 404, title: 'There is nothing here' },
   'method-not-allowed': { status: 405, title: 'This address does not take that method' },
   'version-conflict': { status: 409, title: 'Another version was saved in between' },
+  'revision-conflict': { status: 409, title: 'Somebody else changed this in between' },
   'key-reused': { status: 409, title: 'This key was used for something else' },
   'status-conflict': { status: 409, title: 'The status of the version does not allow this' },
   archived: { status: 409, title: 'The section is archived' },

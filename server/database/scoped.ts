@@ -1,7 +1,15 @@
 import { type Knex } from 'knex';
 
 /** Tables whose rows belong to a workshop: all but the workshops themselves. */
-export type WorkshopTable = 'people' | 'sections' | 'section_versions' | 'section_drafts' | 'downloads';
+export type WorkshopTable =
+  | 'people'
+  | 'sections'
+  | 'section_versions'
+  | 'section_drafts'
+  | 'downloads'
+  | 'machines'
+  | 'materials'
+  | 'kerfs';
 
 /** A row to be written, without the workshop: that comes from the scope and from nowhere else. */
 type NewRow = Readonly<Record<string, string | number | boolean | Date | null>>;

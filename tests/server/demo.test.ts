@@ -78,6 +78,14 @@ describe('the demo workshop', () => {
     expect(await database.knex('section_drafts')).toHaveLength(1);
   });
 
+  it('has machines and materials with kerfs, none of them measured yet', async () => {
+    const kinds = async (table: string) => new Set<string>(await database.knex(table).pluck('kind'));
+    expect(await kinds('machines')).toEqual(new Set(['wire', 'bow', 'laser']));
+    expect(await kinds('materials')).toEqual(new Set(['foam', 'sheet']));
+    const defaults: number[] = await database.knex('kerfs').pluck('is_default');
+    expect(defaults).toEqual(Array(6).fill(1));
+  });
+
   it('happened before now, each section in the order told', async () => {
     const { versions } = await contents(database);
     const times = versions as { created_at: Date; status_at: Date | null }[];

@@ -2,10 +2,19 @@ import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { type Endpoint, type EndpointName, endpoints } from '#server/contracts/endpoints.ts';
 import { startApi, type TestApi, type TestWorkshop } from './support/api.ts';
 import { type Client } from './support/client.ts';
-import { makeSection, requests } from './support/requests.ts';
+import { makeSamples, makeShop, requests, type Samples } from './support/requests.ts';
 import { naca4 } from './support/shapes.ts';
 
-const tables = ['people', 'sections', 'section_versions', 'section_drafts', 'downloads'];
+const tables = [
+  'people',
+  'sections',
+  'section_versions',
+  'section_drafts',
+  'downloads',
+  'machines',
+  'materials',
+  'kerfs',
+];
 
 describe('two workshops', () => {
   let api: TestApi;
@@ -13,7 +22,7 @@ describe('two workshops', () => {
   let fen: TestWorkshop;
   let stranger: Client;
   let member: Client;
-  let sectionId: string;
+  let samples: Samples;
 
   beforeAll(async () => {
     api = await startApi();
@@ -24,36 +33,37 @@ describe('two workshops', () => {
   });
   afterAll(() => api.close());
   beforeEach(async () => {
-    sectionId = await makeSection(api, marsh);
+    samples = await makeSamples(api, marsh);
   });
 
   /** Everything that belongs to the first workshop. */
   const rowsOfMarsh = () =>
     Promise.all(tables.map((table) => api.knex(table).where({ workshop_id: marsh.id })));
 
-  const withSection = (Object.keys(endpoints) as EndpointName[]).filter((name) => {
+  const naming = (Object.keys(endpoints) as EndpointName[]).filter((name) => {
     const endpoint: Endpoint = endpoints[name];
     return endpoint.params !== undefined;
   });
 
-  it('covers every route that names a section', () => {
-    const named = Object.values(endpoints).filter(({ path }) => path.includes(':sectionId'));
-    expect(withSection).toHaveLength(named.length);
-    expect(named.length).toBeGreaterThanOrEqual(15);
+  it('covers every route that names something', () => {
+    const named = Object.values(endpoints).filter(({ path }) => path.includes('/:'));
+    expect(naming).toHaveLength(named.length);
+    expect(named.length).toBeGreaterThanOrEqual(20);
   });
 
-  it.each(withSection)('%s finds nothing of another workshop and changes nothing there', async (name) => {
+  it.each(naming)('%s finds nothing of another workshop and changes nothing there', async (name) => {
     const before = await rowsOfMarsh();
-    const foreign = await stranger.call(name, requests[name](sectionId));
+    const foreign = await stranger.call(name, requests[name](samples));
     expect(foreign.status).toBe(404);
     expect(foreign.problem.code).toBe('not-found');
     expect(foreign.text).not.toContain('Marsh');
     expect(await rowsOfMarsh()).toEqual(before);
-    const own = await member.call(name, requests[name](sectionId));
+    const own = await member.call(name, requests[name](samples));
     expect(own.status).toBeLessThan(300);
   });
 
   it('answers for another workshop exactly as for a section that does not exist', async () => {
+    const { sectionId } = samples;
     const foreign = await stranger.call('getSection', { params: { sectionId } });
     const absent = await stranger.call('getSection', {
       params: { sectionId: '0190a5b0-1111-7222-8333-444455556666' },
@@ -72,6 +82,21 @@ describe('two workshops', () => {
     expect(cursor).not.toBe('');
     const behind = await stranger.call('listSections', { query: { cursor } });
     expect(behind.reply.items).toEqual([]);
+  });
+
+  it('lists no machine, material or kerf of the other one, and takes no material of it', async () => {
+    for (const name of ['listMachines', 'listMaterials', 'listKerfs'] as const) {
+      expect((await stranger.call(name)).reply.items, name).toEqual([]);
+      expect((await member.call(name)).reply.items, name).not.toEqual([]);
+    }
+    const { machineId } = await makeShop(api, fen);
+    const mixed = await stranger.call('putKerf', {
+      ...requests.putKerf({ ...samples, machineId }),
+    });
+    expect(mixed.status).toBe(404);
+    await api.knex('kerfs').where({ workshop_id: fen.id }).delete();
+    await api.knex('machines').where({ workshop_id: fen.id }).delete();
+    await api.knex('materials').where({ workshop_id: fen.id }).delete();
   });
 
   it('keeps the idempotency keys of workshops apart', async () => {

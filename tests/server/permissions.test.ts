@@ -4,7 +4,7 @@ import { type Endpoint, type EndpointName, endpoints } from '#server/contracts/e
 import { accountRoles, may, permissions, roles } from '#server/contracts/permissions.ts';
 import { startApi, type TestApi, type TestWorkshop } from './support/api.ts';
 import { type Client } from './support/client.ts';
-import { makeSection, requests } from './support/requests.ts';
+import { makeSamples, requests } from './support/requests.ts';
 
 const names = Object.keys(endpoints) as EndpointName[];
 
@@ -28,10 +28,10 @@ describe('the table of permissions', () => {
     const reads = ['account.own', 'released.read', 'sections.read'];
     const all = [...reads, 'sections.write', 'versions.release', 'files.download', 'downloads.read'];
     expect(table).toEqual({
-      owner: all,
-      designer: all,
-      builder: [...reads, 'files.download', 'downloads.read'],
-      technician: ['account.own', 'released.read', 'files.download'],
+      owner: [...all, 'shop.read', 'shop.write'],
+      designer: [...all, 'shop.read'],
+      builder: [...reads, 'files.download', 'downloads.read', 'shop.read', 'shop.write'],
+      technician: ['account.own', 'released.read', 'files.download', 'shop.read'],
       guest: [],
     });
   });
@@ -59,8 +59,8 @@ describe('every endpoint for every role', () => {
   );
   it.each(cases)('%s as %s', async (name, role) => {
     const { permission }: Endpoint = endpoints[name];
-    const sectionId = await makeSection(api, workshop);
-    const answer = await clients.get(role)!.call(name, requests[name](sectionId));
+    const samples = await makeSamples(api, workshop);
+    const answer = await clients.get(role)!.call(name, requests[name](samples));
     const isAllowed = permission === 'public' || (role !== 'nobody' && may(role, permission));
     const refused = role === 'nobody' ? 401 : 403;
     expect(answer.status).toBe(isAllowed ? successOf(name) : refused);

@@ -10,9 +10,11 @@ import { type Author } from '#server/sections/rules.ts';
 import { changeSection, createSection } from '#server/sections/store.ts';
 import { releaseVersion, withdrawVersion } from '#server/sections/versions/status-store.ts';
 import { findVersion, saveVersion } from '#server/sections/versions/store.ts';
+import { fillShop } from '#server/shop/defaults.ts';
 import { type History, type Moment, type Step } from './histories.ts';
 import { demoEmail, demoPeople, demoWorkshop } from './people.ts';
 import { demoSections } from './sections.ts';
+import { demoShop } from './shop.ts';
 
 const DAY_MS = 86_400_000;
 /** The workshop began a little before its first section. */
@@ -24,7 +26,8 @@ export async function isEmpty(knex: Knex): Promise<boolean> {
 }
 
 /**
- * Fills in the demo workshop: four people with one password, and sections with some weeks of history before `now`.
+ * Fills in the demo workshop: four people with one password, machines and materials, and sections with some weeks of
+ * history before `now`.
  * All or nothing. The same `now` gives the same workshop but for its ids and the salt of the passwords.
  * @throws ER_DUP_ENTRY when the accounts are there already
  */
@@ -38,6 +41,8 @@ export async function seedDemo(knex: Knex, password: string, now: Date = new Dat
       const person = { name, role, email: demoEmail(role), passwordHash, at: opened };
       ids.set(role, await createPerson(transaction, workshopId, person));
     }
+    const builder = { workshopId, personId: ids.get('builder') ?? '', at: opened };
+    await fillShop(transaction, builder, demoShop);
     const author = ({ by, at }: Step): Author => ({
       workshopId,
       personId: ids.get(by) ?? '',

@@ -50,7 +50,10 @@ describe('addPerson', () => {
   it('opens the workshop with its owner, then takes others into it', async () => {
     await expect(addPerson(database.knex, designer, at)).rejects.toThrow(/no workshop “Fellside”/);
     const password = await addPerson(database.knex, owner, at);
+    const kerfs: { is_default: number }[] = await database.knex('kerfs').select('is_default');
+    expect(kerfs).toEqual(Array(8).fill({ is_default: 1 }));
     await addPerson(database.knex, designer, at);
+    expect(await database.knex('kerfs')).toHaveLength(8);
     const [ada, bo] = [
       await personByEmail(database.knex, owner.email),
       await personByEmail(database.knex, designer.email),

@@ -4,6 +4,9 @@ import { keepDraft } from '#server/sections/drafts/store.ts';
 import { createSection } from '#server/sections/store.ts';
 import { releaseVersion } from '#server/sections/versions/status-store.ts';
 import { saveVersion } from '#server/sections/versions/store.ts';
+import { balsa, extrudedFoam, handBow, wireBench } from '#server/shop/defaults.ts';
+import { putKerf } from '#server/shop/kerfs/store.ts';
+import { createItem, machines, materials } from '#server/shop/store.ts';
 import { type TestApi, type TestWorkshop } from './api.ts';
 import { type Input } from './client.ts';
 import { cst, naca4 } from './shapes.ts';
@@ -24,12 +27,35 @@ export async function makeSection(
   return id;
 }
 
-const of = (sectionId: string, number?: number) => ({
+/** The things that requests name. */
+export interface Samples {
+  readonly sectionId: string;
+  readonly machineId: string;
+  readonly materialId: string;
+}
+
+/** A four-axis machine and a foam with a kerf that nobody measured, each of a name that only it has. */
+export async function makeShop(api: TestApi, workshop: TestWorkshop): Promise<Omit<Samples, 'sectionId'>> {
+  const author = workshop.author('builder', new Date('2026-02-01T09:00:00.000Z'));
+  const name = `Marsh ${uuid()}`;
+  const machine = await createItem(api.knex, author, machines, { name, settings: wireBench });
+  const material = await createItem(api.knex, author, materials, { name, settings: extrudedFoam });
+  const place = { machineId: machine.id, materialId: material.id };
+  const kerf = { kerfMm: 0.8, speedMmMin: 200, measuredOn: null, revision: null };
+  await putKerf(api.knex, author, place, kerf);
+  return place;
+}
+
+export async function makeSamples(api: TestApi, workshop: TestWorkshop): Promise<Samples> {
+  return { sectionId: await makeSection(api, workshop), ...(await makeShop(api, workshop)) };
+}
+
+const of = ({ sectionId }: Samples, number?: number) => ({
   params: number === undefined ? { sectionId } : { sectionId, number },
 });
 
-/** A request that is right in itself for every endpoint, on a section as {@link makeSection} makes it. */
-export const requests: Readonly<Record<EndpointName, (sectionId: string) => Input>> = {
+/** A request that is right in itself for every endpoint, on what {@link makeSamples} makes. */
+export const requests: Readonly<Record<EndpointName, (samples: Samples) => Input>> = {
   health: () => ({}),
   me: () => ({}),
   changePreferences: () => ({ body: { units: 'inch' } }),
@@ -38,19 +64,32 @@ export const requests: Readonly<Record<EndpointName, (sectionId: string) => Inpu
   createSection: () => ({
     body: { name: 'Fen 0012', shape: naca4({ maxCamber: 0, maxCamberPosition: 0 }), key: uuid() },
   }),
-  getSection: (id) => of(id),
-  changeSection: (id) => ({ ...of(id), body: { name: 'Renamed' } }),
-  archiveSection: (id) => of(id),
-  getDraft: (id) => of(id),
-  keepDraft: (id) => ({ ...of(id), body: { basedOn: 2, shape: naca4(), chordMm: 180 } }),
-  dropDraft: (id) => of(id),
-  listVersions: (id) => of(id),
-  saveVersion: (id) => ({ ...of(id), body: { basedOn: 2, shape: cst(), note: 'free-form', key: uuid() } }),
-  getVersion: (id) => of(id, 1),
-  releaseVersion: (id) => ({ ...of(id, 2), body: { reason: 'flown' } }),
-  withdrawVersion: (id) => ({ ...of(id, 1), body: { reason: 'tip too thin' } }),
-  listDownloads: (id) => of(id, 1),
-  datFile: (id) => ({ ...of(id, 1), query: { points: 40 } }),
-  dxfFile: (id) => ({ ...of(id, 1), query: { chordMm: 220 } }),
-  svgFile: (id) => ({ ...of(id, 1), query: { chordMm: 220 } }),
+  getSection: (one) => of(one),
+  changeSection: (one) => ({ ...of(one), body: { name: 'Renamed' } }),
+  archiveSection: (one) => of(one),
+  getDraft: (one) => of(one),
+  keepDraft: (one) => ({ ...of(one), body: { basedOn: 2, shape: naca4(), chordMm: 180 } }),
+  dropDraft: (one) => of(one),
+  listVersions: (one) => of(one),
+  saveVersion: (one) => ({ ...of(one), body: { basedOn: 2, shape: cst(), note: 'free-form', key: uuid() } }),
+  getVersion: (one) => of(one, 1),
+  releaseVersion: (one) => ({ ...of(one, 2), body: { reason: 'flown' } }),
+  withdrawVersion: (one) => ({ ...of(one, 1), body: { reason: 'tip too thin' } }),
+  listDownloads: (one) => of(one, 1),
+  datFile: (one) => ({ ...of(one, 1), query: { points: 40 } }),
+  dxfFile: (one) => ({ ...of(one, 1), query: { chordMm: 220 } }),
+  svgFile: (one) => ({ ...of(one, 1), query: { chordMm: 220 } }),
+  listMachines: () => ({}),
+  createMachine: () => ({ body: { name: uuid(), settings: handBow } }),
+  getMachine: ({ machineId }) => ({ params: { machineId } }),
+  changeMachine: ({ machineId }) => ({ params: { machineId }, body: { revision: 1, archived: true } }),
+  listMaterials: () => ({}),
+  createMaterial: () => ({ body: { name: uuid(), settings: balsa } }),
+  getMaterial: ({ materialId }) => ({ params: { materialId } }),
+  changeMaterial: ({ materialId }) => ({ params: { materialId }, body: { revision: 1, name: uuid() } }),
+  listKerfs: () => ({}),
+  putKerf: ({ machineId, materialId }) => ({
+    params: { machineId, materialId },
+    body: { kerfMm: 0.85, speedMmMin: 200, measuredOn: '2026-02-01', revision: 1 },
+  }),
 };

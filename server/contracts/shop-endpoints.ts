@@ -1,0 +1,102 @@
+import { z } from 'zod';
+import { idSchema } from './common.ts';
+import { type Endpoint } from './endpoints.ts';
+import {
+  kerfInputSchema,
+  kerfPageSchema,
+  kerfSchema,
+  machineChangeSchema,
+  machineCreateSchema,
+  machinePageSchema,
+  machineSchema,
+  materialChangeSchema,
+  materialCreateSchema,
+  materialPageSchema,
+  materialSchema,
+} from './shop.ts';
+
+/** The requests about machines, materials and kerfs. Each list is one page: a workshop keeps few of them. */
+export const shopEndpoints = {
+  listMachines: {
+    method: 'GET',
+    path: '/api/machines',
+    summary: 'All machines of the workshop, by name, the archived last',
+    permission: 'shop.read',
+    reply: machinePageSchema,
+  },
+  createMachine: {
+    method: 'POST',
+    path: '/api/machines',
+    summary: 'New machine',
+    permission: 'shop.write',
+    body: machineCreateSchema,
+    reply: machineSchema,
+    status: 201,
+  },
+  getMachine: {
+    method: 'GET',
+    path: '/api/machines/:machineId',
+    summary: 'One machine',
+    permission: 'shop.read',
+    params: z.object({ machineId: idSchema }),
+    reply: machineSchema,
+  },
+  changeMachine: {
+    method: 'PATCH',
+    path: '/api/machines/:machineId',
+    summary: 'Name, settings, archive or take back; 409 when another changed it in between',
+    permission: 'shop.write',
+    params: z.object({ machineId: idSchema }),
+    body: machineChangeSchema,
+    reply: machineSchema,
+  },
+  listMaterials: {
+    method: 'GET',
+    path: '/api/materials',
+    summary: 'All materials of the workshop, by name, the archived last',
+    permission: 'shop.read',
+    reply: materialPageSchema,
+  },
+  createMaterial: {
+    method: 'POST',
+    path: '/api/materials',
+    summary: 'New material',
+    permission: 'shop.write',
+    body: materialCreateSchema,
+    reply: materialSchema,
+    status: 201,
+  },
+  getMaterial: {
+    method: 'GET',
+    path: '/api/materials/:materialId',
+    summary: 'One material',
+    permission: 'shop.read',
+    params: z.object({ materialId: idSchema }),
+    reply: materialSchema,
+  },
+  changeMaterial: {
+    method: 'PATCH',
+    path: '/api/materials/:materialId',
+    summary: 'Name, settings, archive or take back; 409 when another changed it in between',
+    permission: 'shop.write',
+    params: z.object({ materialId: idSchema }),
+    body: materialChangeSchema,
+    reply: materialSchema,
+  },
+  listKerfs: {
+    method: 'GET',
+    path: '/api/kerfs',
+    summary: 'Every kerf, by machine and material',
+    permission: 'shop.read',
+    reply: kerfPageSchema,
+  },
+  putKerf: {
+    method: 'PUT',
+    path: '/api/machines/:machineId/kerfs/:materialId',
+    summary: 'Set the kerf of a machine in a material; 409 when another set it in between',
+    permission: 'shop.write',
+    params: z.object({ machineId: idSchema, materialId: idSchema }),
+    body: kerfInputSchema,
+    reply: kerfSchema,
+  },
+} as const satisfies Record<string, Endpoint>;
