@@ -3,6 +3,7 @@ import { elevate, halve } from './bernstein.ts';
 import { type CstShape } from './cst-schema.ts';
 import { type Naca4Shape, naca4Outline } from './naca4.ts';
 import { parameterOf } from './outline.ts';
+import { crossesItself } from './self-crossing.ts';
 
 /** Halvings after which a piece is given up as touching: 2⁻³² of the chord. */
 const DEEPEST = 32;
@@ -94,7 +95,7 @@ export function naca4Fault(shape: Naca4Shape): Naca4Fault | null {
   if (lower.derivatives(peak - BESIDE).dx < 0 || lower.derivatives(peak + BESIDE).dx < 0) return 'folds';
   const largestCurvature = Math.max((2 * m) / (p * p), (2 * m) / ((1 - p) * (1 - p)));
   const mayCross = 0.51 * shape.maxThickness * largestCurvature >= 1;
-  return mayCross && polygonCrossesItself(outlinePolygon(shape)) ? 'crosses' : null;
+  return mayCross && crossesItself(outlinePolygon(shape)) ? 'crosses' : null;
 }
 
 /** How far beside the camber position, in t, the jump of the curvature is looked at from either side. */
@@ -107,25 +108,4 @@ function outlinePolygon(shape: Naca4Shape): Point[] {
     ...[...parameters].reverse().map((t) => upper.at(t)),
     ...parameters.slice(1).map((t) => lower.at(t)),
   ];
-}
-
-/** True when two segments of an open polygon that are not neighbours properly cross. Closing ends that meet do not count. */
-function polygonCrossesItself(points: readonly Point[]): boolean {
-  for (let i = 0; i + 1 < points.length; i++) {
-    const [a, b] = [points[i], points[i + 1]];
-    for (let j = i + 2; j + 1 < points.length; j++) {
-      const [c, d] = [points[j], points[j + 1]];
-      if (a && b && c && d && segmentsCross(a, b, c, d)) return true;
-    }
-  }
-  return false;
-}
-
-function segmentsCross(a: Point, b: Point, c: Point, d: Point): boolean {
-  if (Math.max(a.x, b.x) < Math.min(c.x, d.x) || Math.max(c.x, d.x) < Math.min(a.x, b.x)) return false;
-  return turn(a, b, c) * turn(a, b, d) < 0 && turn(c, d, a) * turn(c, d, b) < 0;
-}
-
-function turn(a: Point, b: Point, c: Point): number {
-  return (b.x - a.x) * (c.y - a.y) - (b.y - a.y) * (c.x - a.x);
 }
