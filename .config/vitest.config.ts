@@ -13,7 +13,14 @@ export default defineConfig({
     allowOnly: false,
     dangerouslyIgnoreUnhandledErrors: false,
     projects: [
-      { root, test: { name: 'geometry', setupFiles, include: ['tests/{geometry,reference}/**/*.test.ts'] } },
+      {
+        root,
+        test: {
+          name: 'geometry',
+          setupFiles,
+          include: ['tests/{geometry,reference,structure}/**/*.test.ts'],
+        },
+      },
       {
         root,
         plugins: [react()],

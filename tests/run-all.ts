@@ -10,7 +10,7 @@ import { startThrowaway } from './throwaway.ts';
 
 /** The projects of the Vitest configuration and the folders of tests/ that are theirs. */
 const projects = {
-  geometry: ['geometry', 'reference'],
+  geometry: ['geometry', 'reference', 'structure'],
   client: ['client'],
   server: ['server'],
   browser: ['browser'],
