@@ -4,6 +4,9 @@ import { type Polyline, at } from './arrays.ts';
 export interface Crossing {
   readonly first: number;
   readonly second: number;
+  /** How far along each of both segments it lies, 0 … 1. */
+  readonly firstShare: number;
+  readonly secondShare: number;
   readonly x: number;
   readonly y: number;
 }
@@ -70,8 +73,10 @@ function crossingOf(x: Float64Array, y: Float64Array, first: number, second: num
   const [sc, sd] = [side(ax, ay, bx, by, cx, cy), side(ax, ay, bx, by, dx, dy)];
   const [sa, sb] = [side(cx, cy, dx, dy, ax, ay), side(cx, cy, dx, dy, bx, by)];
   if (sc >= 0 === sd >= 0 || sa >= 0 === sb >= 0) return null;
-  const share = sa / (sa - sb);
-  return { first, second, x: ax + share * (bx - ax), y: ay + share * (by - ay) };
+  const firstShare = sa / (sa - sb);
+  const secondShare = sc / (sc - sd);
+  const [px, py] = [ax + firstShare * (bx - ax), ay + firstShare * (by - ay)];
+  return { first, second, firstShare, secondShare, x: px, y: py };
 }
 
 function same(x: Float64Array, y: Float64Array, i: number, k: number): boolean {

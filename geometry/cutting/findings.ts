@@ -50,7 +50,7 @@ export function findingsOf(refusal: z.core.$ZodError): Finding[] {
     if (issue.code !== 'unrecognized_keys')
       return [error('bad-value', path.join('.'), sentence(issue.message))];
     return issue.keys.map((key) =>
-      error('bad-value', [...path, key].join('.'), `${key} is not a field of this plan.`),
+      error('bad-value', [...path, key].join('.'), `There is no field ${key} in a plan.`),
     );
   });
 }

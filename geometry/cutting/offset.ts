@@ -1,4 +1,4 @@
-import { type Polyline, at } from './arrays.ts';
+import { type Polyline, areaOf, at, polylineOf } from './arrays.ts';
 import { type Crossing, crossingsOf } from './crossings.ts';
 import { type Face } from './panel.ts';
 
@@ -21,9 +21,7 @@ export interface Tail {
   readonly lower: number;
 }
 
-/** Loops taken out one after another; more than this and the contour is given up. */
-const MOST_LOOPS = 60;
-/** Share of the offset contour that may run against the contour before it counts as turned inside out. */
+/** Share of a loop that may run against the contour before it counts as turned inside out. */
 const TURNED = 0.01;
 
 /**
@@ -41,8 +39,8 @@ export function offsetInStep(face: Face, outwards: number, pinned?: Pinned): Off
     x[i] = pinned?.x ?? NaN;
     y[i] = pinned?.y ?? NaN;
   }
-  const cleared = withoutLoops({ x, y });
-  if (!cleared || runsBackward(face, cleared)) return null;
+  const cleared = withoutLoops({ x, y }, face);
+  if (!cleared) return null;
   if (!pinned) return { ...cleared, distance };
   const { collapsed } = cleared;
   for (const i of pinned.points) collapsed[i] = 1;
@@ -62,71 +60,97 @@ interface Cleared extends Polyline {
   readonly tail: Tail | null;
 }
 
-/** A closed polyline without its loops, in the same number of points; null when it cannot be cleared. */
-export function withoutLoops(line: Polyline): Cleared | null {
-  const x = line.x.slice();
-  const y = line.y.slice();
-  const collapsed = new Uint8Array(x.length);
-  let tail: Cleared['tail'] = null;
-  for (let round = 0; round <= MOST_LOOPS; round++) {
-    const loop = largestLoop({ x, y }, crossingsOf({ x, y }));
-    if (!loop) return { x, y, collapsed, tail };
-    const { crossing, inner } = loop;
-    for (let i = 0; i < x.length; i++) {
-      const inside = i > crossing.first && i <= crossing.second;
-      if (inside !== inner) continue;
-      x[i] = crossing.x;
-      y[i] = crossing.y;
-      collapsed[i] = 1;
-    }
-    if (!inner) tail = { x: crossing.x, y: crossing.y, upper: crossing.first + 1, lower: crossing.second };
+/**
+ * A closed polyline without its loops, in the same number of points: taken apart at its crossings into simple loops, of which the largest stays that
+ * runs the way of the contour; the others collapse into their crossings.
+ * @param contour what the line was moved from: the direction in which it must run
+ * @returns null when no such loop is left
+ */
+export function withoutLoops(line: Polyline, contour: Polyline): Cleared | null {
+  const crossings = crossingsOf(line);
+  const loops = crossings.length === 0 ? [wholeLine(line)] : loopsOf(line, crossings);
+  let body: Loop | null = null;
+  for (const loop of loops) {
+    if (!body || loop.area > body.area) if (loop.area > 0 && runsForward(line, contour, loop)) body = loop;
   }
-  return null;
+  return body && collapsedTo(line, body);
+}
+
+/** A place on the line: a point of it (`crossing` −1) or a crossing, at a parameter that counts points and shares of segments. */
+interface Stop {
+  readonly parameter: number;
+  readonly crossing: number;
+  readonly x: number;
+  readonly y: number;
 }
 
 interface Loop {
-  readonly crossing: Crossing;
-  /** True when the loop is the part between the two segments, false when it is the rest. */
-  readonly inner: boolean;
-  readonly points: number;
+  readonly stops: readonly Stop[];
+  /** Signed, mm². */
+  readonly area: number;
 }
 
-/** Of the parts that each crossing cuts off, the longest. The part with the smaller signed area is the loop: loops of an offset turn backward. */
-function largestLoop({ x, y }: Polyline, crossings: readonly Crossing[]): Loop | null {
-  if (crossings.length === 0) return null;
-  const count = x.length;
-  const sums = new Float64Array(count + 1);
-  for (let i = 0; i < count; i++) {
-    const k = (i + 1) % count;
-    sums[i + 1] = at(sums, i) + at(x, i) * at(y, k) - at(x, k) * at(y, i);
-  }
-  let largest: Loop | null = null;
-  for (const crossing of crossings) {
-    const { first, second, x: cx, y: cy } = crossing;
-    const inside =
-      cx * at(y, first + 1) -
-      at(x, first + 1) * cy +
-      at(sums, second) -
-      at(sums, first + 1) +
-      at(x, second) * cy -
-      cx * at(y, second);
-    const inner = inside < at(sums, count) - inside;
-    const points = inner ? second - first : count - second + first;
-    if (!largest || points > largest.points) largest = { crossing, inner, points };
-  }
-  return largest;
+function wholeLine(line: Polyline): Loop {
+  const stops = Array.from(line.x, (x, i) => ({ parameter: i, crossing: -1, x, y: at(line.y, i) }));
+  return { stops, area: areaOf(line) };
 }
 
-/** True when the moved contour runs against the one it came from: the offset was deeper than the section. */
-function runsBackward(face: Polyline, moved: Cleared): boolean {
-  let forward = 0;
-  let backward = 0;
-  for (let i = 0; i + 1 < face.x.length; i++) {
-    const dx = at(moved.x, i + 1) - at(moved.x, i);
-    const dy = at(moved.y, i + 1) - at(moved.y, i);
-    const along = dx * (at(face.x, i + 1) - at(face.x, i)) + dy * (at(face.y, i + 1) - at(face.y, i));
+/** Walks the line once; whenever it comes to a crossing again, what lies between is a loop. */
+function loopsOf(line: Polyline, crossings: readonly Crossing[]): Loop[] {
+  const passes = crossings.flatMap(({ first, second, firstShare, secondShare, x, y }, crossing) => [
+    { parameter: first + firstShare, crossing, x, y },
+    { parameter: second + secondShare, crossing, x, y },
+  ]);
+  const stops = [...wholeLine(line).stops, ...passes].sort((a, b) => a.parameter - b.parameter);
+  const loops: Loop[] = [];
+  const open: Stop[] = [];
+  for (const stop of stops) {
+    const before = stop.crossing < 0 ? -1 : open.findLastIndex(({ crossing }) => crossing === stop.crossing);
+    if (before >= 0) loops.push(loopOf([stop, ...open.splice(before).slice(1)]));
+    open.push(stop);
+  }
+  return [...loops, loopOf(open)];
+}
+
+function loopOf(stops: readonly Stop[]): Loop {
+  return { stops, area: areaOf(polylineOf(stops)) };
+}
+
+/** True when the loop runs along the contour: an offset deeper than the section turns it round. */
+function runsForward(line: Polyline, contour: Polyline, { stops }: Loop): boolean {
+  let [forward, backward] = [0, 0];
+  stops.forEach((stop, k) => {
+    const next = stops[(k + 1) % stops.length];
+    if (!next || stop.crossing >= 0 || next.crossing >= 0 || next.parameter !== stop.parameter + 1) return;
+    const [i, j] = [stop.parameter, next.parameter];
+    const [dx, dy] = [at(line.x, j) - at(line.x, i), at(line.y, j) - at(line.y, i)];
+    const along = dx * (at(contour.x, j) - at(contour.x, i)) + dy * (at(contour.y, j) - at(contour.y, i));
     if (along >= 0) forward += Math.hypot(dx, dy);
-    else if (at(moved.collapsed, i) === 0 || at(moved.collapsed, i + 1) === 0) backward += Math.hypot(dx, dy);
+    else backward += Math.hypot(dx, dy);
+  });
+  return forward > 0 && backward <= TURNED * (forward + backward);
+}
+
+/** The line with the points outside the body moved to the crossing at which the body leaves them out. */
+function collapsedTo(line: Polyline, { stops }: Loop): Cleared {
+  const count = line.x.length;
+  const [x, y] = [line.x.slice(), line.y.slice()];
+  const collapsed = new Uint8Array(count);
+  const start = stops.findIndex(({ crossing }) => crossing < 0);
+  const ordered = [...stops.slice(start), ...stops.slice(0, start)];
+  let tail: Tail | null = null;
+  let [last, from] = [at([ordered[0]?.parameter ?? 0], 0), null as Stop | null];
+  for (const stop of [...ordered.slice(1), ...ordered.slice(0, 1)]) {
+    if (stop.crossing >= 0) {
+      // Between two crossings without a point of the body, the points go to the first of them.
+      from ??= stop;
+      continue;
+    }
+    for (let i = (last + 1) % count; from && i !== stop.parameter; i = (i + 1) % count) {
+      [x[i], y[i], collapsed[i]] = [from.x, from.y, 1];
+    }
+    if (from && last >= stop.parameter) tail = { x: from.x, y: from.y, upper: stop.parameter, lower: last };
+    [last, from] = [stop.parameter, null];
   }
-  return backward > TURNED * (forward + backward) || forward === 0;
+  return { x, y, collapsed, tail };
 }

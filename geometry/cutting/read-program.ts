@@ -58,7 +58,7 @@ export function readProgram(text: string, machine: Machine): ReadProgram {
     const words = wordsOf(source);
     if (words === null) return fault('unreadable-line', 'not readable as RS-274 words.');
     const problem = applyModes(words, modal);
-    if (problem) fault('unsupported-code', problem);
+    if (problem) return fault('unsupported-code', problem);
     if (words.some(({ letter, value }) => letter === 'G' && value === 4)) {
       const wait = words.find(({ letter }) => letter === 'P')?.value ?? 0;
       totalSeconds += machine.controller.dwellUnit === 'seconds' ? wait : wait / 1000;

@@ -11,7 +11,7 @@ test('a bow tie crosses itself once, in its middle', () => {
     { x: 2, y: 0 },
     { x: 0, y: 2 },
   ]);
-  expect(crossingsOf(line)).toEqual([{ first: 0, second: 2, x: 1, y: 1 }]);
+  expect(crossingsOf(line)).toEqual([{ first: 0, second: 2, firstShare: 0.5, secondShare: 0.5, x: 1, y: 1 }]);
 });
 
 test('a square, a point, a line there and back, and a common corner do not', () => {

@@ -161,7 +161,7 @@ test('a loop inside and a tail outside are collapsed into their crossings', () =
     { x: 0, y: -5 },
     { x: 10, y: 2 },
   ]);
-  const cleared = withoutLoops(hook)!;
+  const cleared = withoutLoops(hook, hook)!;
   expect(cleared.x).toHaveLength(9);
   expect(crossingsByHand(cleared)).toBe(0);
   expect(cleared.tail).not.toBeNull();

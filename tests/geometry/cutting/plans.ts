@@ -16,7 +16,7 @@ export function section(digits: string, trailingEdge: 'open' | 'closed' = 'close
   return { kind: 'naca4', ...values, trailingEdge };
 }
 
-export const TUBE: Feature = {
+export const TUBE: Extract<Feature, { kind: 'tube' }> = {
   kind: 'tube',
   name: 'Main tube',
   entry: 'lower',
@@ -27,7 +27,7 @@ export const TUBE: Feature = {
   tipHeightMm: 0,
 };
 
-export const SLOT: Feature = {
+export const SLOT: Extract<Feature, { kind: 'slot' }> = {
   kind: 'slot',
   name: 'Cap',
   surface: 'upper',

@@ -1,0 +1,111 @@
+import { expect, test } from 'vitest';
+import { expectedCores } from '#geometry/cutting/expected-core.ts';
+import { type Plan } from '#geometry/cutting/plan.ts';
+import { planCore } from '#geometry/cutting/planner.ts';
+import { readProgram } from '#geometry/cutting/read-program.ts';
+import { simulate } from '#geometry/cutting/simulate.ts';
+import { PLAN, planWith } from './plans.ts';
+
+const IDENTITY = { sheetName: 'Reed wing', versionNumber: 1, checksum: 'abc', part: 'core' };
+const { core: WHOLE } = planCore(PLAN, IDENTITY);
+const TEXT = WHOLE!.cut!.program.text;
+const EXPECTED = expectedCores(PLAN, WHOLE!.core, WHOLE!.features, WHOLE!.fit.places);
+const run = (text: string, plan: Plan = PLAN) => simulate(text, plan, EXPECTED);
+const edited = (find: RegExp, change: (line: string) => string) => {
+  const lines = TEXT.split('\n');
+  const index = lines.findIndex((line) => find.test(line));
+  lines[index] = change(lines[index]!);
+  return { text: lines.join('\n'), line: index + 1 };
+};
+
+test('the written program cuts the plan within 0.02 mm in seven planes', () => {
+  const { deviations, findings, totalSeconds } = run(TEXT);
+  expect(findings).toEqual([]);
+  expect(deviations.map(({ share }) => Number(share.toFixed(4)))).toEqual([
+    0, 0.1667, 0.3333, 0.5, 0.6667, 0.8333, 1,
+  ]);
+  for (const { deviationMm } of deviations) {
+    expect(deviationMm).toBeLessThanOrEqual(0.02);
+    // It is measured, not assumed: the polygon's own error shows.
+    expect(deviationMm).toBeGreaterThan(1e-5);
+  }
+  expect(totalSeconds).toBeCloseTo(WHOLE!.cut!.program.totalSeconds, 2);
+});
+
+test('a point moved by 0.1 mm is found, with its line', () => {
+  const path = WHOLE!.cut!;
+  const node = path.path.nodes.findIndex(
+    ({ station }) => station !== null && station > 0.55 && station < 0.7,
+  );
+  const number = path.program.lineOfNode[node]!;
+  const lines = TEXT.split('\n');
+  lines[number - 1] = lines[number - 1]!.replace(
+    /Y(\S+)/,
+    (_, y: string) => `Y${(Number(y) - 0.1).toFixed(4)}`,
+  );
+  const differs = run(lines.join('\n')).findings.filter(({ code }) => code === 'cut-differs');
+  expect(differs.length).toBeGreaterThan(0);
+  for (const { at } of differs) expect(Math.abs(at!.line! - number)).toBeLessThanOrEqual(1);
+});
+
+test('a kerf that the plan does not have, and a wire that never comes, differ', () => {
+  const wider = planWith({ kerfMm: { root: 1, tip: 1 } });
+  const built = planCore(wider, IDENTITY).core!;
+  const expected = expectedCores(wider, built.core, built.features, built.fit.places);
+  expect(simulate(TEXT, wider, expected).largestDeviationMm).toBeGreaterThan(0.05);
+  expect(run('G21 G90\nG93\nG1 X1 Y1 U1 V1 F10\n').largestDeviationMm).toBeGreaterThan(10);
+});
+
+test('travel, feed and block are checked on the text, each breach with its line', () => {
+  const far = edited(/G1 /, (line) => line.replace(/X\S+/, 'X700'));
+  expect(run(far.text).findings).toContainEqual(
+    expect.objectContaining({ code: 'outside-travel', path: 'machine.travelXMm', at: { line: far.line } }),
+  );
+  const fast = edited(/G1 X1[45]\d/, (line) => line.replace(/F\S+/, 'F9999'));
+  const codes = run(fast.text)
+    .findings.filter(({ at }) => at?.line === fast.line)
+    .map(({ code }) => code);
+  expect(codes).toEqual(expect.arrayContaining(['axis-too-fast', 'wire-too-fast']));
+  const low = planWith({ block: { coreYMm: -2 } });
+  const outside = planCore(low, IDENTITY).findings.filter(
+    ({ code, at }) => code === 'outside-block' && at?.line,
+  );
+  expect(outside.length).toBeGreaterThan(0);
+});
+
+test('many breaches of a kind are counted, not listed', () => {
+  const slow = planWith({ material: { maxFeedMmMin: 10, feedMmMin: 240 } });
+  const found = simulate(TEXT, slow, EXPECTED).findings.filter(({ code }) => code === 'wire-too-fast');
+  expect(found).toHaveLength(13);
+  expect(found.at(-1)!.message).toMatch(/^\d+ further lines/);
+});
+
+test.each([
+  ['inches', 'G20 G90\nG1 X1 F10', 'unclear-move', 2],
+  ['increments', 'G21 G91\nG1 X1 F10', 'unclear-move', 2],
+  ['units never stated', 'G1 X1 F10', 'unclear-move', 1],
+  ['arcs', 'G21 G90\nG2 X1 Y1 F10', 'unsupported-code', 2],
+  ['a shifted origin', 'G21 G90\nG92 X0', 'unsupported-code', 2],
+  ['a letter that is no axis', 'G21 G90\nG1 Q1 F10', 'unclear-move', 2],
+  ['no F under G93', 'G21 G90\nG93\nG1 X1', 'unclear-move', 3],
+  ['no feed', 'G21 G90\nG1 X1', 'unclear-move', 2],
+  ['no motion mode', 'G21 G90\nX1', 'unclear-move', 2],
+  ['rubbish', 'G21 G90\nhello?', 'unreadable-line', 2],
+])('a program with %s is a finding with its line', (_, text, code, line) => {
+  const { findings } = readProgram(text, PLAN.machine);
+  expect(findings).toEqual([expect.objectContaining({ severity: 'error', code, at: { line } })]);
+});
+
+test('the reader keeps modes, skips comments and blanks, and adds waits', () => {
+  const text = 'g21 g90 (mm)\n\nG94 ; per minute\nG1 X60 Y0 U60 V0 F60\nX60 Y60 U60 V60\nG4 P2.5\nG0 X0\n';
+  const { moves, totalSeconds, findings } = readProgram(text, PLAN.machine);
+  expect(findings).toEqual([]);
+  expect(moves.map(({ line, leftX, leftY }) => [line, leftX, leftY])).toEqual([
+    [0, 0, 0],
+    [4, 60, 0],
+    [5, 60, 60],
+    [7, 0, 60],
+  ]);
+  // All axes: √2 · 60 mm at 60 mm/min twice, 2.5 s, and 60 mm at 1200 mm/min.
+  expect(totalSeconds).toBeCloseTo(2 * 60 * Math.SQRT2 + 2.5 + 3, 9);
+});
