@@ -19,6 +19,13 @@ export interface Running {
 /** How long requests under way may take to end, ms. */
 const drainMs = 8_000;
 
+/** What the database itself says, without the statement that the driver puts before it. */
+function inShort(error: unknown): string {
+  if (!(error instanceof Error)) return String(error);
+  const said = 'sqlMessage' in error ? String(error.sqlMessage) : error.message;
+  return said.replace(/\.$/, '');
+}
+
 /**
  * Connects and brings the tables up to date.
  * @returns the connections and the names of the migrations that were run
@@ -44,7 +51,7 @@ export async function openDatabase(
   } catch (error) {
     await knex.destroy();
     throw new StartError(
-      `The tables could not be brought up to date: ${error instanceof Error ? error.message : String(error)}`,
+      `The tables could not be brought up to date: ${inShort(error)}.`,
       adviceFor(error) ??
         'The database is as the last migration that succeeded left it; keep a copy before trying again.',
       error,

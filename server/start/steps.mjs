@@ -15,6 +15,14 @@ export class StartError extends Error {
 /** Known causes: what their text looks like, and what helps. The first that fits counts. */
 const causes = [
   [
+    /log_bin_trust_function_creators/i,
+    'Its binary log is on: set log_bin_trust_function_creators=1 on that MariaDB server, and start again.',
+  ],
+  [
+    /command denied to user/i,
+    'The database account lacks a right: GRANT ALL PRIVILEGES on this database gives what is needed, TRIGGER among it.',
+  ],
+  [
     /ENOSPC|no space left|disk full|errcode: 28|error:? 28/i,
     'The disk is full: free at least 1 GB and start again.',
   ],

@@ -10,6 +10,11 @@ it.each([
   ['npm error code EACCES\nnpm error syscall mkdir', 'No permission'],
   ['E: Could not get lock /var/lib/dpkg/lock-frontend', 'Another installation'],
   ['npm error code EUSAGE\n`npm ci` can only install packages when they are in sync', 'disagree'],
+  ["TRIGGER command denied to user 'shop'@'localhost' for table `shop`.`section_versions`", 'TRIGGER'],
+  [
+    'You do not have the SUPER privilege and binary logging is enabled (you *might* want to use the less safe log_bin_trust_function_creators variable)',
+    'log_bin_trust_function_creators=1',
+  ],
   ['connect ECONNREFUSED 127.0.0.1:3306', 'Nothing answers'],
 ])('knows what helps against %j', (text, advice) => {
   expect(adviceFor(text)).toContain(advice);
