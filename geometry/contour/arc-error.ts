@@ -1,4 +1,4 @@
-import { type CurvePoint, type SurfaceCurve } from '../shapes/outline.ts';
+import { type SurfaceCurve } from '../shapes/outline.ts';
 import { safeguardedRoot } from './roots.ts';
 
 /** Steps in which a surface is searched for changes from convex to hollow. */
@@ -148,7 +148,7 @@ export function farthestParameter(surface: SurfaceCurve): number {
   const [start, end] = [surface.at(0), surface.at(1)];
   let [best, largest] = [0.5, -1];
   for (let i = 1; i < STEPS; i++) {
-    const point: Pick<CurvePoint, 'x' | 'y'> = surface.at(i / STEPS);
+    const point = surface.at(i / STEPS);
     const distance = Math.abs(
       (end.x - start.x) * (point.y - start.y) - (end.y - start.y) * (point.x - start.x),
     );

@@ -1,5 +1,6 @@
 import type { Point } from '../point.ts';
 import type { Outline, SurfaceCurve } from '../shapes/outline.ts';
+import type { Extents } from './contour.ts';
 import { arcDistance, arcExtremes, arcHeight, biarc, type Arc } from './biarc.ts';
 import { goldenMaximum } from './roots.ts';
 import { TOLERANCE_FRACTION } from './sampling.ts';
@@ -84,7 +85,7 @@ export function largestArcError(outline: Outline, arcs: ArcContour): number {
 }
 
 /** Smallest and largest coordinates of the arcs, fractions of chord. */
-export function arcExtents(arcs: ArcContour): { minX: number; maxX: number; minY: number; maxY: number } {
+export function arcExtents(arcs: ArcContour): Extents {
   const box = { minX: Infinity, maxX: -Infinity, minY: Infinity, maxY: -Infinity };
   for (const { arc } of arcsOf(arcs)) {
     for (const { x, y } of [arc.a, arc.b, ...arcExtremes(arc)]) {

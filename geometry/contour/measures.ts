@@ -1,3 +1,4 @@
+import { type Point } from '../point.ts';
 import { type CurvePoint, type Outline, type SurfaceCurve } from '../shapes/outline.ts';
 import { type Extents } from './contour.ts';
 import { type Radii, radiiOf } from './curvature.ts';
@@ -37,7 +38,7 @@ function trailingEdgeAngleDeg(outline: Outline): number {
 }
 
 /** Where t = 1 is a pointed end, P'(t) is about (t − 1) P''(1): the tangent leaves along −P''. */
-function endTangent(surface: SurfaceCurve): { readonly x: number; readonly y: number } {
+function endTangent(surface: SurfaceCurve): Point {
   const { dx, dy, ddx, ddy } = surface.derivatives(1);
   return Math.hypot(dx, dy) > 1e-9 ? { x: dx, y: dy } : { x: -ddx, y: -ddy };
 }

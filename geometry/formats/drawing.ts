@@ -1,5 +1,6 @@
-import type { Layer } from './options.ts';
+import type { Extents } from '../contour/contour.ts';
 import type { Point } from '../point.ts';
+import type { Layer } from './options.ts';
 
 /** A line of text in a drawing, its baseline beginning at (x, y). */
 export interface DrawingText {
@@ -36,12 +37,7 @@ export interface Drawing {
   readonly camberLine: Chain;
   readonly texts: readonly DrawingText[];
   /** Smallest and largest coordinates of the outline. */
-  readonly extents: {
-    readonly minX: number;
-    readonly maxX: number;
-    readonly minY: number;
-    readonly maxY: number;
-  };
+  readonly extents: Extents;
 }
 
 /**

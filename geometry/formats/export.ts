@@ -2,7 +2,7 @@ import { type z } from 'zod';
 import { arcContour, arcExtents, largestArcError } from '../contour/arcs.ts';
 import { type Contour, extents, scaleContour } from '../contour/contour.ts';
 import { largestChordalError, sampleCosine, sampleToTolerance } from '../contour/sampling.ts';
-import { type ShapeIssue, ShapeError } from '../shapes/error.ts';
+import { issuesOf, ShapeError } from '../shapes/error.ts';
 import { type Outline } from '../shapes/outline.ts';
 import { type Shape, outlineOf } from '../shapes/shape.ts';
 import { writeDat } from './dat.ts';
@@ -75,13 +75,7 @@ export function parseExportOptions<F extends ExportFormat>(format: F, options: u
   };
   const result = schemas[format].safeParse(options);
   if (result.success) return result.data;
-  throw new ShapeError(
-    result.error.issues.flatMap((issue): ShapeIssue[] =>
-      issue.code === 'unrecognized_keys'
-        ? issue.keys.map((path) => ({ path, message: `${path} is not an option of a ${format} file` }))
-        : [{ path: issue.path.join('.'), message: issue.message }],
-    ),
-  );
+  throw new ShapeError(issuesOf(result.error, (key) => `${key} is not an option of a ${format} file`));
 }
 
 /**

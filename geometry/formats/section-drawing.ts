@@ -1,5 +1,5 @@
 import { type Extents } from '../contour/contour.ts';
-import { type Outline } from '../shapes/outline.ts';
+import { type Outline, stationOf } from '../shapes/outline.ts';
 import { type Chain, type Drawing, type DrawingText } from './drawing.ts';
 import { type FileIdentity, headerLines, titleOf } from './identity.ts';
 import { type Layer } from './options.ts';
@@ -54,22 +54,18 @@ const MOST_PIECES = 4096;
 function camberLine(outline: Outline, chordMm: number, toleranceMm: number): Chain {
   let pieces = 1;
   while (pieces < MOST_PIECES && camberError(outline, pieces) * chordMm > toleranceMm) pieces *= 2;
-  const points = Array.from({ length: pieces + 1 }, (_, i) => outline.meanLine(cosineStation(i / pieces)));
+  const points = Array.from({ length: pieces + 1 }, (_, i) => outline.meanLine(stationOf(i / pieces)));
   return { x: points.map(({ x }) => x * chordMm), y: points.map(({ y }) => y * chordMm) };
-}
-
-function cosineStation(u: number): number {
-  return (1 - Math.cos(Math.PI * u)) / 2;
 }
 
 function camberError(outline: Outline, pieces: number): number {
   let largest = 0;
   for (let i = 0; i < pieces; i += 1) {
-    const a = outline.meanLine(cosineStation(i / pieces));
-    const b = outline.meanLine(cosineStation((i + 1) / pieces));
+    const a = outline.meanLine(stationOf(i / pieces));
+    const b = outline.meanLine(stationOf((i + 1) / pieces));
     const length = Math.hypot(b.x - a.x, b.y - a.y);
     for (let k = 1; k < CHECKS_PER_PIECE; k += 1) {
-      const p = outline.meanLine(cosineStation((i + k / CHECKS_PER_PIECE) / pieces));
+      const p = outline.meanLine(stationOf((i + k / CHECKS_PER_PIECE) / pieces));
       largest = Math.max(largest, Math.abs((b.x - a.x) * (p.y - a.y) - (b.y - a.y) * (p.x - a.x)) / length);
     }
   }

@@ -22,16 +22,19 @@ export function shapeError(path: string, message: string): ShapeError {
   return new ShapeError([{ path, message }]);
 }
 
-/** Turns what zod found into issues; an unknown key is reported under its own name. */
+/**
+ * What zod found, by field in dots; an unknown key stands under its own name.
+ * @param unknown the sentence for an unknown key
+ */
+export function issuesOf(error: z.core.$ZodError, unknown: (key: string) => string): ShapeIssue[] {
+  return error.issues.flatMap((issue): ShapeIssue[] => {
+    const path = issue.path.map(String);
+    if (issue.code !== 'unrecognized_keys') return [{ path: path.join('.'), message: issue.message }];
+    return issue.keys.map((key) => ({ path: [...path, key].join('.'), message: unknown(key) }));
+  });
+}
+
+/** Turns what zod found in a shape into the error that names the fields. */
 export function shapeErrorOf(error: z.core.$ZodError): ShapeError {
-  return new ShapeError(
-    error.issues.flatMap((issue): ShapeIssue[] => {
-      const path = issue.path.map(String);
-      if (issue.code !== 'unrecognized_keys') return [{ path: path.join('.'), message: issue.message }];
-      return issue.keys.map((key) => ({
-        path: [...path, key].join('.'),
-        message: `${key} is not a value of this shape`,
-      }));
-    }),
-  );
+  return new ShapeError(issuesOf(error, (key) => `${key} is not a value of this shape`));
 }
