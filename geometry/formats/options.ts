@@ -12,34 +12,34 @@ function typed(value: unknown): unknown {
   return /^[+-]?(\d+\.?\d*|\.\d+)$/.test(text) ? Number(text) : text;
 }
 
-function numberBetween(field: string, least: number, most: number, unit: string) {
-  const error = `${field} must be a number from ${least} to ${most}${unit}`;
+function numberBetween(label: string, least: number, most: number, unit: string) {
+  const error = `${label} must be a number from ${least} to ${most}${unit}.`;
   return z.number({ error }).min(least, { error }).max(most, { error });
 }
 
-function wholeBetween(field: string, least: number, most: number) {
-  const error = `${field} must be a whole number from ${least} to ${most}`;
+function wholeBetween(label: string, least: number, most: number) {
+  const error = `${label} must be a whole number from ${least} to ${most}.`;
   return z.int({ error }).min(least, { error }).max(most, { error });
 }
 
 function choice<const T extends readonly [string, ...string[]]>(
-  field: string,
+  label: string,
   values: T,
   fallback: T[number],
 ) {
-  const error = `${field} must be one of ${values.join(', ')}`;
+  const error = `${label} must be one of ${values.join(', ')}.`;
   return z.preprocess(
     (value) => (value === '' ? undefined : value),
     z.enum(values, { error }).default(() => fallback),
   );
 }
 
-const chord = numberBetween('chordMm', 10, 5000, ' mm');
-const tolerance = numberBetween('toleranceMm', 0.001, 1, ' mm');
+const chord = numberBetween('The chord', 10, 5000, ' mm');
+const tolerance = numberBetween('The tolerance', 0.001, 1, ' mm');
 const chordMm = z.preprocess(typed, chord);
 const toleranceMm = z.preprocess(typed, tolerance.default(0.01));
 
-const LAYERS_ERROR = `layers must be a comma list of ${LAYERS.join(', ')}`;
+const LAYERS_ERROR = `The layers must be a comma list of ${LAYERS.join(', ')}.`;
 
 /** A comma list of layers, or an array of them; written in the order of {@link LAYERS}, each once. */
 const layers = z.preprocess(
@@ -51,7 +51,7 @@ const layers = z.preprocess(
     .array(z.enum(LAYERS, { error: LAYERS_ERROR }), {
       error: LAYERS_ERROR,
     })
-    .min(1, { error: 'layers must name at least one layer' })
+    .min(1, { error: 'Choose at least one layer.' })
     .default([...LAYERS])
     .transform((chosen): readonly Layer[] => LAYERS.filter((layer) => chosen.includes(layer))),
 );
@@ -67,14 +67,14 @@ const TRUTH: Readonly<Record<string, boolean | undefined>> = {
 const arcs = z.preprocess(
   (value) =>
     typeof value === 'string' ? (value.trim() === '' ? undefined : (TRUTH[value.trim()] ?? value)) : value,
-  z.boolean({ error: 'arcs must be true or false' }).default(false),
+  z.boolean({ error: 'The arcs must be true or false.' }).default(false),
 );
 
 function optionsObject<T extends z.ZodRawShape>(shape: T) {
   return z.strictObject(shape, {
     error: (issue) =>
       issue.code === 'unrecognized_keys'
-        ? `unknown option ${issue.keys.join(', ')}; the options are ${Object.keys(shape).join(', ')}`
+        ? `Unknown option ${issue.keys.join(', ')}; the options are ${Object.keys(shape).join(', ')}.`
         : undefined,
   });
 }
@@ -84,16 +84,16 @@ function optionsObject<T extends z.ZodRawShape>(shape: T) {
  * `toleranceMm` with spacing to a tolerance, which needs `chordMm`. Without `chordMm` the coordinates are fractions of chord.
  */
 export const datOptionsSchema = optionsObject({
-  points: z.preprocess(typed, wholeBetween('points', 10, 1000).default(100)),
+  points: z.preprocess(typed, wholeBetween('The number of points per surface', 10, 1000).default(100)),
   chordMm: z.preprocess(typed, chord.optional()),
-  order: choice('order', ['round', 'surfaces'], 'round'),
-  decimals: z.preprocess(typed, wholeBetween('decimals', 4, 10).default(6)),
-  newline: choice('newline', ['lf', 'crlf'], 'lf'),
-  spacing: choice('spacing', ['cosine', 'tolerance'], 'cosine'),
+  order: choice('The order', ['round', 'surfaces'], 'round'),
+  decimals: z.preprocess(typed, wholeBetween('The number of decimals', 4, 10).default(6)),
+  newline: choice('The line end', ['lf', 'crlf'], 'lf'),
+  spacing: choice('The spacing', ['cosine', 'tolerance'], 'cosine'),
   toleranceMm,
 }).refine((options) => options.spacing === 'cosine' || options.chordMm !== undefined, {
   path: ['chordMm'],
-  error: 'chordMm is needed for spacing to a tolerance in mm',
+  error: 'The chord is needed for spacing to a tolerance in mm.',
 });
 export type DatOptions = z.output<typeof datOptionsSchema>;
 
@@ -101,7 +101,7 @@ export type DatOptions = z.output<typeof datOptionsSchema>;
 export const dxfOptionsSchema = optionsObject({
   chordMm,
   toleranceMm,
-  release: choice('release', ['r12', 'r2000'], 'r2000'),
+  release: choice('The DXF release', ['r12', 'r2000'], 'r2000'),
   layers,
   arcs,
 });

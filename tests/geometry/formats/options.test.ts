@@ -49,22 +49,22 @@ describe('options of a coordinate file', () => {
 
   test('need the chord for a tolerance in mm', () => {
     expect(issuesOf('dat', { spacing: 'tolerance' })).toEqual([
-      { path: 'chordMm', message: 'chordMm is needed for spacing to a tolerance in mm' },
+      { path: 'chordMm', message: 'The chord is needed for spacing to a tolerance in mm.' },
     ]);
     expect(issuesOf('dat', { spacing: 'tolerance', chordMm: 220 })).toEqual([]);
   });
 
   test.each([
-    [{ points: 9 }, 'points', 'points must be a whole number from 10 to 1000'],
-    [{ points: 1001 }, 'points', 'points must be a whole number from 10 to 1000'],
-    [{ points: 20.5 }, 'points', 'points must be a whole number from 10 to 1000'],
-    [{ chordMm: 9.99 }, 'chordMm', 'chordMm must be a number from 10 to 5000 mm'],
-    [{ decimals: 3 }, 'decimals', 'decimals must be a whole number from 4 to 10'],
-    [{ decimals: 11 }, 'decimals', 'decimals must be a whole number from 4 to 10'],
-    [{ order: 'backwards' }, 'order', 'order must be one of round, surfaces'],
-    [{ newline: 'cr' }, 'newline', 'newline must be one of lf, crlf'],
-    [{ spacing: 'even' }, 'spacing', 'spacing must be one of cosine, tolerance'],
-    [{ toleranceMm: 0.0009 }, 'toleranceMm', 'toleranceMm must be a number from 0.001 to 1 mm'],
+    [{ points: 9 }, 'points', 'The number of points per surface must be a whole number from 10 to 1000.'],
+    [{ points: 1001 }, 'points', 'The number of points per surface must be a whole number from 10 to 1000.'],
+    [{ points: 20.5 }, 'points', 'The number of points per surface must be a whole number from 10 to 1000.'],
+    [{ chordMm: 9.99 }, 'chordMm', 'The chord must be a number from 10 to 5000 mm.'],
+    [{ decimals: 3 }, 'decimals', 'The number of decimals must be a whole number from 4 to 10.'],
+    [{ decimals: 11 }, 'decimals', 'The number of decimals must be a whole number from 4 to 10.'],
+    [{ order: 'backwards' }, 'order', 'The order must be one of round, surfaces.'],
+    [{ newline: 'cr' }, 'newline', 'The line end must be one of lf, crlf.'],
+    [{ spacing: 'even' }, 'spacing', 'The spacing must be one of cosine, tolerance.'],
+    [{ toleranceMm: 0.0009 }, 'toleranceMm', 'The tolerance must be a number from 0.001 to 1 mm.'],
     [{ layers: 'TEXT' }, 'layers', 'layers is not an option of a dat file'],
   ])('%j is refused by name', (options, path, message) => {
     expect(issuesOf('dat', options)).toEqual([{ path, message }]);
@@ -107,7 +107,7 @@ describe('options of a DXF drawing', () => {
     'a chord of %j is refused',
     (chordMm) => {
       expect(issuesOf('dxf', { chordMm })).toEqual([
-        { path: 'chordMm', message: 'chordMm must be a number from 10 to 5000 mm' },
+        { path: 'chordMm', message: 'The chord must be a number from 10 to 5000 mm.' },
       ]);
     },
   );
@@ -125,13 +125,13 @@ describe('options of a DXF drawing', () => {
       ['arcs', 'chordMm', 'layers.1', 'release', 'toleranceMm', 'x', 'zoom'].sort(),
     );
     expect(issues.find(({ path }) => path === 'layers.1')?.message).toBe(
-      'layers must be a comma list of OUTLINE, CHORD, CAMBER, TEXT',
+      'The layers must be a comma list of OUTLINE, CHORD, CAMBER, TEXT.',
     );
   });
 
   test('a drawing without a layer is refused', () => {
     expect(issuesOf('svg', { chordMm: 220, layers: [] })).toEqual([
-      { path: 'layers', message: 'layers must name at least one layer' },
+      { path: 'layers', message: 'Choose at least one layer.' },
     ]);
   });
 });
