@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { problemSchema } from './contracts/common.ts';
-import { type Endpoint, type EndpointName, endpoints } from './contracts/endpoints.ts';
+import { type Endpoint } from './contracts/endpoint.ts';
+import { type EndpointName, endpoints } from './contracts/endpoints.ts';
 import { permissions } from './contracts/permissions.ts';
 import { problems, type ProblemCode } from './contracts/problems.ts';
 import { versionConflictSchema } from './contracts/sections.ts';

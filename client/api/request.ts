@@ -1,6 +1,7 @@
 import { type z } from 'zod';
 import { problemSchema } from '#server/contracts/common.ts';
-import { type Endpoint, type EndpointName, endpoints } from '#server/contracts/endpoints.ts';
+import { type Endpoint } from '#server/contracts/endpoint.ts';
+import { type EndpointName, endpoints } from '#server/contracts/endpoints.ts';
 import { OfflineError, ProblemError, ReplyError } from './errors.ts';
 
 export { fieldErrors, OfflineError, ProblemError, ReplyError } from './errors.ts';

@@ -1,8 +1,8 @@
 import { z } from 'zod';
 import { datOptionsSchema, dxfOptionsSchema, svgOptionsSchema } from '#geometry/formats/options.ts';
 import { idSchema, pageQuerySchema } from './common.ts';
+import { type Endpoint } from './endpoint.ts';
 import { healthSchema, meSchema, passwordChangeSchema, preferencesSchema } from './people.ts';
-import { type Permission } from './permissions.ts';
 import {
   downloadPageSchema,
   draftInputSchema,
@@ -20,23 +20,6 @@ import {
 } from './sections.ts';
 import { shopEndpoints } from './shop-endpoints.ts';
 
-/**
- * Every request of the API as data: the server registers its routes from it, the client calls by it, the OpenAPI
- * document and the permission matrix of the tests are made from it. `reply: null` means 204; a `file` reply is bytes.
- */
-export interface Endpoint {
-  readonly method: 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE';
-  readonly path: string;
-  readonly summary: string;
-  readonly permission: Permission | 'public';
-  readonly params?: z.ZodObject;
-  readonly query?: z.ZodType;
-  readonly body?: z.ZodType;
-  readonly reply: z.ZodType | null;
-  readonly status?: 201;
-  readonly file?: string;
-}
-
 const sectionParams = z.object({ sectionId: idSchema });
 const versionParams = z.object({
   sectionId: idSchema,
@@ -45,6 +28,10 @@ const versionParams = z.object({
 const section = '/api/sections/:sectionId';
 const version = '/api/sections/:sectionId/versions/:number';
 
+/**
+ * Every request of the API as data: the server registers its routes from it, the client calls by it, the OpenAPI
+ * document and the permission matrix of the tests are made from it.
+ */
 export const endpoints = {
   health: {
     method: 'GET',

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { idSchema } from './common.ts';
-import { type Endpoint } from './endpoints.ts';
+import { type Endpoint } from './endpoint.ts';
 import {
   kerfInputSchema,
   kerfPageSchema,

@@ -1,6 +1,6 @@
 import { type Request } from 'express';
 import { z } from 'zod';
-import { type Endpoint } from '#server/contracts/endpoints.ts';
+import { type Endpoint } from '#server/contracts/endpoint.ts';
 import { type FieldIssue, Refusal } from '#server/refusal.ts';
 
 /** What zod found, as field paths in dots; an unknown key stands under its own name. */

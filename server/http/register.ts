@@ -1,6 +1,7 @@
 import express, { type RequestHandler, type Response, Router } from 'express';
 import { type Authenticate } from '#server/account/session.ts';
-import { type Endpoint, type EndpointName, endpoints } from '#server/contracts/endpoints.ts';
+import { type Endpoint } from '#server/contracts/endpoint.ts';
+import { type EndpointName, endpoints } from '#server/contracts/endpoints.ts';
 import { may } from '#server/contracts/permissions.ts';
 import { Refusal } from '#server/refusal.ts';
 import { sendFile } from './file.ts';

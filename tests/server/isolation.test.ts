@@ -1,5 +1,6 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
-import { type Endpoint, type EndpointName, endpoints } from '#server/contracts/endpoints.ts';
+import { type Endpoint } from '#server/contracts/endpoint.ts';
+import { type EndpointName, endpoints } from '#server/contracts/endpoints.ts';
 import { startApi, type TestApi, type TestWorkshop } from './support/api.ts';
 import { type Client } from './support/client.ts';
 import { makeSamples, makeShop, requests, type Samples } from './support/requests.ts';

@@ -1,5 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { type Endpoint, endpoints } from '#server/contracts/endpoints.ts';
+import { type Endpoint } from '#server/contracts/endpoint.ts';
+import { endpoints } from '#server/contracts/endpoints.ts';
 import { problems } from '#server/contracts/problems.ts';
 import { startApi, type TestApi } from './support/api.ts';
 

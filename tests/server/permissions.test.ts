@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { type AccountRole } from '#server/account/person.ts';
-import { type Endpoint, type EndpointName, endpoints } from '#server/contracts/endpoints.ts';
+import { type Endpoint } from '#server/contracts/endpoint.ts';
+import { type EndpointName, endpoints } from '#server/contracts/endpoints.ts';
 import { accountRoles, may, permissions, roles } from '#server/contracts/permissions.ts';
 import { startApi, type TestApi, type TestWorkshop } from './support/api.ts';
 import { type Client } from './support/client.ts';

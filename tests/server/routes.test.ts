@@ -2,7 +2,8 @@ import { type Express, type IRouter } from 'express';
 import { pino } from 'pino';
 import { afterAll, beforeAll, expect, it } from 'vitest';
 import { createApp } from '#server/app.ts';
-import { type Endpoint, endpoints } from '#server/contracts/endpoints.ts';
+import { type Endpoint } from '#server/contracts/endpoint.ts';
+import { endpoints } from '#server/contracts/endpoints.ts';
 import { createTestDatabase, type TestDatabase } from '#tests/database.ts';
 
 /** What stands beside the table of endpoints, none of it with data of a workshop. */
