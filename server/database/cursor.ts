@@ -1,3 +1,4 @@
+import { type Knex } from 'knex';
 import { type z } from 'zod';
 import { refuseField } from '#server/refusal.ts';
 
@@ -24,6 +25,24 @@ function jsonOf(cursor: string): unknown {
   } catch {
     return undefined;
   }
+}
+
+/**
+ * Continues a list behind a place, in the order of `column` and then of `idColumn`. The first condition is implied by
+ * the second; it is the one that an index can follow.
+ */
+export function continueBehind(
+  query: Knex.QueryBuilder,
+  [column, idColumn]: readonly [string, string],
+  direction: 'ascending' | 'descending',
+  place: { readonly value: string | number | Date; readonly id: string },
+): void {
+  const [beyond, atOrBeyond] = direction === 'ascending' ? ['>', '>='] : ['<', '<='];
+  query.where(column, atOrBeyond, place.value).where((either) => {
+    either
+      .where(column, beyond, place.value)
+      .orWhere((tie) => tie.where(column, place.value).where(idColumn, beyond, place.id));
+  });
 }
 
 /** Splits the rows of a page, asked for with one row more than its size, into the page and whether more follow. */

@@ -4,7 +4,7 @@ import { z } from 'zod';
 import { type ExportFormat } from '#geometry/formats/export.ts';
 import { idSchema, timeSchema } from '#server/contracts/common.ts';
 import { type Download } from '#server/contracts/sections.ts';
-import { decodeCursor, encodeCursor, pageOfRows } from '#server/database/cursor.ts';
+import { continueBehind, decodeCursor, encodeCursor, pageOfRows } from '#server/database/cursor.ts';
 import { joinScoped, scoped } from '#server/database/scoped.ts';
 import { type Author } from '#server/sections/rules.ts';
 
@@ -71,12 +71,8 @@ export async function listDownloads(
     .where({ 'd.section_id': version.sectionId, 'd.version_number': version.number });
   if (options.cursor !== undefined) {
     const [text, id] = decodeCursor(options.cursor, cursorSchema);
-    const at = new Date(text);
-    downloads.where('d.downloaded_at', '<=', at).where((either) => {
-      either
-        .where('d.downloaded_at', '<', at)
-        .orWhere((tie) => tie.where('d.downloaded_at', at).where('d.id', '<', id));
-    });
+    const place = { value: new Date(text), id };
+    continueBehind(downloads, ['d.downloaded_at', 'd.id'], 'descending', place);
   }
   const rows: Row[] = await joinScoped(downloads, 'inner', ['people', 'p'], 'd', [['p.id', 'd.person_id']])
     .select('d.*', 'p.name as person_name')

@@ -1,23 +1,14 @@
 import { type Request } from 'express';
 import { z } from 'zod';
+import { issuesOf } from '#geometry/shapes/error.ts';
 import { type Endpoint } from '#server/contracts/endpoint.ts';
-import { type FieldIssue, Refusal } from '#server/refusal.ts';
-
-/** What zod found, as field paths in dots; an unknown key stands under its own name. */
-export function issuesOf(error: z.core.$ZodError): FieldIssue[] {
-  return error.issues.flatMap((issue): FieldIssue[] => {
-    const path = issue.path.map(String);
-    if (issue.code !== 'unrecognized_keys') return [{ path: path.join('.'), message: issue.message }];
-    return issue.keys.map((key) => ({
-      path: [...path, key].join('.'),
-      message: `“${key}” is not known here.`,
-    }));
-  });
-}
+import { Refusal } from '#server/refusal.ts';
 
 function parse(schema: z.ZodType, value: unknown): unknown {
   const result = schema.safeParse(value);
-  if (!result.success) throw new Refusal('invalid', { errors: issuesOf(result.error) });
+  if (!result.success) {
+    throw new Refusal('invalid', { errors: issuesOf(result.error, (key) => `“${key}” is not known here.`) });
+  }
   return result.data;
 }
 

@@ -13,6 +13,7 @@ export interface Author {
 /** How far somebody sees: every section and version, or only what is or was released. */
 export type Reach = 'all' | 'released';
 
+/** How far a role sees. */
 export function reachOf(role: Role): Reach {
   return may(role, 'sections.read') ? 'all' : 'released';
 }
@@ -42,14 +43,9 @@ export function checkSave(
   offered: { basedOn: number; shape: Shape; note: string },
 ): 'save' | 'conflict' {
   if (target.archived) throw archived();
-  if (offered.basedOn > target.latestNumber) {
-    throw refuseField(
-      'basedOn',
-      `There is no version ${offered.basedOn}; the newest is ${target.latestNumber}.`,
-    );
-  }
+  checkBase(offered.basedOn, target.latestNumber);
   if (offered.basedOn < target.latestNumber) return 'conflict';
-  const isSame = target.base !== null && canonicalShape(target.base) === canonicalShape(offered.shape);
+  const isSame = target.base !== null && isSavedWork(offered.shape, target.base);
   if (isSame && offered.note === '') {
     throw refuseField(
       'shape',
@@ -59,6 +55,16 @@ export function checkSave(
   return 'save';
 }
 
+/**
+ * Whether work can stand on a version of this number.
+ * @throws Refusal `invalid` naming `basedOn` when there is no such version
+ */
+export function checkBase(basedOn: number, latestNumber: number): void {
+  if (basedOn <= latestNumber) return;
+  throw refuseField('basedOn', `There is no version ${basedOn}; the newest is ${latestNumber}.`);
+}
+
+/** What is said to a change of a section that is put away. */
 export function archived(): Refusal {
   return new Refusal('archived', { detail: 'Take the section back from the archive first.' });
 }

@@ -3,8 +3,8 @@ import { canonicalShape, type Shape } from '#geometry/shapes/shape.ts';
 import { type Draft } from '#server/contracts/sections.ts';
 import { scoped } from '#server/database/scoped.ts';
 import { inTransaction } from '#server/database/transaction.ts';
-import { Refusal, refuseField } from '#server/refusal.ts';
-import { type Author, isSavedWork } from '../rules.ts';
+import { Refusal } from '#server/refusal.ts';
+import { type Author, checkBase, isSavedWork } from '../rules.ts';
 import { sectionState } from '../store.ts';
 
 interface Row {
@@ -48,12 +48,7 @@ export async function keepDraft(
   draft: Omit<Draft, 'updatedAt'>,
 ): Promise<Draft> {
   const section = await sectionState(db, author.workshopId, sectionId);
-  if (draft.basedOn > section.latestNumber) {
-    throw refuseField(
-      'basedOn',
-      `There is no version ${draft.basedOn}; the newest is ${section.latestNumber}.`,
-    );
-  }
+  checkBase(draft.basedOn, section.latestNumber);
   await inTransaction(db, (transaction) =>
     scoped(transaction, author.workshopId)
       .insert('section_drafts', {

@@ -1,11 +1,11 @@
 import { type Knex } from 'knex';
 import { type Shape } from '#geometry/shapes/shape.ts';
 import { type Section, type SectionListQuery, type VersionStatus } from '#server/contracts/sections.ts';
-import { pageOfRows } from '#server/database/cursor.ts';
+import { continueBehind, pageOfRows } from '#server/database/cursor.ts';
 import { joinScoped, scoped } from '#server/database/scoped.ts';
 import { Refusal } from '#server/refusal.ts';
 import { type Reach } from '../rules.ts';
-import { cursorOf, type Direction, type Place, placeOf } from './cursor.ts';
+import { cursorOf, type Direction, placeOf } from './cursor.ts';
 import { type Sort, type View, views } from './views.ts';
 
 interface Row {
@@ -111,18 +111,8 @@ function narrow(query: Knex.QueryBuilder, view: View, reach: Reach, filter: Filt
   }
 }
 
-/** Continues behind a place. The first condition is implied by the second; it is the one that an index can follow. */
-function continueBehind(query: Knex.QueryBuilder, column: string, direction: Direction, place: Place): void {
-  const [beyond, atOrBeyond] = direction === 'ascending' ? ['>', '>='] : ['<', '<='];
-  query.where(column, atOrBeyond, place.value).where((either) => {
-    either
-      .where(column, beyond, place.value)
-      .orWhere((tie) => tie.where(column, place.value).where('s.id', beyond, place.id));
-  });
-}
-
 /** The library is read newest first by default, and in every other order from its beginning. */
-export function directionOf({ sort, direction }: Pick<SectionListQuery, 'sort' | 'direction'>): Direction {
+function directionOf({ sort, direction }: Pick<SectionListQuery, 'sort' | 'direction'>): Direction {
   return direction ?? (sort === 'updated' ? 'descending' : 'ascending');
 }
 
@@ -140,7 +130,8 @@ export function libraryQuery(
   const chosen = scoped(db, workshopId).table('sections', { as: 's', index });
   narrow(chosen, view, reach, asked);
   if (asked.cursor !== undefined) {
-    continueBehind(chosen, `s.${column}`, direction, placeOf(asked.cursor, asked.sort, direction));
+    const place = placeOf(asked.cursor, asked.sort, direction);
+    continueBehind(chosen, [`s.${column}`, 's.id'], direction, place);
   }
   chosen
     .select(columnsOf(view, asked.sort))
