@@ -22,9 +22,13 @@ export async function freePort(): Promise<number> {
   return port;
 }
 
+/** Whether listening failed because another holds the port. */
 export function isPortTaken(error: unknown): boolean {
   return error instanceof Error && 'code' in error && error.code === 'EADDRINUSE';
 }
+
+/** How many ports are tried, one above the other. */
+export const portsTried = 100;
 
 /** Listens on the first free port from `first` upwards, within a hundred. */
 export async function listenFrom(server: Server, first: number, host: string): Promise<number> {
@@ -32,7 +36,7 @@ export async function listenFrom(server: Server, first: number, host: string): P
     try {
       return await listenOn(server, port, host);
     } catch (error) {
-      if (!isPortTaken(error) || port >= Math.min(first + 99, 65_535)) throw error;
+      if (!isPortTaken(error) || port >= Math.min(first + portsTried - 1, 65_535)) throw error;
     }
   }
 }

@@ -5,7 +5,7 @@ import { addressOf, configOf, defaultPort, type Settings } from '../config.ts';
 import { createApp } from '../app.ts';
 import { connect } from '../database/connect.ts';
 import { migrateToLatest } from '../database/migrate.ts';
-import { isPortTaken, listenFrom, listenOn } from './ports.ts';
+import { isPortTaken, listenFrom, listenOn, portsTried } from './ports.ts';
 import { adviceFor, StartError } from './steps.mjs';
 
 /** The application, listening. */
@@ -67,7 +67,7 @@ async function listen(server: Server, settings: Settings): Promise<number> {
     if (isPortTaken(error)) {
       throw new StartError(
         port === null
-          ? 'All ports from 8000 to 8099 are taken.'
+          ? `All ports from ${String(defaultPort)} to ${String(defaultPort + portsTried - 1)} are taken.`
           : `Port ${String(port)} is taken by another program.`,
         'End that program, or set PORT to a free one, such as PORT=8180 npm start.',
         error,

@@ -1,3 +1,4 @@
+import { defaultPort } from '../config.ts';
 import { buildClient } from './client-build.ts';
 import { greet, prepare, type Launch } from './prepare.ts';
 import { serve } from './serve.ts';
@@ -19,8 +20,10 @@ async function startAll(launch: Launch, stops: Stops): Promise<void> {
     return running.stop();
   });
   prepared.announce(running.address);
-  if (settings.port === null && running.port !== 8000) {
-    console.log(`- Port 8000 is taken, so it is ${String(running.port)} this time; PORT sets another.`);
+  if (settings.port === null && running.port !== defaultPort) {
+    console.log(
+      `- Port ${String(defaultPort)} is taken, so it is ${String(running.port)} this time; PORT sets another.`,
+    );
   }
   greet(running.address, launch.begun, prepared.demoPassword);
 }
