@@ -22,3 +22,9 @@ export async function alignDemoPassword(knex: Knex, password: string): Promise<s
   );
   return changed.flat();
 }
+
+/** Whether any of the demo accounts is there: a database that was begun without the demo workshop stays without it. */
+export async function hasDemoAccounts(knex: Knex): Promise<boolean> {
+  const people = await Promise.all(demoAddresses.map((address) => personByEmail(knex, address)));
+  return people.some((person) => person !== null);
+}

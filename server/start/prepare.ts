@@ -1,6 +1,6 @@
 import type { Knex } from 'knex';
 import { readSettings, type Settings } from '../config.ts';
-import { alignDemoPassword, demoAddresses } from './demo-accounts.ts';
+import { alignDemoPassword, demoAddresses, hasDemoAccounts } from './demo-accounts.ts';
 import type { Holder } from './hold.mjs';
 import { startOwnDatabase } from './own-database.ts';
 import { choosePlace } from './place.ts';
@@ -30,11 +30,20 @@ export interface Prepared {
   announce(address: string): void;
 }
 
-async function fill(knex: Knex, password: string): Promise<void> {
+/** Fills an empty database. Returns whether the demo workshop is there now. */
+async function fill(knex: Knex, password: string): Promise<boolean> {
   const { isEmpty, seedDemo } = await import('./demo/seed.ts');
-  if (await isEmpty(knex)) return step('Filling in the demo workshop', () => seedDemo(knex, password));
+  if (await isEmpty(knex)) {
+    await step('Filling in the demo workshop', () => seedDemo(knex, password));
+    return true;
+  }
+  if (!(await hasDemoAccounts(knex))) {
+    console.log('- The database was begun without the demo workshop, and stays so');
+    return false;
+  }
   const changed = await alignDemoPassword(knex, password);
   if (changed.length > 0) console.log(`- The demo accounts have a new password: ${changed.join(', ')}`);
+  return true;
 }
 
 /**
@@ -59,10 +68,8 @@ export async function prepare({ root, environment }: Launch, stops: Stops): Prom
     return opened;
   });
   stops.add(() => knex.destroy());
-  const demoPassword = settings.demo
-    ? (settings.demoPassword ?? kept('demo-password', readablePassword))
-    : null;
-  if (demoPassword !== null) await fill(knex, demoPassword);
+  const wanted = settings.demo ? (settings.demoPassword ?? kept('demo-password', readablePassword)) : null;
+  const demoPassword = wanted !== null && (await fill(knex, wanted)) ? wanted : null;
   own?.server.keep();
   return {
     settings,
