@@ -1,10 +1,10 @@
 import { type Point } from '#geometry/point.ts';
 import { boatTailAngleDegOf, type CstShape } from '#geometry/shapes/cst.ts';
-import { type Naca4Shape } from '#geometry/shapes/naca4.ts';
+import { type Naca4Shape, thickestStation } from '#geometry/shapes/naca4.ts';
 import { formatAngle, formatNumber, MM_PER_INCH, type Units } from '#client/app/units.ts';
 import { type DimensionRoom, type DimensionSpec } from './dimension-layout.ts';
 import { type SectionDrawing } from './section-drawing.ts';
-import { edgePoints, noseCircle, surfacePoint, thickestStation } from './section-points.ts';
+import { edgePoints, noseCircle, surfacePoint } from './section-points.ts';
 import { type Box, type SheetLayout } from './sheet-layout.ts';
 import { type SheetTransform } from './sheet-view.ts';
 

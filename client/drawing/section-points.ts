@@ -1,16 +1,8 @@
 import { type Point } from '#geometry/point.ts';
 import { type CstShape, noseRadiusOf } from '#geometry/shapes/cst.ts';
-import { meanLine, type Naca4Shape } from '#geometry/shapes/naca4.ts';
+import { meanLine, naca4NoseRadius } from '#geometry/shapes/naca4.ts';
 import { type Outline, parameterOf } from '#geometry/shapes/outline.ts';
 import { outlineOf, type Shape } from '#geometry/shapes/shape.ts';
-
-/**
- * Where the thickness of a 4-digit section is largest, as a station of the mean line: nominally 30 % chord; computed here
- * as the zero of the derivative of the thickness polynomial of NACA Report 460 with each of its last coefficients.
- */
-const THICKEST_STATION = { open: 0.29983, closed: 0.29953 } as const;
-/** Nose radius of a 4-digit section in units of thickness squared, (5 · 0.2969)² / 2 (NACA Report 824 prints 1.1019). */
-export const NOSE_FACTOR = (5 * 0.2969) ** 2 / 2;
 
 /** Radius and axis of the nose circle on the sheet: the circle touches the nose, and its centre lies on the axis. */
 export interface NoseCircle {
@@ -18,11 +10,6 @@ export interface NoseCircle {
   readonly radius: number;
   /** Unit vector from the nose to the centre. */
   readonly axis: Point;
-}
-
-/** The station of the mean line where a 4-digit section is thickest. */
-export function thickestStation(shape: Naca4Shape): number {
-  return THICKEST_STATION[shape.trailingEdge];
 }
 
 const outlines = new WeakMap<Shape, Outline>();
@@ -51,7 +38,7 @@ export function noseCircle(shape: Shape): NoseCircle {
     const length = Math.hypot(1, slope);
     return {
       nose: { x: 0, y: 0 },
-      radius: NOSE_FACTOR * shape.maxThickness ** 2,
+      radius: naca4NoseRadius(shape.maxThickness),
       axis: { x: 1 / length, y: slope / length },
     };
   }

@@ -1,11 +1,12 @@
 import { Controller, type UseFormReturn } from 'react-hook-form';
+import { LENGTH_LIMITS } from '#geometry/formats/options.ts';
 import { formatLength, useUnits } from '#client/app/units.ts';
 import { QuantityField } from '#client/ui/quantity-field.tsx';
 import { type ExportFields } from './export-fields.ts';
 
 const lengths = {
-  chordMm: { label: 'Chord', min: 10, max: 5000, decimals: 2 },
-  toleranceMm: { label: 'Tolerance', min: 0.001, max: 1, decimals: 3 },
+  chordMm: { label: 'Chord', ...LENGTH_LIMITS.chordMm, decimals: 2 },
+  toleranceMm: { label: 'Tolerance', ...LENGTH_LIMITS.toleranceMm, decimals: 3 },
 } as const;
 
 interface LengthFieldProps {

@@ -34,8 +34,19 @@ function choice<const T extends readonly [string, ...string[]]>(
   );
 }
 
-const chord = numberBetween('The chord', 10, 5000, ' mm');
-const tolerance = numberBetween('The tolerance', 0.001, 1, ' mm');
+/** The lengths that a cut file, a draft and the screens accept, in mm, both ends included (common practice of foam cutting). */
+export const LENGTH_LIMITS = {
+  chordMm: { min: 10, max: 5000 },
+  toleranceMm: { min: 0.001, max: 1 },
+} as const;
+
+const chord = numberBetween('The chord', LENGTH_LIMITS.chordMm.min, LENGTH_LIMITS.chordMm.max, ' mm');
+const tolerance = numberBetween(
+  'The tolerance',
+  LENGTH_LIMITS.toleranceMm.min,
+  LENGTH_LIMITS.toleranceMm.max,
+  ' mm',
+);
 const chordMm = z.preprocess(typed, chord);
 const toleranceMm = z.preprocess(typed, tolerance.default(0.01));
 

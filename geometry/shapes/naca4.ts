@@ -60,6 +60,31 @@ function halfThicknessForm(s: number, rest: number): number {
 }
 
 /**
+ * Nose radius in fractions of chord at a thickness: the polynomial begins as 5 t a₀ √x, so R = (5 t a₀)² / 2 (NACA Report 824
+ * prints 1.1019 t²).
+ * @param maxThickness fractions of chord, 0 or more
+ */
+export function naca4NoseRadius(maxThickness: number): number {
+  return (5 * A0 * maxThickness) ** 2 / 2;
+}
+
+/** The thickness, in fractions of chord, that has a nose radius. @param radius fractions of chord; below 0 counts as 0 */
+export function naca4ThicknessOfNose(radius: number): number {
+  return Math.sqrt(2 * Math.max(0, radius)) / (5 * A0);
+}
+
+/**
+ * Where the half-thickness is largest, as a station of the mean line: nominally 30 % chord; computed here as the zero of the
+ * polynomial's derivative with each of its last coefficients.
+ */
+const THICKEST_STATION = { open: 0.29983, closed: 0.29953 } as const;
+
+/** The station of the mean line (fractions of chord) at which a 4-digit section is thickest. */
+export function thickestStation(shape: Naca4Shape): number {
+  return THICKEST_STATION[shape.trailingEdge];
+}
+
+/**
  * Ordinate and slope of the mean line: two parabolas that meet at the position of the maximum (NACA Report 460).
  * @param station 0 … 1, fractions of chord
  */

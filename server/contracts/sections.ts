@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { LENGTH_LIMITS } from '#geometry/formats/options.ts';
 import { shapeSchema } from '#geometry/shapes/shape.ts';
 import {
   idSchema,
@@ -72,7 +73,7 @@ export const sectionChangeSchema = z
 export const draftInputSchema = z.strictObject({
   basedOn: z.int().min(1),
   shape: shapeSchema,
-  chordMm: z.number().min(10).max(5000),
+  chordMm: z.number().min(LENGTH_LIMITS.chordMm.min).max(LENGTH_LIMITS.chordMm.max),
 });
 export const draftSchema = draftInputSchema.extend({ updatedAt: timeSchema });
 export type Draft = z.infer<typeof draftSchema>;

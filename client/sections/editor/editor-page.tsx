@@ -8,11 +8,9 @@ import { ErrorState } from '#client/ui/error-state.tsx';
 import { type ChosenDraft, chooseDraft } from './draft-mirror.ts';
 import { EditorSkeleton } from './editor-skeleton.tsx';
 import { EditorWorkspace } from './editor-workspace.tsx';
-import { hasEqualNose, sameShape } from './present.ts';
+import { FIRST_CHORD_MM, hasEqualNose, sameShape } from './present.ts';
 import { ReadOnlySheet } from './read-only-sheet.tsx';
 import { useDraftMirror } from './use-draft-keeper.ts';
-
-const FIRST_CHORD_MM = 220;
 
 /** One section: its editor for who may write, its sheet for everybody else. */
 export function Component() {

@@ -1,3 +1,4 @@
+import { LENGTH_LIMITS } from '#geometry/formats/options.ts';
 import {
   CST_LIMITS,
   type CstShape,
@@ -5,10 +6,15 @@ import {
   withNoseRadius,
   withWeight,
 } from '#geometry/shapes/cst.ts';
-import { NACA4_LIMITS, type Naca4Shape } from '#geometry/shapes/naca4.ts';
+import {
+  NACA4_LIMITS,
+  type Naca4Shape,
+  naca4NoseRadius,
+  naca4ThicknessOfNose,
+} from '#geometry/shapes/naca4.ts';
 import { type Shape } from '#geometry/shapes/shape.ts';
 import { type Edit, type Present } from './present.ts';
-import { NOSE_FACTOR, scaleOf } from '#client/drawing/section-points.ts';
+import { scaleOf } from '#client/drawing/section-points.ts';
 import { RESTING_CAMBER_POSITION } from './handle-points.ts';
 import { mirrored, SMALLEST_NOSE_RADIUS, withNoseRadiusInProportion } from './handle-moves.ts';
 import { type HandleId, type Surface, weightOf } from './handle-ids.ts';
@@ -35,18 +41,17 @@ export interface FieldRange {
   readonly max: number;
 }
 
-export const CHORD_LIMITS: FieldRange = { min: 10, max: 5000 };
 const LARGEST_WEIGHT = CST_LIMITS.upper.max;
 
 /**
  * The range of a field: mm for the chord, degrees for angles, no unit for weights and exponents, else fractions of chord.
  */
 export function fieldRange(shape: Shape, field: FieldId): FieldRange {
-  if (field === 'chordMm') return CHORD_LIMITS;
+  if (field === 'chordMm') return LENGTH_LIMITS.chordMm;
   if (shape.kind === 'naca4') {
     if (field === 'noseRadius') {
       const { min, max } = NACA4_LIMITS.maxThickness;
-      return { min: NOSE_FACTOR * min ** 2, max: NOSE_FACTOR * max ** 2 };
+      return { min: naca4NoseRadius(min), max: naca4NoseRadius(max) };
     }
     return field === 'maxCamber' || field === 'maxCamberPosition'
       ? NACA4_LIMITS[field]
@@ -95,7 +100,7 @@ function digitsWith(shape: Naca4Shape, field: FieldId, value: number): Shape {
     case 'maxThickness':
       return { ...shape, maxThickness: value };
     case 'noseRadius':
-      return { ...shape, maxThickness: Math.sqrt(value / NOSE_FACTOR) };
+      return { ...shape, maxThickness: naca4ThicknessOfNose(value) };
     default:
       return shape;
   }

@@ -8,18 +8,17 @@ import {
   withNoseRadius,
   withWeight,
 } from '#geometry/shapes/cst.ts';
-import { NACA4_LIMITS, type Naca4Shape, snapToDigits } from '#geometry/shapes/naca4.ts';
+import {
+  NACA4_LIMITS,
+  type Naca4Shape,
+  naca4ThicknessOfNose,
+  snapToDigits,
+  thickestStation,
+} from '#geometry/shapes/naca4.ts';
 import { type Shape } from '#geometry/shapes/shape.ts';
 import { similarityOf, toChord, toSheet } from '#geometry/shapes/placement.ts';
 import { type Edit, type Present } from './present.ts';
-import {
-  meanNoseRadius,
-  NOSE_FACTOR,
-  noseCircle,
-  scaleOf,
-  surfacePoint,
-  thickestStation,
-} from '#client/drawing/section-points.ts';
+import { meanNoseRadius, noseCircle, scaleOf, surfacePoint } from '#client/drawing/section-points.ts';
 import { handlePoint } from './handle-points.ts';
 import { type HandleId, type Surface, weightOf } from './handle-ids.ts';
 import { type Notice } from './notices.ts';
@@ -123,11 +122,11 @@ function proposeDigits(shape: Naca4Shape, handle: HandleId, to: Point, snap: boo
   return { shape: { ...shape, maxThickness }, notice: thickness.notice ?? follows };
 }
 
-/** The nose circle reaches to the point along its axis; its radius is 1.1019 t². */
+/** The nose circle reaches to the point along its axis. */
 function thicknessByNose(shape: Naca4Shape, to: Point): number {
   const { nose, axis } = noseCircle(shape);
   const radius = ((to.x - nose.x) * axis.x + (to.y - nose.y) * axis.y) / 2;
-  return Math.sqrt(Math.max(0, radius) / NOSE_FACTOR);
+  return naca4ThicknessOfNose(radius);
 }
 
 /** Ordinates laid off the mean line grow in proportion to the thickness: the point is taken square to the mean line. */

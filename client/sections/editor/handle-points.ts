@@ -1,14 +1,8 @@
 import { type Point } from '#geometry/point.ts';
 import { weightStation } from '#geometry/shapes/cst.ts';
-import { type Naca4Shape } from '#geometry/shapes/naca4.ts';
+import { type Naca4Shape, thickestStation } from '#geometry/shapes/naca4.ts';
 import { type Shape } from '#geometry/shapes/shape.ts';
-import {
-  noseCircle,
-  outlineFor,
-  type NoseCircle,
-  surfacePoint,
-  thickestStation,
-} from '#client/drawing/section-points.ts';
+import { noseCircle, outlineFor, type NoseCircle, surfacePoint } from '#client/drawing/section-points.ts';
 import { type HandleId, weightOf } from './handle-ids.ts';
 
 /** Where the camber handle of a section without camber stands. */

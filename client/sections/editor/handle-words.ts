@@ -1,11 +1,11 @@
-import { boatTailAngleDegOf } from '#geometry/shapes/cst.ts';
-import { CST_LIMITS } from '#geometry/shapes/cst.ts';
+import { boatTailAngleDegOf, CST_LIMITS } from '#geometry/shapes/cst.ts';
 import { NACA4_LIMITS } from '#geometry/shapes/naca4.ts';
 import { type Shape } from '#geometry/shapes/shape.ts';
 import { type Point } from '#geometry/point.ts';
 import { formatLength, formatPercent, type Units } from '#client/app/units.ts';
 import { type DimensionId } from '#client/drawing/section-dimensions.ts';
 import { noseCircle, scaleOf } from '#client/drawing/section-points.ts';
+import { fieldRange } from './fields.ts';
 import { type HandleId, weightOf } from './handle-ids.ts';
 
 /** What a handle says of itself: its name, its main value for a slider, and its value in words. */
@@ -79,13 +79,13 @@ function weightWords(
 function noseWords(shape: Shape, mm: Millimetres): HandleWords {
   const { radius } = noseCircle(shape);
   const follows = shape.kind === 'naca4' ? `, thickness ${formatPercent(shape.maxThickness, 2)}` : '';
-  const range = shape.kind === 'naca4' ? NACA4_LIMITS.maxThickness : { min: 0, max: CST_LIMITS.upper.max };
-  const reach = shape.kind === 'naca4' ? 1.1019 : 0.5;
+  const range =
+    shape.kind === 'naca4' ? fieldRange(shape, 'noseRadius') : { min: 0, max: CST_LIMITS.upper.max ** 2 / 2 };
   return {
     name: 'Nose radius',
     value: Number((100 * radius).toFixed(4)),
-    min: Number((100 * reach * range.min ** 2).toFixed(4)),
-    max: Number((100 * reach * range.max ** 2).toFixed(4)),
+    min: Number((100 * range.min).toFixed(4)),
+    max: Number((100 * range.max).toFixed(4)),
     spoken: `nose radius ${formatPercent(radius, 2)} of chord, ${mm(radius)}${follows}`,
     tag: `R ${mm(radius)} = ${formatPercent(radius, 2)}${follows}`,
   };

@@ -1,6 +1,9 @@
 import { canonicalShape, type Shape } from '#geometry/shapes/shape.ts';
 import { type Notice } from './notices.ts';
 
+/** The chord at which a section is first shown, mm. */
+export const FIRST_CHORD_MM = 220;
+
 /** What undo brings back. */
 export interface Present {
   readonly shape: Shape;

@@ -10,13 +10,12 @@ import { EditorFrame } from './editor-frame.tsx';
 import { ghostOf } from './ghost.ts';
 import { type EditorAction, reduceEditor, startState } from './editor-state.ts';
 import { LiveState } from './live-state.ts';
+import { FIRST_CHORD_MM } from './present.ts';
 import { SectionVersions } from './section-versions.tsx';
 import { SheetStage } from './sheet-stage.tsx';
 import { SideColumn } from './side-column.tsx';
 import { useSettings } from './use-settings.ts';
 import { useGhost, useTitle } from './use-standing.ts';
-
-const FIRST_CHORD_MM = 220;
 
 /** The sheet of the newest version that a reader may see: to look at, measure and export. */
 export function ReadOnlySheet({ section, version }: { section: Section; version: SectionVersion }) {

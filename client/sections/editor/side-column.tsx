@@ -1,4 +1,5 @@
 import { memo, type ReactNode, useState } from 'react';
+import { LENGTH_LIMITS } from '#geometry/formats/options.ts';
 import { CST_LIMITS } from '#geometry/shapes/cst.ts';
 import { describeShape, type ShapeKind } from '#geometry/shapes/shape.ts';
 import { useUnits } from '#client/app/units.ts';
@@ -7,7 +8,6 @@ import { SegmentedControl } from '#client/ui/segmented-control.tsx';
 import { SelectField } from '#client/ui/select-field.tsx';
 import { DigitFields } from './digit-fields.tsx';
 import { type EditorAction } from './editor-state.ts';
-import { CHORD_LIMITS } from './fields.ts';
 import { FreeFormFields } from './free-form-fields.tsx';
 import { MeasuredValues } from './measured-values.tsx';
 import { useLiveState } from './live-state.ts';
@@ -43,7 +43,7 @@ export const SideColumn = memo(function SideColumn(props: SideColumnProps) {
           chordMm={chordMm}
           units={units}
           decimals={1}
-          {...CHORD_LIMITS}
+          {...LENGTH_LIMITS.chordMm}
           dispatch={dispatch}
         />
         {enabled && shape.kind === 'naca4' && (

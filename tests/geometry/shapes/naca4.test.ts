@@ -10,7 +10,11 @@ import {
   naca4Schema,
   parseDesignation,
   snapToDigits,
+  naca4NoseRadius,
+  naca4ThicknessOfNose,
+  thickestStation,
 } from '#geometry/shapes/naca4.ts';
+import { radiiOf } from '#geometry/contour/curvature.ts';
 import { parameterOf } from '#geometry/shapes/outline.ts';
 import { HALF_THICKNESS_0012, SURFACES_2412, SURFACES_4412 } from '#tests/reference/naca4-polynomial.ts';
 import { expectDerivatives, expectFinite } from './curves.ts';
@@ -119,6 +123,29 @@ describe('the outline', () => {
       }),
     );
   });
+});
+
+describe('nose and thickest station', () => {
+  test('the nose radius is that of the outline, and gives its thickness back', () => {
+    for (const maxThickness of [0.01, 0.12, 0.4]) {
+      const { noseRadius } = radiiOf(naca4Outline({ ...naca4('0012'), maxThickness }));
+      expect(Math.abs(naca4NoseRadius(maxThickness) / noseRadius - 1)).toBeLessThan(1e-12);
+      expect(Math.abs(naca4ThicknessOfNose(noseRadius) - maxThickness)).toBeLessThan(1e-12);
+    }
+    expect(Math.abs(naca4NoseRadius(1) - 1.1019)).toBeLessThan(5e-5);
+    expect(naca4ThicknessOfNose(-0.1)).toBe(0);
+  });
+
+  test.each(['open', 'closed'] as const)(
+    'the thickness falls off on both sides of it, %s',
+    (trailingEdge) => {
+      const shape = { ...naca4('2412'), trailingEdge };
+      const at = thickestStation(shape);
+      const largest = halfThickness(shape, at);
+      expect(largest).toBeGreaterThan(halfThickness(shape, at - 1e-4));
+      expect(largest).toBeGreaterThan(halfThickness(shape, at + 1e-4));
+    },
+  );
 });
 
 describe('designations', () => {
