@@ -1,7 +1,8 @@
+import { type Preferences } from '#server/contracts/people.ts';
 import { ArithmeticError, evaluate, type UnitTable } from './arithmetic.ts';
 import { useMe } from './session.tsx';
 
-export type Units = 'mm' | 'inch';
+export type Units = Preferences['units'];
 export type QuantityKind = 'fraction' | 'length' | 'angle';
 
 /** The inch, exactly (international yard and pound agreement, 1959). */

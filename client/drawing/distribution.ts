@@ -1,5 +1,6 @@
 import { type Point } from '#geometry/point.ts';
 import { convexCurvature } from '#geometry/contour/curvature.ts';
+import { stationOf } from '#geometry/shapes/outline.ts';
 import { type SectionDrawing } from './section-drawing.ts';
 
 /** Thickness and camber along the chord, square to the sheet's chord line; fractions of chord. */
@@ -21,7 +22,7 @@ export function thicknessDistribution({ contour }: SectionDrawing): ThicknessDis
   const thickness: Point[] = [];
   const camber: Point[] = [];
   for (let i = 0; i < STATIONS; i++) {
-    const station = (1 - Math.cos((Math.PI * i) / (STATIONS - 1))) / 2;
+    const station = stationOf(i / (STATIONS - 1));
     const high = upper(station);
     const low = lower(station);
     if (high === null || low === null) continue;
@@ -59,7 +60,6 @@ export interface CurvatureDistribution {
   readonly lower: readonly Point[];
 }
 
-const FIRST_T = 0;
 const LAST_T = 0.985;
 const CURVATURE_POINTS = 121;
 
@@ -70,7 +70,7 @@ const CURVATURE_POINTS = 121;
 export function curvatureDistribution({ outline }: SectionDrawing): CurvatureDistribution {
   const along = (surface: 'upper' | 'lower') =>
     Array.from({ length: CURVATURE_POINTS }, (_, i) => {
-      const t = FIRST_T + ((LAST_T - FIRST_T) * i) / (CURVATURE_POINTS - 1);
+      const t = (LAST_T * i) / (CURVATURE_POINTS - 1);
       const point = outline[surface].derivatives(t);
       return { x: point.x, y: convexCurvature(point, surface === 'upper' ? -1 : 1) };
     }).filter(({ y }) => Number.isFinite(y));

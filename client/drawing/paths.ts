@@ -1,10 +1,8 @@
 import { line } from 'd3-shape';
 import { type Contour } from '#geometry/contour/contour.ts';
-import { sampleCosine } from '#geometry/contour/sampling.ts';
-import { outlineOf, type Shape } from '#geometry/shapes/shape.ts';
 
 /** Maps a chord fraction to the unit of the drawing (px, or mm in print). */
-export type Axis = (value: number) => number;
+type Axis = (value: number) => number;
 
 /**
  * The closed path of a contour: upper trailing edge, nose, lower trailing edge, and back along the trailing edge.
@@ -17,14 +15,4 @@ export function contourPath(contour: Contour, toX: Axis, toY: Axis, digits = 2):
     (_, index) => toY(y[index] ?? 0),
   ).digits(digits)(x);
   return path === null ? '' : `${path}Z`;
-}
-
-/** The closed path of a shape, sampled by cosine spacing; `pointsPerSurface` counts nose and trailing edge. */
-export function outlinePath(
-  shape: Shape,
-  toX: Axis,
-  toY: Axis,
-  { pointsPerSurface = 100, digits = 2 }: { pointsPerSurface?: number; digits?: number } = {},
-): string {
-  return contourPath(sampleCosine(outlineOf(shape), pointsPerSurface), toX, toY, digits);
 }

@@ -1,9 +1,10 @@
 import { type Point } from '#geometry/point.ts';
+import { type Surface } from '#geometry/shapes/cst.ts';
 import { type Shape } from '#geometry/shapes/shape.ts';
 import { withField, type FieldId } from './fields.ts';
 import { handlePoint } from './handle-points.ts';
 import { moveHandle, nudgeHandle, toLimit, type NudgeSteps } from './handle-moves.ts';
-import { type HandleId, type Surface } from './handle-ids.ts';
+import { type HandleId } from './handle-ids.ts';
 import { type Notice } from './notices.ts';
 import { convertToDigits, convertToFreeForm, withEdge, withEqualNose, withOrder } from './operations.ts';
 import { type Edit, type Present, samePresent } from './present.ts';

@@ -2,6 +2,7 @@ import { LENGTH_LIMITS } from '#geometry/formats/options.ts';
 import {
   CST_LIMITS,
   type CstShape,
+  type Surface,
   withBoatTailAngleDeg,
   withNoseRadius,
   withWeight,
@@ -17,7 +18,7 @@ import { type Edit, type Present } from './present.ts';
 import { scaleOf } from '#client/drawing/section-points.ts';
 import { RESTING_CAMBER_POSITION } from './handle-points.ts';
 import { mirrored, SMALLEST_NOSE_RADIUS, withNoseRadiusInProportion } from './handle-moves.ts';
-import { type HandleId, type Surface, weightOf } from './handle-ids.ts';
+import { type HandleId, weightOf } from './handle-ids.ts';
 import { checked } from './validity.ts';
 
 /** Values that can be typed, on the sheet or in the list. Weights are named as their handles. */

@@ -1,12 +1,17 @@
 import { memo, useCallback } from 'react';
-import { boatTailAngleDegOf, CST_LIMITS, type CstShape, noseRadiusOf } from '#geometry/shapes/cst.ts';
+import {
+  boatTailAngleDegOf,
+  CST_LIMITS,
+  type CstShape,
+  noseRadiusOf,
+  type Surface,
+} from '#geometry/shapes/cst.ts';
 import { type Units } from '#client/app/units.ts';
 import { scaleOf } from '#client/drawing/section-points.ts';
 import { Button } from '#client/ui/button.tsx';
 import { CheckboxField } from '#client/ui/checkbox-field.tsx';
 import { type EditorAction } from './editor-state.ts';
 import { fieldRange } from './fields.ts';
-import { type Surface } from './handle-ids.ts';
 import { NumberField } from './number-field.tsx';
 import { ValueField } from './value-field.tsx';
 

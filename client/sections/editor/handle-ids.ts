@@ -1,6 +1,5 @@
+import { type Surface } from '#geometry/shapes/cst.ts';
 import { type Shape } from '#geometry/shapes/shape.ts';
-
-export type Surface = 'upper' | 'lower';
 
 /** The points of a section that can be taken hold of. A weight handle is named by surface and index. */
 export type HandleId =

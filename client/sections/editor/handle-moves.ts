@@ -2,6 +2,7 @@ import { type Point } from '#geometry/point.ts';
 import {
   CST_LIMITS,
   type CstShape,
+  type Surface,
   weightStation,
   weightThrough,
   withEqualNoseRadius,
@@ -20,7 +21,7 @@ import { similarityOf, toChord, toSheet } from '#geometry/shapes/placement.ts';
 import { type Edit, type Present } from './present.ts';
 import { meanNoseRadius, noseCircle, scaleOf, surfacePoint } from '#client/drawing/section-points.ts';
 import { handlePoint } from './handle-points.ts';
-import { type HandleId, type Surface, weightOf } from './handle-ids.ts';
+import { type HandleId, weightOf } from './handle-ids.ts';
 import { type Notice } from './notices.ts';
 import { checked } from './validity.ts';
 

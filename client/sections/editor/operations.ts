@@ -1,6 +1,12 @@
 import { type Point } from '#geometry/point.ts';
 import { fitCst } from '#geometry/contour/fitting.ts';
-import { type CstShape, lowerOrder, raiseOrder, withEqualNoseRadius } from '#geometry/shapes/cst.ts';
+import {
+  type CstShape,
+  lowerOrder,
+  raiseOrder,
+  type Surface,
+  withEqualNoseRadius,
+} from '#geometry/shapes/cst.ts';
 import { ShapeError } from '#geometry/shapes/error.ts';
 import { NACA4_LIMITS, type Naca4Shape } from '#geometry/shapes/naca4.ts';
 import { outlineOf, type Shape } from '#geometry/shapes/shape.ts';
@@ -8,7 +14,6 @@ import { type Outline } from '#geometry/shapes/outline.ts';
 import { thicknessDistribution } from '#client/drawing/distribution.ts';
 import { drawSection } from '#client/drawing/section-drawing.ts';
 import { type Edit, type Present } from './present.ts';
-import { type Surface } from './handle-ids.ts';
 import { type Notice } from './notices.ts';
 import { checked, reasonOf } from './validity.ts';
 

@@ -1,6 +1,6 @@
 import { cleanup, render } from '@testing-library/react';
 import { afterEach, describe, expect, it } from 'vitest';
-import { contourPath, outlinePath } from '#client/drawing/paths.ts';
+import { contourPath } from '#client/drawing/paths.ts';
 import { Thumbnail } from '#client/drawing/thumbnail.tsx';
 import { sampleCosine } from '#geometry/contour/sampling.ts';
 import { naca4Outline } from '#geometry/shapes/naca4.ts';
@@ -33,14 +33,6 @@ describe('contourPath', () => {
       expect(Math.abs(x - contour.x[index]! * 100)).toBeLessThanOrEqual(0.0005001);
       expect(Math.abs(y + contour.y[index]! * 100)).toBeLessThanOrEqual(0.0005001);
     });
-  });
-
-  it('draws a shape by the same points', () => {
-    const contour = sampleCosine(naca4Outline(shape), 30);
-    const scale = (value: number) => value * 50;
-    expect(outlinePath(shape, scale, scale, { pointsPerSurface: 30 })).toBe(
-      contourPath(contour, scale, scale),
-    );
   });
 });
 
