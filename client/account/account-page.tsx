@@ -1,5 +1,6 @@
 import { type ReactNode } from 'react';
 import { useChangePreferences } from '#client/api/me.ts';
+import { THEMES } from '#client/app/theme.ts';
 import { useTheme } from '#client/app/use-theme.ts';
 import { useMe } from '#client/app/session.tsx';
 import { sentenceOf } from '#client/ui/error-state.tsx';
@@ -11,11 +12,6 @@ import { PasswordForm } from './password-form.tsx';
 const UNITS: readonly Segment<Preferences['units']>[] = [
   { value: 'mm', label: 'mm' },
   { value: 'inch', label: 'inch' },
-];
-const THEMES: readonly Segment<Preferences['theme']>[] = [
-  { value: 'system', label: 'System' },
-  { value: 'day', label: 'Day' },
-  { value: 'night', label: 'Night' },
 ];
 
 export function Component() {

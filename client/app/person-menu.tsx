@@ -6,14 +6,8 @@ import { sentenceOf } from '#client/ui/error-state.tsx';
 import { buttonClass } from '#client/ui/button.tsx';
 import { type Me } from '#server/contracts/people.ts';
 import { signOut } from './session.tsx';
-import { type Theme } from './theme.ts';
+import { THEMES } from './theme.ts';
 import { useTheme } from './use-theme.ts';
-
-const THEMES: readonly { readonly value: Theme; readonly label: string }[] = [
-  { value: 'system', label: 'As the system' },
-  { value: 'day', label: 'Day sheet' },
-  { value: 'night', label: 'Night sheet' },
-];
 
 export function PersonMenu({ me, onShowKeys }: { me: Me; onShowKeys: () => void }) {
   const navigate = useNavigate();
@@ -45,6 +39,7 @@ export function PersonMenu({ me, onShowKeys }: { me: Me; onShowKeys: () => void 
         <MenuItem onSelect={() => void navigate('/account')}>Account</MenuItem>
         <MenuItem onSelect={onShowKeys}>Keys</MenuItem>
         <MenuRule />
+        <MenuHeading>Theme</MenuHeading>
         {THEMES.map(({ value, label }) => (
           <MenuItem
             key={value}

@@ -2,12 +2,19 @@ import { type Preferences } from '#server/contracts/people.ts';
 
 export type Theme = Preferences['theme'];
 
+/** The themes to choose from, as the account page and the person's menu name them. */
+export const THEMES: readonly { readonly value: Theme; readonly label: string }[] = [
+  { value: 'system', label: 'System' },
+  { value: 'day', label: 'Day' },
+  { value: 'night', label: 'Night' },
+];
+
 /** Read by public/theme.js before the first paint. */
 const STORAGE_KEY = 'ribwright.theme';
 const darkSystem = () => matchMedia('(prefers-color-scheme: dark)');
 
 /** The choice kept in this browser; `system` when there is none or storage is forbidden. */
-export function keptTheme(): Theme {
+function keptTheme(): Theme {
   try {
     const kept = localStorage.getItem(STORAGE_KEY);
     return kept === 'day' || kept === 'night' ? kept : 'system';
