@@ -1,3 +1,4 @@
+import { type Point } from '../point.ts';
 import { type Polyline, at, polylineOf } from './arrays.ts';
 import { type BlockPlace, toBlock, toMachine } from './block.ts';
 import { type Core } from './core.ts';
@@ -12,8 +13,9 @@ export interface FacePair {
 }
 
 /** A place where the core's outline is open because a feature begins there. */
-export interface Mouth extends FacePair {
-  readonly parts: readonly number[];
+export interface OpenPlace extends FacePair {
+  /** The part of the chain it is in, as in `PART`. */
+  readonly part: number;
 }
 
 /** What one core must come out as, on the machine. */
@@ -21,7 +23,7 @@ export interface ExpectedCore {
   readonly outline: FacePair;
   readonly part: Uint8Array;
   /** The mouth of each feature: its two edges on the core's surface. */
-  readonly mouths: readonly Mouth[];
+  readonly mouths: readonly OpenPlace[];
   /** Points of the features' walls that the kerf must just touch. */
   readonly walls: FacePair;
   readonly halfKerfLeftMm: number;
@@ -46,15 +48,23 @@ export function expectedCores(
     return {
       outline: pair((end) => core[end].core),
       part: core.panel.chain.part,
-      mouths: features.map((feature) => ({
-        ...pair((end) => polylineOf(feature[end].mouth)),
-        parts: feature.feature.kind === 'strip' ? [PART.upper, PART.lower] : [PART[feature.surface]],
-      })),
-      walls: pair((end) => polylineOf(features.flatMap((feature) => feature[end].walls))),
+      mouths: features.flatMap((feature) =>
+        feature.root.mouths.map(({ surface }, i) => ({
+          ...pair((end) => polylineOf(feature[end].mouths[i]?.edges ?? [])),
+          part: PART[surface],
+        })),
+      ),
+      walls: pair((end) => polylineOf(features.flatMap((feature) => wallsOf(feature, end)))),
       halfKerfLeftMm: core[leftEnd].halfKerfMm,
       halfKerfRightMm: core[rightEnd].halfKerfMm,
     };
   });
+}
+
+/** A feature's wall points at one end, without those that either end lacks. */
+function wallsOf(feature: PlacedFeature, end: End): Point[] {
+  const other = feature[end === 'root' ? 'tip' : 'root'].walls;
+  return feature[end].walls.filter((point, i): point is Point => point !== null && other[i] !== null);
 }
 
 /** True when x lies between the two edges of a mouth, or within `by` of them. */

@@ -11,16 +11,25 @@ export interface Cutout {
   readonly outline: Polyline;
   /** Centre of the wire, from the mouth round and back to the mouth. */
   readonly wire: readonly Point[];
-  /** The two edges of its mouth on the core's surface. */
-  readonly mouth: readonly [Point, Point];
-  /** Points of its walls that the kerf just touches: all but those in corners that the round kerf can't reach. */
-  readonly walls: readonly Point[];
+  /** Where it opens the core's surfaces: the two edges on each. */
+  readonly mouths: readonly Mouth[];
+  /**
+   * Points of its walls that the kerf just touches, in step between the ends: null in corners that the round kerf can't reach and where the entry
+   * slit opens the wall.
+   */
+  readonly walls: readonly (Point | null)[];
   /** Foam left to the next surface of the core, mm; below 0 it breaks through. */
   readonly webMm: number;
 }
 
+/** The opening of a feature in a surface of the core. */
+export interface Mouth {
+  readonly surface: Surface;
+  readonly edges: readonly [Point, Point];
+}
+
 /** Why a feature can't be cut at one end. */
-export type Fault = 'outside' | 'narrow';
+export type Fault = 'outside' | 'narrow' | 'shallow';
 
 /** A vertical line's lowest and highest point on an outline. */
 interface Cut {
@@ -60,6 +69,9 @@ export function slotAt(
   const floor = up ? middle.high - depthMm : middle.low + depthMm;
   const inner = up ? floor + h : floor - h;
   const mouth = (cut: Cut) => (up ? cut.high : cut.low);
+  const depthAt = (cut: Cut) => (up ? cut.high - floor : floor - cut.low);
+  // A shallower wall can't come out upright: the kerf is round.
+  if (Math.min(depthAt(middle), depthAt(aftCut), depthAt(foreCut)) < h) return 'shallow';
   const far = (cut: Cut) => (up ? floor - cut.low : cut.high - floor);
   const outline = [
     { x: aft, y: mouth(aftCut) },
@@ -77,9 +89,14 @@ export function slotAt(
   return {
     outline: polylineOf(up ? outline : outline.reverse()),
     wire: up ? wire : wire.reverse(),
-    mouth: [
-      { x: aft, y: mouth(aftCut) },
-      { x: fore, y: mouth(foreCut) },
+    mouths: [
+      {
+        surface,
+        edges: [
+          { x: aft, y: mouth(aftCut) },
+          { x: fore, y: mouth(foreCut) },
+        ],
+      },
     ],
     walls: [
       ...wall(aft, aftCut),
@@ -110,10 +127,13 @@ export function stripAt({ core, path, halfKerfMm: h }: CoreEnd, x: number, width
       { x: fore + h, y: forePath.low },
       { x: fore + h, y: forePath.high },
     ],
-    mouth: [
-      { x: aft, y: aftCut.high },
-      { x: fore, y: foreCut.high },
-    ],
+    mouths: (['upper', 'lower'] as const).map((surface) => ({
+      surface,
+      edges: [
+        { x: aft, y: surface === 'upper' ? aftCut.high : aftCut.low },
+        { x: fore, y: surface === 'upper' ? foreCut.high : foreCut.low },
+      ],
+    })),
     walls: [
       ...alongWall({ x: aft, y: aftCut.high }, { x: aft, y: aftCut.low }, 5),
       ...alongWall({ x: fore, y: foreCut.high }, { x: fore, y: foreCut.low }, 5),
@@ -128,7 +148,7 @@ export interface Axis extends Point {
   readonly slopeY: number;
 }
 
-const AROUND = 64;
+const AROUND = 96;
 
 /**
  * A round tube that may run aslant: the face cuts it in an ellipse, whose long axis points the way the tube leans and is longer by the
@@ -163,13 +183,20 @@ export function tubeAt(
   const cut = first && verticalCut(core, first.x);
   if (!cut) return 'outside';
   const surface = entry === 'upper' ? cut.high : cut.low;
-  const walls = ring(0).slice(AROUND / 8, -AROUND / 8);
+  const beside = ({ x, y }: Point) =>
+    Math.abs(x - first.x) > 1.05 * h || (entry === 'upper' ? y < axis.y : y > axis.y);
+  const walls = ring(0).map((point) => (beside(point) ? point : null));
   return {
     outline,
     wire,
-    mouth: [
-      { x: first.x - h, y: surface },
-      { x: first.x + h, y: surface },
+    mouths: [
+      {
+        surface: entry,
+        edges: [
+          { x: first.x - h, y: surface },
+          { x: first.x + h, y: surface },
+        ],
+      },
     ],
     walls,
     webMm,
@@ -210,9 +237,14 @@ export function hingeAt(
   return {
     outline: polylineOf(up ? outline : outline.reverse()),
     wire: [aft, corner, fore].filter((point) => point !== undefined),
-    mouth: [
-      { x: x + Math.max(h, reach), y: surface },
-      { x: x - Math.max(h, reach), y: surface },
+    mouths: [
+      {
+        surface: up ? 'lower' : 'upper',
+        edges: [
+          { x: x + Math.max(h, reach), y: surface },
+          { x: x - Math.max(h, reach), y: surface },
+        ],
+      },
     ],
     walls: [{ x, y: apex }],
     webMm: Infinity,

@@ -1,5 +1,5 @@
 import { type Point } from '../point.ts';
-import { type Polyline, at, boxOf, polylineOf } from './arrays.ts';
+import { type Box, type Polyline, at, between, boxOf, polylineOf } from './arrays.ts';
 import { type Core } from './core.ts';
 import {
   type Axis,
@@ -132,6 +132,11 @@ function faultFindings(
     const message = `${name} is narrower than the kerf of ${mm(plan.kerfMm[end])} at the ${end}.`;
     return [error('narrower-than-kerf', field, message, { end, station })];
   }
+  if (cutout === 'shallow') {
+    const message = `${name} has a side shallower than half the kerf of ${mm(plan.kerfMm[end])} at the ${end}.`;
+    const field = path(end === 'root' ? 'rootDepthMm' : 'tipDepthMm');
+    return [error('shallower-than-kerf', field, message, { end, station })];
+  }
   const least = plan.limits.minimumWebMm;
   if (cutout.webMm >= least) return [];
   const field = feature.kind === 'slot' ? path(end === 'root' ? 'rootDepthMm' : 'tipDepthMm') : stationField;
@@ -154,7 +159,10 @@ function pairAt({ panel }: Core, surface: Surface, station: number): number {
   return best;
 }
 
-/** The wire's points for a feature. Where its station differs between the ends, the wire passes there and back clear of the core. */
+/**
+ * The wire's points for a feature, over the point of its path straight above the feature's middle. Where its station differs between the ends, the
+ * wire passes there and back clear of the core.
+ */
 function wayTo(
   core: Core,
   feature: Feature,
@@ -163,46 +171,67 @@ function wayTo(
   end: End,
   cutout: Cutout,
 ): Polyline {
-  if (Math.abs(feature.rootStation - feature.tipStation) < 1e-9) return polylineOf(cutout.wire);
   const { path } = core[end];
   const x = middleX(core, feature, end);
-  const leave = at(path.x, pair);
   const sign = surface === 'upper' ? 1 : -1;
-  const mouth = verticalCut(path, x);
-  const mouthY = mouth ? (sign > 0 ? mouth.high : mouth.low) : at(path.y, pair);
-  let level = Math.max(sign * at(path.y, pair), sign * mouthY);
-  path.x.forEach((value, i) => {
-    const inside = (value - leave) * (value - x) <= 0;
-    if (inside && core.panel.chain.part[i] === PART[surface]) level = Math.max(level, sign * at(path.y, i));
-  });
-  const y = sign * (level + CLEAR);
-  const there = [
-    { x: leave, y },
-    { x, y },
-    { x, y: mouthY },
-  ];
+  const cut = verticalCut(path, x);
+  const above = { x, y: cut ? (sign > 0 ? cut.high : cut.low) : at(path.y, pair) };
+  const detour =
+    Math.abs(feature.rootStation - feature.tipStation) < 1e-9
+      ? []
+      : clearWay(core, surface, end, { x: at(path.x, pair), y: at(path.y, pair) }, above);
+  const there = [...detour, above];
   return polylineOf([...there, ...cutout.wire, ...there.slice().reverse()]);
 }
+
+/** Up to a level clear of the core, and along it to above a feature. */
+function clearWay(core: Core, surface: Surface, end: End, leave: Point, above: Point): Point[] {
+  const { path } = core[end];
+  const sign = surface === 'upper' ? 1 : -1;
+  let level = Math.max(sign * leave.y, sign * above.y);
+  path.x.forEach((value, i) => {
+    const passed = (value - leave.x) * (value - above.x) <= 0;
+    if (passed && core.panel.chain.part[i] === PART[surface]) level = Math.max(level, sign * at(path.y, i));
+  });
+  const y = sign * (level + CLEAR);
+  return [
+    { x: leave.x, y },
+    { x: above.x, y },
+  ];
+}
+
+/** Shares of the span at which two features are compared: they may pass through one another between the ends. */
+const SHARES = [0, 0.25, 0.5, 0.75, 1] as const;
 
 function overlaps(plan: Plan, features: readonly PlacedFeature[]): Finding[] {
   const web = plan.limits.minimumWebMm;
   return features.flatMap((feature, k) =>
-    features.slice(0, k).flatMap((other) =>
-      ENDS.filter((end) => {
-        const [a, b] = [boxOf(feature[end].outline), boxOf(other[end].outline)];
-        return (
-          a.minX < b.maxX + web && b.minX < a.maxX + web && a.minY < b.maxY + web && b.minY < a.maxY + web
-        );
-      })
-        .slice(0, 1)
-        .map((end) =>
-          error(
-            'features-overlap',
-            `features.${feature.index}.${end}Station`,
-            `Features ${other.index + 1} and ${feature.index + 1} stand less than ${mm(web)} apart at the ${end}.`,
-            { end, station: stationAt(feature.feature, end) },
-          ),
-        ),
+    features.slice(0, k).flatMap((other) => {
+      const share = SHARES.find((of) => near(room(feature, of), room(other, of), web));
+      if (share === undefined) return [];
+      const end = share <= 0.5 ? 'root' : 'tip';
+      const spanMm = share * plan.panel.spanMm;
+      const message = `Features ${other.index + 1} and ${feature.index + 1} stand less than ${mm(web)} apart at ${mm(spanMm, 0)} from the root.`;
+      const place = { end, spanMm, station: stationAt(feature.feature, end) } as const;
+      return [error('features-overlap', `features.${feature.index}.${end}Station`, message, place)];
+    }),
+  );
+}
+
+/** The box around a feature with its way in from the surface, at a share of the span. */
+function room({ root, tip }: PlacedFeature, share: number): Box[] {
+  const box = boxOf(between(root.outline, tip.outline, share));
+  const ways = root.mouths.map(({ edges }, i) => {
+    const mouth = boxOf(between(polylineOf(edges), polylineOf(tip.mouths[i]?.edges ?? edges), share));
+    return { ...mouth, minY: Math.min(mouth.minY, box.minY), maxY: Math.max(mouth.maxY, box.maxY) };
+  });
+  return [box, ...ways];
+}
+
+function near(these: readonly Box[], others: readonly Box[], by: number): boolean {
+  return these.some((a) =>
+    others.some(
+      (b) => a.minX < b.maxX + by && b.minX < a.maxX + by && a.minY < b.maxY + by && b.minY < a.maxY + by,
     ),
   );
 }

@@ -1,5 +1,5 @@
 import { type Point } from '../point.ts';
-import { type Outline, type SurfaceCurve } from '../shapes/outline.ts';
+import { type Outline } from '../shapes/outline.ts';
 import { outlineOf } from '../shapes/shape.ts';
 import { type End, type PanelPlan } from './plan.ts';
 import { type StationMap, stationMap } from './stations.ts';
@@ -12,6 +12,9 @@ export interface PlacedSection {
   readonly chordMm: number;
   readonly upper: StationMap;
   readonly lower: StationMap;
+  /** Cosine and sine of the angle by which it is turned, counter-clockwise. */
+  readonly cos: number;
+  readonly sin: number;
   /** A point of the unit sheet in the panel, mm. */
   toPanel(point: Point): Point;
   /** A point of the panel on the unit sheet. */
@@ -40,6 +43,8 @@ export function placeSection(panel: PanelPlan, end: End): PlacedSection {
   return {
     outline,
     chordMm,
+    cos,
+    sin,
     upper: stationMap(outline.upper),
     lower: stationMap(outline.lower),
     toPanel: ({ x, y }) => {
@@ -56,20 +61,14 @@ export function placeSection(panel: PanelPlan, end: End): PlacedSection {
 /** The point of a surface at a parameter, in the panel. */
 export function surfacePoint(section: PlacedSection, surface: Surface, t: number): SurfacePoint {
   const curve = section.outline[surface];
-  const point = section.toPanel(curve.at(t));
-  const [dx, dy] = direction(curve, t);
-  const origin = section.toPanel({ x: 0, y: 0 });
-  const turned = section.toPanel(surface === 'upper' ? { x: -dy, y: dx } : { x: dy, y: -dx });
-  const [nx, ny] = [turned.x - origin.x, turned.y - origin.y];
-  const length = Math.hypot(nx, ny);
-  return { ...point, nx: nx / length, ny: ny / length };
-}
-
-function direction(curve: SurfaceCurve, t: number): [number, number] {
-  const { dx, dy } = curve.derivatives(Math.min(1 - NUDGE, t));
-  if (Math.hypot(dx, dy) > NUDGE) return [dx, dy];
-  const inside = curve.derivatives(Math.min(1 - NUDGE, t + NUDGE));
-  return [inside.dx, inside.dy];
+  const inside = curve.derivatives(Math.min(1 - NUDGE, t));
+  const { dx, dy } =
+    Math.hypot(inside.dx, inside.dy) > NUDGE ? inside : curve.derivatives(Math.min(1 - NUDGE, t + NUDGE));
+  const { x, y } = section.toPanel(t > 1 - NUDGE ? curve.at(t) : inside);
+  // The upper surface has the outside on its left from the nose on, the lower on its right.
+  const size = (surface === 'upper' ? 1 : -1) * Math.hypot(dx, dy);
+  const { cos, sin } = section;
+  return { x, y, nx: (-sin * dx - cos * dy) / size, ny: (cos * dx - sin * dy) / size };
 }
 
 /** The station at which a straight spar that stands square on the root face meets the tip's chord: it may lie outside 0 … 1. */

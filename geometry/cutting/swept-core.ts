@@ -19,7 +19,7 @@ export function deviationAt(wire: Polyline, core: ExpectedCore, share: number): 
   const outline = between(core.outline.left, core.outline.right, share);
   const walls = between(core.walls.left, core.walls.right, share);
   const half = core.halfKerfLeftMm + share * (core.halfKerfRightMm - core.halfKerfLeftMm);
-  const mouths = core.mouths.map(({ left, right, parts }) => ({ line: between(left, right, share), parts }));
+  const mouths = core.mouths.map(({ left, right, part }) => ({ line: between(left, right, share), part }));
   const nearest = nearestOn(wire, half);
   let worst: PlaneDeviation = { share, deviationMm: 0, move: 0 };
   const check = (x: number, y: number) => {
@@ -29,7 +29,7 @@ export function deviationAt(wire: Polyline, core: ExpectedCore, share: number): 
   };
   for (let i = 0; i < outline.x.length; i++) {
     const [x, part] = [at(outline.x, i), at(core.part, i)];
-    if (mouths.some(({ line, parts }) => parts.includes(part) && inMouth(line, x, half / 8))) continue;
+    if (mouths.some((of) => of.part === part && inMouth(of.line, x, half / 8))) continue;
     check(x, at(outline.y, i));
   }
   for (let i = 0; i < walls.x.length; i++) check(at(walls.x, i), at(walls.y, i));

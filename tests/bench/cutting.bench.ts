@@ -1,5 +1,6 @@
 import { planCore } from '#geometry/cutting/planner.ts';
-import { PLAN, planWith } from '#tests/geometry/cutting/plans.ts';
+import { buildRibs } from '#geometry/cutting/ribs.ts';
+import { PLAN, RIBS, planWith } from '#tests/geometry/cutting/plans.ts';
 import { type Bench, type Figure } from './figures.ts';
 
 const IDENTITY = { sheetName: 'Reed wing', versionNumber: 2, checksum: '0123456789abcdef', part: 'core' };
@@ -7,6 +8,7 @@ const WARM_UP = 60;
 const RUNS = 101;
 /** As many points as the goal speaks of: the chain then has about 400 pairs, 400 points at each end. */
 const DENSE = planWith({ cut: { pointsPerSurface: 190 } });
+const RIB_PLAN = planWith({ ribs: { ...RIBS, stations: { kind: 'count', count: 30 } } });
 
 /** Median time of one call in ms, after the engine has compiled it. */
 function medianMs(work: () => unknown): number {
@@ -22,6 +24,10 @@ function medianMs(work: () => unknown): number {
 }
 
 function figures(): Figure[] {
+  const { core } = planCore(RIB_PLAN, IDENTITY);
+  const { ribs } = RIB_PLAN;
+  if (!ribs || !core?.ribs || core.ribs.ribs.length !== 30)
+    throw new Error('The plan does not give 30 ribs.');
   const points = planCore(DENSE, IDENTITY).core?.core.panel.chain.station.length ?? 0;
   return [
     { what: 'points at each end of the plan measured', value: points, unit: 'points' },
@@ -35,6 +41,12 @@ function figures(): Figure[] {
       what: 'whole core plan at the default spacing',
       value: medianMs(() => planCore(PLAN, IDENTITY)),
       unit: 'ms',
+    },
+    {
+      what: 'set of 30 ribs with holes and tabs, packed',
+      value: medianMs(() => buildRibs(RIB_PLAN, core.core, core.features, ribs)),
+      unit: 'ms',
+      goal: 300,
     },
   ];
 }

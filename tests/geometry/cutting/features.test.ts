@@ -1,3 +1,4 @@
+import fc from 'fast-check';
 import { expect, test } from 'vitest';
 import { areaOf, at, between, boxOf } from '#geometry/cutting/arrays.ts';
 import { verticalCut } from '#geometry/cutting/feature-ends.ts';
@@ -5,7 +6,7 @@ import { type Feature, type Plan } from '#geometry/cutting/plan.ts';
 import { type CorePlan, planCore } from '#geometry/cutting/planner.ts';
 import { squareTipStation } from '#geometry/cutting/placing.ts';
 import { distanceTo } from './measuring.ts';
-import { PLAN, SLOT, TUBE, planWith } from './plans.ts';
+import { PLAN, SLOT, TUBE, planWith, plans } from './plans.ts';
 
 const IDENTITY = { sheetName: 'Reed wing', versionNumber: 1, checksum: 'abc', part: 'core' };
 const STRIP: Feature = { kind: 'strip', name: 'Web', rootStation: 0.33, tipStation: 0.33, widthMm: 3 };
@@ -136,6 +137,54 @@ test('slot, strip, tube, hinge and a slot with other stations at the tip: the si
   expect(findings.filter((of) => !of.startsWith('skins-meet'))).toEqual([]);
   expect(core.features).toHaveLength(5);
   expect(core.cut!.simulation.largestDeviationMm).toBeLessThanOrEqual(0.02);
+});
+
+test('random panels with a tube, a slot and a hinge: what has no error cuts as planned', () => {
+  let clean = 0;
+  fc.assert(
+    fc.property(
+      plans,
+      fc.double({ min: 0.2, max: 0.5, noNaN: true }),
+      fc.constantFrom('upper', 'lower'),
+      (plan, station, surface) => {
+        const slot = {
+          ...SLOT,
+          surface,
+          rootStation: station,
+          tipStation: station,
+          rootDepthMm: 2.5,
+          tipDepthMm: 2.5,
+        };
+        const features = [{ ...TUBE, rootStation: 0.6, tipStation: 0.6, diameterMm: 5 }, slot, HINGE];
+        const { core, findings } = planCore(
+          { ...plan, features, limits: { ...plan.limits, minimumWebMm: 0.3 } },
+          IDENTITY,
+        );
+        const refused = findings.filter(
+          ({ severity, path }) => severity === 'error' && path.startsWith('features'),
+        );
+        if (refused.length > 0) return;
+        clean += 1;
+        expect(core!.cut!.simulation.largestDeviationMm).toBeLessThanOrEqual(0.02);
+      },
+    ),
+    { numRuns: 40, seed: 41 },
+  );
+  expect(clean).toBeGreaterThan(20);
+}, 60_000);
+
+test('two spars that pass through one another between the ends are a finding', () => {
+  const crossing = { ...TUBE, rootStation: 0.45, tipStation: 0.3 };
+  expect(
+    planned([{ ...SLOT, rootDepthMm: 12, tipDepthMm: 8 }, crossing], { limits: { minimumWebMm: 0.3 } })
+      .findings,
+  ).toContain('features-overlap features.1.rootStation');
+});
+
+test('a slot shallower than half the kerf is a finding with its field', () => {
+  expect(planned([{ ...SLOT, tipDepthMm: 0.3 }]).findings).toContain(
+    'shallower-than-kerf features.0.tipDepthMm',
+  );
 });
 
 test('a slot behind the trailing edge, one that breaks through, and a tube outside are findings with their field', () => {
