@@ -24,7 +24,7 @@ import { sectionHandlers } from './sections/routes.ts';
 import { shopHandlers } from './shop/routes.ts';
 
 /** What the application is made of; nothing else is read from the environment. */
-export interface AppDependencies {
+interface AppDependencies {
   readonly config: Pick<Config, 'authSecret' | 'publicUrl' | 'trustProxy'>;
   readonly knex: Knex;
   readonly logger: Logger;

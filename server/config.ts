@@ -58,7 +58,7 @@ export const settings = [
 ] as const satisfies readonly Setting[];
 
 export const defaultPort = 8000;
-export const logLevels = ['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent'] as const;
+const logLevels = ['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent'] as const;
 
 /** What the environment says, checked. Absent values that are made or found later are null. */
 export interface Settings {

@@ -7,7 +7,7 @@ import { mariadbServer, providePrograms } from '#server/start/packages.ts';
 import { longSecret } from '#server/start/secrets.ts';
 
 /** A MariaDB server for one run of tests or measurements. */
-export interface Throwaway {
+interface Throwaway {
   /** With an account that may make and drop databases; the path names a database to start from. */
   readonly url: string;
   /** Ends the server and removes its files. */

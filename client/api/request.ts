@@ -16,14 +16,14 @@ export type Reply<Name extends EndpointName> = Definition<Name>['reply'] extends
   ? z.output<Schema>
   : undefined;
 
-export interface RequestInput<Name extends EndpointName> {
+interface RequestInput<Name extends EndpointName> {
   readonly params?: InputOf<Name, 'params'> | undefined;
   readonly query?: InputOf<Name, 'query'> | undefined;
   readonly body?: InputOf<Name, 'body'> | undefined;
   readonly signal?: AbortSignal | undefined;
 }
 
-export type FileEndpointName = 'datFile' | 'dxfFile' | 'svgFile';
+type FileEndpointName = 'datFile' | 'dxfFile' | 'svgFile';
 
 const sessionEndListeners = new Set<() => void>();
 

@@ -17,9 +17,9 @@ import { ProblemError, request } from './request.ts';
 
 /** What a list of sections is asked for; the cursor belongs to the pages, not to the question. */
 export type SectionListFilter = Partial<Omit<SectionListQuery, 'cursor'>>;
-export type SectionCreate = z.input<typeof sectionCreateSchema>;
-export type SectionChange = z.input<typeof sectionChangeSchema>;
-export type VersionCreate = z.input<typeof versionCreateSchema>;
+type SectionCreate = z.input<typeof sectionCreateSchema>;
+type SectionChange = z.input<typeof sectionChangeSchema>;
+type VersionCreate = z.input<typeof versionCreateSchema>;
 export type DraftInput = z.input<typeof draftInputSchema>;
 
 const keys = {

@@ -1,5 +1,5 @@
 /** A number typed without a unit, or an amount of one unit. Amounts with a unit are in the field's base unit. */
-export type Term =
+type Term =
   { readonly unit: null; readonly amount: number } | { readonly unit: string; readonly amount: number };
 
 export interface UnitTable {

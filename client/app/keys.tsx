@@ -8,7 +8,7 @@ import {
   useState,
 } from 'react';
 
-export interface KeyEntry {
+interface KeyEntry {
   /** As printed on the keys: "Shift", "↑", "Z". Several are pressed together. */
   readonly keys: readonly string[];
   /** What it does, in a few words. */

@@ -1,6 +1,6 @@
 import { OfflineError, problemOf, ProblemError, send } from '#client/api/request.ts';
 
-export type SignInRefusal = 'wrong' | 'too-many' | 'unavailable';
+type SignInRefusal = 'wrong' | 'too-many' | 'unavailable';
 
 /** Why a sign-in did not happen, apart from having no answer at all (OfflineError). */
 export class SignInError extends Error {

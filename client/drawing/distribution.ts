@@ -4,7 +4,7 @@ import { stationOf } from '#geometry/shapes/outline.ts';
 import { type SectionDrawing } from './section-drawing.ts';
 
 /** Thickness and camber along the chord, square to the sheet's chord line; fractions of chord. */
-export interface ThicknessDistribution {
+interface ThicknessDistribution {
   readonly thickness: readonly Point[];
   readonly camber: readonly Point[];
 }
@@ -55,7 +55,7 @@ export function thicknessDistribution({ contour }: SectionDrawing): ThicknessDis
 }
 
 /** Curvature along both surfaces in units of 1/chord, positive where the section is convex. */
-export interface CurvatureDistribution {
+interface CurvatureDistribution {
   readonly upper: readonly Point[];
   readonly lower: readonly Point[];
 }
@@ -78,7 +78,7 @@ export function curvatureDistribution({ outline }: SectionDrawing): CurvatureDis
 }
 
 /** One tooth of the curvature comb, in fractions of chord. */
-export interface CombTooth {
+interface CombTooth {
   readonly root: Point;
   readonly tip: Point;
 }

@@ -24,7 +24,7 @@ export const DASH = {
 export const ARROW = { length: 8, halfWidth: 1.7 } as const;
 
 /** Character advance of the typeface as a fraction of its size; it has one width for all characters. */
-export const ADVANCE = 0.6;
+const ADVANCE = 0.6;
 
 /** Width of a text on the sheet in pixels, exact because the typeface is monospaced. */
 export function textWidth(text: string, size: number): number {

@@ -33,7 +33,7 @@ export function sectionDimensions(scene: Scene): DimensionSpec<DimensionId>[] {
 }
 
 /** A length as it stands on a drawing: without its unit, which the sheet states once. */
-export function drawnLength(mm: number, units: Units, decimals: number): string {
+function drawnLength(mm: number, units: Units, decimals: number): string {
   return units === 'mm' ? formatNumber(mm, decimals) : formatNumber(mm / MM_PER_INCH, decimals + 1);
 }
 

@@ -60,7 +60,7 @@ export function scaleOf(shape: CstShape): number {
 }
 
 /** Direction of the shape's own chord on the sheet. */
-export function chordAxis(shape: CstShape): Point {
+function chordAxis(shape: CstShape): Point {
   const angle = ((shape.placement?.rotationDeg ?? 0) * Math.PI) / 180;
   return { x: Math.cos(angle), y: Math.sin(angle) };
 }

@@ -2,10 +2,10 @@ import { memo } from 'react';
 import { textWidth } from './line-types.ts';
 import { type SheetLayout } from './sheet-layout.ts';
 
-const SIZE = 11;
-const LINE_HEIGHT = 16;
+const WIDE = { size: 11, lineHeight: 16, lines: 6, inset: 14, bottom: 12 };
+const COMPACT = { size: 10, lineHeight: 13, lines: 2, inset: 8, bottom: 7 };
 
-/** The sheet's own remarks: at the lower left beside the title block, or in one line above it on a narrow sheet. */
+/** The sheet's own remarks: at the lower left beside the title block, or in two lines above it on a narrow sheet. */
 export const SheetRemarks = memo(function SheetRemarks({
   layout,
   remarks,
@@ -14,14 +14,13 @@ export const SheetRemarks = memo(function SheetRemarks({
   remarks: readonly string[];
 }) {
   const { remark, compact } = layout;
-  const size = compact ? 10 : SIZE;
-  const lines = wrapped(remarks, remark.width - 28, size);
-  const shown = compact ? lines.slice(0, 1) : lines.slice(-6);
-  const last = remark.y + remark.height - (compact ? 7 : 12);
+  const { size, lineHeight, lines, inset, bottom } = compact ? COMPACT : WIDE;
+  const shown = wrapped(remarks, remark.width - 2 * inset, size).slice(0, lines);
+  const last = remark.y + remark.height - bottom;
   return (
     <text className="fill-graphite" fontSize={size}>
       {shown.map((line, i) => (
-        <tspan key={line} x={remark.x + (compact ? 8 : 14)} y={last - (shown.length - 1 - i) * LINE_HEIGHT}>
+        <tspan key={line} x={remark.x + inset} y={last - (shown.length - 1 - i) * lineHeight}>
           {line}
         </tspan>
       ))}
@@ -30,7 +29,7 @@ export const SheetRemarks = memo(function SheetRemarks({
 });
 
 /** Sentences joined to lines no wider than the room. */
-export function wrapped(sentences: readonly string[], room: number, size: number): string[] {
+function wrapped(sentences: readonly string[], room: number, size: number): string[] {
   const lines: string[] = [];
   for (const sentence of sentences) {
     const last = lines.at(-1);

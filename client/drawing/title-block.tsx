@@ -89,7 +89,7 @@ function compactCells(fields: TitleBlockFields, chord: string, scale: string): C
 }
 
 /** Twelve digits in groups of four, as the exported files carry them. */
-export function checksumText(checksum: string | null): string {
+function checksumText(checksum: string | null): string {
   return checksum === null ? 'not saved' : (checksum.slice(0, 12).match(/.{4}/g) ?? []).join(' ');
 }
 

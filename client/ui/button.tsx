@@ -1,7 +1,7 @@
 import { type ComponentProps } from 'react';
 
-export type ButtonVariant = 'primary' | 'plain' | 'quiet' | 'danger';
-export type ButtonSize = 'small' | 'normal' | 'large';
+type ButtonVariant = 'primary' | 'plain' | 'quiet' | 'danger';
+type ButtonSize = 'small' | 'normal' | 'large';
 
 const VARIANTS: Readonly<Record<ButtonVariant, string>> = {
   primary: 'border-wire bg-wire font-semibold text-on-wire hover:border-ink',

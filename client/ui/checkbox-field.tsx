@@ -7,7 +7,7 @@ interface OwnProps {
   error?: string | undefined;
   className?: string | undefined;
 }
-export type CheckboxFieldProps = OwnProps & Omit<ComponentProps<'input'>, keyof OwnProps | 'id' | 'type'>;
+type CheckboxFieldProps = OwnProps & Omit<ComponentProps<'input'>, keyof OwnProps | 'id' | 'type'>;
 
 /** A native checkbox with its label at the right; the whole row can be pressed. */
 export function CheckboxField({ label, hint, error, className = '', ...rest }: CheckboxFieldProps) {

@@ -1,7 +1,7 @@
 import { type ReactNode, useEffect, useId, useRef } from 'react';
 import { Button } from './button.tsx';
 
-export interface DialogProps {
+interface DialogProps {
   title: string;
   /** Called once when the dialog is left: Esc, the close button, or a press on the backdrop when `light`. */
   onClose: () => void;

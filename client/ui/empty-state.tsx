@@ -1,6 +1,6 @@
 import { type ReactNode } from 'react';
 
-export interface EmptyStateProps {
+interface EmptyStateProps {
   title: string;
   children?: ReactNode;
   /** The next step, usually one button. */

@@ -18,7 +18,7 @@ function ended(sentence: string): string {
   return /[.!?]$/.test(sentence) ? sentence : `${sentence}.`;
 }
 
-export interface ErrorStateProps {
+interface ErrorStateProps {
   error: unknown;
   retry?: (() => void) | undefined;
   /** What could not be done, such as "The sections could not be loaded." */

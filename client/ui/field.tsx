@@ -13,7 +13,7 @@ export function describedBy(id: string, hint: ReactNode, error: string | undefin
   return ids.length === 0 ? undefined : ids.join(' ');
 }
 
-export interface FieldFrameProps {
+interface FieldFrameProps {
   id: string;
   label: string;
   hint?: ReactNode;

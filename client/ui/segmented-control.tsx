@@ -6,7 +6,7 @@ export interface Segment<Value extends string> {
   readonly disabled?: boolean | undefined;
 }
 
-export interface SegmentedControlProps<Value extends string> {
+interface SegmentedControlProps<Value extends string> {
   /** Spoken name of the group; shown above it unless `hideLabel`. */
   label: string;
   segments: readonly Segment<Value>[];

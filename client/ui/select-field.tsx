@@ -12,7 +12,7 @@ interface OwnProps {
   size?: 'normal' | 'large' | undefined;
   className?: string | undefined;
 }
-export type SelectFieldProps = OwnProps & Omit<ComponentProps<'select'>, keyof OwnProps | 'id' | 'children'>;
+type SelectFieldProps = OwnProps & Omit<ComponentProps<'select'>, keyof OwnProps | 'id' | 'children'>;
 
 /** A labelled native select. */
 export function SelectField({

@@ -1,6 +1,6 @@
 import { type VersionStatus } from '#server/contracts/sections.ts';
 
-export type Status = VersionStatus | 'archived';
+type Status = VersionStatus | 'archived';
 
 const COLOURS: Readonly<Record<Status, string>> = {
   released: 'text-spruce',

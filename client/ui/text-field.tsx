@@ -8,8 +8,8 @@ interface CommonProps {
   /** Classes of the frame, for its place in a layout. */
   className?: string | undefined;
 }
-export type TextFieldProps = CommonProps & Omit<ComponentProps<'input'>, keyof CommonProps | 'id'>;
-export type TextAreaFieldProps = CommonProps & Omit<ComponentProps<'textarea'>, keyof CommonProps | 'id'>;
+type TextFieldProps = CommonProps & Omit<ComponentProps<'input'>, keyof CommonProps | 'id'>;
+type TextAreaFieldProps = CommonProps & Omit<ComponentProps<'textarea'>, keyof CommonProps | 'id'>;
 
 /** A labelled line of text; takes the props of a form library's `register`. */
 export function TextField({ label, hint, error, className, type = 'text', ...rest }: TextFieldProps) {

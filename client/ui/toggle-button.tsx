@@ -1,9 +1,6 @@
 import { type ButtonProps, buttonClass } from './button.tsx';
 
-export interface ToggleButtonProps extends Omit<
-  ButtonProps,
-  'variant' | 'busy' | 'onClick' | 'aria-pressed'
-> {
+interface ToggleButtonProps extends Omit<ButtonProps, 'variant' | 'busy' | 'onClick' | 'aria-pressed'> {
   pressed: boolean;
   onPressedChange: (pressed: boolean) => void;
 }

@@ -5,7 +5,7 @@ import { type SectionVersion } from '#server/contracts/sections.ts';
 import { type ExportFields, exportSchemas, optionsOf } from './export-fields.ts';
 
 /** What a version's files say about where they come from; the server writes the same. */
-export function identityOf(version: SectionVersion): FileIdentity {
+function identityOf(version: SectionVersion): FileIdentity {
   return {
     sectionName: version.sectionName,
     versionNumber: version.number,
@@ -15,7 +15,7 @@ export function identityOf(version: SectionVersion): FileIdentity {
   };
 }
 
-export interface Preview {
+interface Preview {
   /** The file as the fields would make it, or null while one of them is refused. */
   readonly file: ExportFile | null;
   /** Why the options, each good in itself, make no file together; empty when a field of its own is at fault. */

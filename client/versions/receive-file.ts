@@ -11,7 +11,7 @@ export class ChecksumError extends Error {
   }
 }
 
-export interface ReceivedFile {
+interface ReceivedFile {
   readonly bytes: Uint8Array<ArrayBuffer>;
   readonly fileName: string;
   readonly mediaType: string;
@@ -21,7 +21,7 @@ export interface ReceivedFile {
   readonly verified: boolean;
 }
 
-export interface ReceiveOptions {
+interface ReceiveOptions {
   readonly signal?: AbortSignal;
   /** Called with bytes received so far and the announced total, null when the server gave none. */
   readonly onProgress?: (received: number, total: number | null) => void;

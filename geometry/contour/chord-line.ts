@@ -6,7 +6,7 @@ import { safeguardedRoot } from './roots.ts';
  * The chord line of an outline: from the nose point, where the surfaces meet, to the middle of the trailing edge. Stations are
  * measured along it in fractions of its length, ordinates square to it in fractions of the sheet's chord.
  */
-export interface ChordLine {
+interface ChordLine {
   readonly nose: Point;
   readonly length: number;
   /** Unit vector along the chord, towards the trailing edge. */
@@ -32,7 +32,7 @@ export function ordinateOn({ nose, along }: ChordLine, point: Point): number {
 }
 
 /** A surface seen from the chord line: which part of it has one ordinate for each station. */
-export interface Side {
+interface Side {
   readonly line: ChordLine;
   readonly surface: SurfaceCurve;
   /** t of its foremost point, 0 unless the nose reaches ahead of the chord line's end. */

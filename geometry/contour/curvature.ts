@@ -3,7 +3,7 @@ import { type CurvePoint, type Outline, type SurfaceCurve } from '../shapes/outl
 import { goldenMaximum } from './roots.ts';
 
 /** A radius of curvature in fractions of chord and the point of the outline that has it. */
-export interface RadiusAt {
+interface RadiusAt {
   readonly radius: number;
   readonly at: Point;
 }

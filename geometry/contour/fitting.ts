@@ -12,7 +12,7 @@ import { checkShape } from '../shapes/shape.ts';
 import { safeguardedRoot } from './roots.ts';
 
 /** A free-form shape fitted to an outline, and how well. */
-export interface CstFit {
+interface CstFit {
   /** With a placement when the source's true chord is not the line from (0, 0) to (1, 0), so that the shape lies where the source lay. */
   readonly shape: CstShape;
   /** Angle of the true chord, counter-clockwise from the sheet's chord, degrees. */

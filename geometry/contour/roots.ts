@@ -1,5 +1,5 @@
 /** A function's value and its slope at one place. */
-export interface ValueAndSlope {
+interface ValueAndSlope {
   readonly value: number;
   readonly slope: number;
 }

@@ -5,7 +5,7 @@ import type { DatOptions } from './options.ts';
 import { fixed, singleLine } from './text.ts';
 
 /** How the points of a coordinate file follow each other: once round the nose, or from the nose to the trailing edge twice. */
-export type DatOrder = DatOptions['order'];
+type DatOrder = DatOptions['order'];
 
 /**
  * A coordinate file: one line with the name, then a line with `x y` for each point (common practice).
@@ -55,7 +55,7 @@ function refuseCoincident(xs: readonly string[], ys: readonly string[], decimals
 }
 
 /** What a coordinate file says. */
-export interface DatContent {
+interface DatContent {
   /** The name line, or null when the file begins with numbers. */
   readonly name: string | null;
   /** The order in which the file had its points. */

@@ -66,7 +66,7 @@ export class DxfTags {
   }
 }
 
-export interface DxfVertex {
+interface DxfVertex {
   readonly x: string;
   readonly y: string;
   readonly bulge: number;

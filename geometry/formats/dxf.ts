@@ -2,7 +2,7 @@ import type { Drawing } from './drawing.ts';
 import { writeR12 } from './dxf-r12.ts';
 import { writeR2000 } from './dxf-r2000.ts';
 
-export type DxfRelease = 'r12' | 'r2000';
+type DxfRelease = 'r12' | 'r2000';
 
 /**
  * A DXF drawing in mm: the outline as one closed polyline on layer OUTLINE, chord line and mean camber line as centre lines on

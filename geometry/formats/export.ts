@@ -23,8 +23,7 @@ import { sectionDrawing } from './section-drawing.ts';
 import { SVG_DECIMALS, writeSvg } from './svg.ts';
 
 export { fileNameOf } from './file-name.ts';
-export { LAYERS, datOptionsSchema, dxfOptionsSchema, svgOptionsSchema } from './options.ts';
-export type { DatOptions, DxfOptions, Layer, SvgOptions } from './options.ts';
+export { datOptionsSchema, dxfOptionsSchema, svgOptionsSchema } from './options.ts';
 export type { FileIdentity } from './identity.ts';
 
 /** The options of each format, as the schemas give them. */
@@ -36,7 +35,7 @@ export interface ExportOptions {
 export type ExportFormat = keyof ExportOptions;
 
 /** What can be said about a file before it is opened. Measured on the rounded coordinates that stand in the file. */
-export interface ExportFacts {
+interface ExportFacts {
   /** Different points of the outline. */
   readonly points: number;
   /** Pieces of the outline that are arcs; 0 for straight pieces only. */

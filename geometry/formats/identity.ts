@@ -14,7 +14,7 @@ export interface FileIdentity {
 }
 
 /** How the coordinates in a file were made. */
-export interface FileScale {
+interface FileScale {
   /** Chord in mm; null when the coordinates are fractions of chord. */
   readonly chordMm: number | null;
   /** What the spacing of the points obeys, for instance `tolerance 0.01 mm` or `100 points per surface`. */

@@ -5,7 +5,7 @@ import { type FileIdentity, headerLines, titleOf } from './identity.ts';
 import { type Layer } from './options.ts';
 
 /** What a drawing of a section is made of; lengths in mm. */
-export interface SectionDrawingParts {
+interface SectionDrawingParts {
   readonly outline: Outline;
   readonly identity: FileIdentity;
   readonly chordMm: number;

@@ -74,7 +74,7 @@ function largestClassValue({ n1, n2 }: Gap, from: number, to: number): number {
 const POINTS = 200;
 
 /** What a thick 4-digit section with much camber far forward or aft does on its lower side: it folds back, or crosses itself. */
-export type Naca4Fault = 'folds' | 'crosses';
+type Naca4Fault = 'folds' | 'crosses';
 
 /**
  * Whether the lower surface of a 4-digit shape folds back (its station decreases on the way aft, so that no thickness is defined there)

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 
 /** The lowest and highest value a field accepts, both included. */
-export interface Range {
+interface Range {
   readonly min: number;
   readonly max: number;
 }

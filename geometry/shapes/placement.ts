@@ -2,7 +2,7 @@ import { type Point } from '../point.ts';
 import { type Placement } from './cst-schema.ts';
 
 /** A similarity of the plane: x' = x + a·u − b·v, y' = y + b·u + a·v. */
-export interface Similarity {
+interface Similarity {
   readonly x: number;
   readonly y: number;
   readonly a: number;

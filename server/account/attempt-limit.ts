@@ -4,7 +4,7 @@ interface Attempts {
 }
 
 /** How failed attempts are slowed down. */
-export interface AttemptLimitOptions {
+interface AttemptLimitOptions {
   /** Failures without any wait. */
   readonly free: number;
   /** Wait after the first failure beyond those; it doubles with each further one. */

@@ -2,7 +2,7 @@ import { type Me, type Preferences } from '#server/contracts/people.ts';
 import { type Person } from './person.ts';
 
 /** What a session says about itself; the rest is read from the database at every request. */
-export interface SessionClaim {
+interface SessionClaim {
   readonly personId: string;
   readonly epoch: number;
 }

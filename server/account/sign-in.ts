@@ -8,7 +8,7 @@ import { isPassword } from './passwords.ts';
 import { personByEmail } from './store.ts';
 
 /** How long a session lasts, in seconds; GET /auth/session lengthens it. */
-export const SESSION_SECONDS = 14 * 24 * 60 * 60;
+const SESSION_SECONDS = 14 * 24 * 60 * 60;
 
 interface SignedIn {
   readonly id: string;

@@ -14,7 +14,7 @@ import {
 } from './common.ts';
 
 export const versionStatuses = ['draft', 'released', 'superseded', 'withdrawn'] as const;
-export const versionStatusSchema = z.enum(versionStatuses);
+const versionStatusSchema = z.enum(versionStatuses);
 export type VersionStatus = z.infer<typeof versionStatusSchema>;
 
 /**
@@ -117,7 +117,7 @@ export const withdrawSchema = z.strictObject({
   reason: noteSchema.min(1, 'Say why the version is withdrawn.'),
 });
 
-export const downloadSchema = z.object({
+const downloadSchema = z.object({
   id: idSchema,
   person: personRefSchema,
   fileName: z.string(),

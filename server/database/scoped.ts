@@ -1,7 +1,7 @@
 import { type Knex } from 'knex';
 
 /** Tables whose rows belong to a workshop: all but the workshops themselves. */
-export type WorkshopTable =
+type WorkshopTable =
   | 'people'
   | 'sections'
   | 'section_versions'
@@ -15,7 +15,7 @@ export type WorkshopTable =
 type NewRow = Readonly<Record<string, string | number | boolean | Date | null>>;
 
 /** The tables of one workshop. */
-export interface Scope {
+interface Scope {
   /** Selects, updates or deletes in a table of this workshop. An alias names the table in joins. */
   table(name: WorkshopTable, options?: { as?: string; index?: string }): Knex.QueryBuilder;
   /** Adds a row to this workshop. */

@@ -8,7 +8,7 @@ import { continueBehind, decodeCursor, encodeCursor, pageOfRows } from '#server/
 import { joinScoped, scoped } from '#server/database/scoped.ts';
 import { type Author } from '#server/sections/rules.ts';
 
-export interface DownloadInput {
+interface DownloadInput {
   readonly sectionId: string;
   readonly versionNumber: number;
   readonly fileName: string;

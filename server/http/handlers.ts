@@ -25,13 +25,13 @@ export interface FileReply {
   record(checksum: string): Promise<void>;
 }
 
-export type ReplyOf<Name extends EndpointName> =
+type ReplyOf<Name extends EndpointName> =
   Definition<Name> extends { file: string }
     ? FileReply
     : Definition<Name>['reply'] extends infer Schema extends z.ZodType
       ? z.output<Schema>
       : undefined | void;
 
-export type Handler<Name extends EndpointName> = (call: Call<Name>) => Promise<ReplyOf<Name>>;
+type Handler<Name extends EndpointName> = (call: Call<Name>) => Promise<ReplyOf<Name>>;
 /** One handler for every endpoint of the table. */
 export type Handlers = { readonly [Name in EndpointName]: Handler<Name> };

@@ -39,7 +39,7 @@ function refusalOf(error: unknown): Refusal {
 }
 
 /** Sends a refusal as problem details (RFC 9457). `type` points to the code's entry in the OpenAPI document. */
-export function sendProblem(response: Response, refusal: Refusal): void {
+function sendProblem(response: Response, refusal: Refusal): void {
   const { code, details } = refusal;
   const { status, title } = problems[code];
   const { detail, errors, retryAfterSeconds, members } = details;

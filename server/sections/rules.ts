@@ -26,7 +26,7 @@ export function statusesFor(reach: Reach): readonly VersionStatus[] {
 }
 
 /** Where a save would go, as it is known under the lock. */
-export interface SaveTarget {
+interface SaveTarget {
   readonly latestNumber: number;
   readonly archived: boolean;
   /** The shape of the version that the save is based on; null when there is none of that number. */

@@ -11,7 +11,7 @@ import { addVersion, latestColumns } from './versions/rows.ts';
 import { once } from './versions/once.ts';
 
 /** What decisions about a section need to know of it. */
-export interface SectionState {
+interface SectionState {
   readonly id: string;
   readonly latestNumber: number;
   readonly latestStatus: VersionStatus;
@@ -60,7 +60,7 @@ export async function sectionState(
   };
 }
 
-export interface SectionInput {
+interface SectionInput {
   readonly name: string;
   readonly purpose: string;
   readonly shape: Shape;
@@ -104,7 +104,7 @@ export async function createSection(db: Knex, author: Author, input: SectionInpu
   return findSection(db, author.workshopId, made.sectionId, 'all');
 }
 
-export interface SectionChange {
+interface SectionChange {
   readonly name?: string | undefined;
   readonly purpose?: string | undefined;
   readonly archived?: boolean | undefined;

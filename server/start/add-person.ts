@@ -23,7 +23,7 @@ const newPersonSchema = z.object({
   name: line('name'),
   email: z.email('--email is the address to sign in with').max(254, '--email is too long'),
 });
-export type NewPerson = z.infer<typeof newPersonSchema>;
+type NewPerson = z.infer<typeof newPersonSchema>;
 
 const usage = 'npm run add-person -- --workshop "Name" --role owner --name "Name" --email name@place.example';
 

@@ -2,7 +2,7 @@ import { findProgram, run } from './processes.mjs';
 import { adviceFor, StartError, step } from './steps.mjs';
 
 /** A program that Debian provides: the name of the binary and of the package that holds it. */
-export interface Program {
+interface Program {
   readonly binary: string;
   readonly package: string;
 }

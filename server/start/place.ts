@@ -24,7 +24,7 @@ function prepare(folder: string): string {
 }
 
 /** What decides between the checkout's folder and the far one. */
-export interface Circumstances {
+interface Circumstances {
   /** DATA_DIR names the folder. */
   readonly isGiven: boolean;
   readonly canEnterNear: boolean;

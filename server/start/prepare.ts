@@ -19,7 +19,7 @@ export interface Launch {
 }
 
 /** All that must be there before the application can listen. */
-export interface Prepared {
+interface Prepared {
   readonly settings: Settings;
   readonly databaseUrl: string;
   readonly authSecret: string;

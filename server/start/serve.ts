@@ -9,7 +9,7 @@ import { isPortTaken, listenFrom, listenOn, portsTried } from './ports.ts';
 import { adviceFor, StartError } from './steps.mjs';
 
 /** The application, listening. */
-export interface Running {
+interface Running {
   readonly address: string;
   readonly port: number;
   /** Answers what is under way, takes nothing new, and resolves when all connections are closed. */

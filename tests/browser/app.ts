@@ -8,7 +8,7 @@ import { seedDemo } from '#server/start/demo/seed.ts';
 import { createTestDatabase, type TestDatabase } from '#tests/database.ts';
 import { type Watch, watch } from './watch.ts';
 
-export const password = 'marsh-reed-heron-7';
+const password = 'marsh-reed-heron-7';
 export type DemoRole = 'owner' | 'designer' | 'builder' | 'technician';
 
 /** The whole application with the demo workshop in a database of its own, and a browser to use it with. */

@@ -19,7 +19,7 @@ export async function placeOf(mark: Locator): Promise<Place> {
 }
 
 /** What a drag has done, seen while the button is still held. */
-export interface Dragged {
+interface Dragged {
   readonly pointer: Place;
   readonly mark: Place;
   /** Distance of the drawn outline from the pointer, pixels. */
@@ -57,7 +57,7 @@ export async function valueOf(mark: Locator): Promise<number> {
 }
 
 /** How far the drawn outline is from a place on the screen, in pixels: the nearest of many points along its path. */
-export async function distanceFromOutline(page: Page, place: Place): Promise<number> {
+async function distanceFromOutline(page: Page, place: Place): Promise<number> {
   return page.locator('svg [data-part="outline"]:visible').evaluate((element, { x, y }) => {
     const path = element as SVGPathElement;
     const matrix = path.getScreenCTM();

@@ -31,7 +31,7 @@ export const THICKNESS_FORMS: readonly (readonly [number, number, number, number
 ];
 
 /** Station, upper ordinate, lower ordinate. */
-export type CamberedRow = readonly [number, number, number];
+type CamberedRow = readonly [number, number, number];
 
 export const ORDINATES_2412: readonly CamberedRow[] = [
   [1.25, 2.15, -1.65],

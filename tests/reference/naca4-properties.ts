@@ -3,7 +3,7 @@
  * leading end of the mean line.
  * Mark: computed, outside this program, from the formulas of NACA Report 460. Good to the last digit printed.
  */
-export interface SectionProperties {
+interface SectionProperties {
   readonly digits: string;
   readonly edge: 'open' | 'closed';
   readonly perimeter: number;

@@ -16,7 +16,7 @@ export type SendResult =
   | { readonly kind: 'refused'; readonly reason: string };
 
 /** What the keeper needs from outside; the tests give it a clock of their own. */
-export interface KeeperPorts {
+interface KeeperPorts {
   send(draft: DraftInput): Promise<SendResult>;
   /** Sends once more while the page goes away; nobody waits for the answer. */
   sendLast(draft: DraftInput): void;

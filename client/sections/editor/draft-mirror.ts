@@ -4,7 +4,7 @@ import { type DraftInput } from '#client/api/sections.ts';
 import { sameShape } from './present.ts';
 
 const mirroredSchema = draftInputSchema.extend({ at: z.number() });
-export type MirroredDraft = z.infer<typeof mirroredSchema>;
+type MirroredDraft = z.infer<typeof mirroredSchema>;
 
 /** The copy in the browser of work that the server does not have yet, one for each person and section. */
 export interface DraftMirror {

@@ -9,7 +9,7 @@ import { type Notice } from './notices.ts';
 import { convertToDigits, convertToFreeForm, withEdge, withEqualNose, withOrder } from './operations.ts';
 import { type Edit, type Present, samePresent } from './present.ts';
 
-export interface Drag {
+interface Drag {
   readonly handle: HandleId;
   readonly start: Present;
   /** Where the handle was when it was taken, in fractions of chord. */

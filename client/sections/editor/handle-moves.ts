@@ -26,7 +26,7 @@ import { type Notice } from './notices.ts';
 import { checked } from './validity.ts';
 
 /** A move of a handle: what it makes of the section and where the handle then stands. */
-export interface Move extends Edit {
+interface Move extends Edit {
   readonly at: Point | null;
 }
 
@@ -37,7 +37,7 @@ export interface NudgeSteps {
 }
 
 /** One arrow key step in fractions of chord; with Shift ten of them. */
-export const NUDGE = 0.0005;
+const NUDGE = 0.0005;
 export const COARSE = 10;
 
 /**

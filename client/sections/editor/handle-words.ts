@@ -9,7 +9,7 @@ import { fieldRange } from './fields.ts';
 import { type HandleId, weightOf } from './handle-ids.ts';
 
 /** What a handle says of itself: its name, its main value for a slider, and its value in words. */
-export interface HandleWords {
+interface HandleWords {
   readonly name: string;
   readonly value: number;
   readonly min: number;

@@ -16,7 +16,7 @@ export type Notice =
   | { readonly code: 'digits-taken'; readonly deviation: number }
   | { readonly code: 'restored'; readonly number: number };
 
-export type NoticeTone = 'info' | 'caution';
+type NoticeTone = 'info' | 'caution';
 
 /** The sentence for a notice, with lengths at the chord in use. */
 export function noticeText(notice: Notice, chordMm: number, units: Units): string {

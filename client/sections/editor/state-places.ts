@@ -6,7 +6,7 @@ import { type Present } from './present.ts';
  * Where a piece of the editor's state is kept: `view` ends with the page, `browser` stays on this computer,
  * `draft` is kept on the server for the person (and mirrored in the browser until the server has it).
  */
-export type Place = 'view' | 'browser' | 'draft';
+type Place = 'view' | 'browser' | 'draft';
 
 /** Every key has its row; a new key without one does not compile. */
 export const KEPT: Record<

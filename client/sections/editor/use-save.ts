@@ -11,7 +11,7 @@ import { type Shape } from '#geometry/shapes/shape.ts';
 import { type EditorAction } from './editor-state.ts';
 import { closeForm } from './present.ts';
 
-export type SaveStep =
+type SaveStep =
   | { readonly step: 'closed' }
   | { readonly step: 'asking'; readonly refusal: string | null }
   | { readonly step: 'conflict'; readonly latest: SectionVersion };

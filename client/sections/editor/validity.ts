@@ -2,7 +2,7 @@ import { ShapeError } from '#geometry/shapes/error.ts';
 import { checkShape, type Shape } from '#geometry/shapes/shape.ts';
 import { shapeSentence } from '#client/app/shape-words.ts';
 
-export type Checked =
+type Checked =
   { readonly shape: Shape; readonly reason?: never } | { readonly reason: string; readonly shape?: never };
 
 /** The shape when it is valid, else a plain sentence why it is not. */

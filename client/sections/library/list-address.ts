@@ -16,12 +16,12 @@ const addressSchema = z.object({
 });
 export type ListAddress = z.infer<typeof addressSchema>;
 export type Sort = ListAddress['sort'];
-export type Direction = NonNullable<ListAddress['direction']>;
+type Direction = NonNullable<ListAddress['direction']>;
 
 const PAGE_SIZE = 50;
 
 /** The way a column is sorted when it is chosen: names from A, everything else from the newest or largest. */
-export function firstDirection(sort: Sort): Direction {
+function firstDirection(sort: Sort): Direction {
   return sort === 'name' ? 'ascending' : 'descending';
 }
 

@@ -6,7 +6,7 @@ import { parseDesignation } from '#geometry/shapes/naca4.ts';
 import { checkShape, outlineOf, type Shape } from '#geometry/shapes/shape.ts';
 import { purposeSchema, sectionNameSchema } from '#server/contracts/common.ts';
 
-export const starts = ['designation', 'values', 'free'] as const;
+const starts = ['designation', 'values', 'free'] as const;
 export type Start = (typeof starts)[number];
 
 /** What the dialog asks for; the shape that comes of it is checked by the shape's own schema. */
@@ -36,7 +36,7 @@ export const NEW_SECTION: NewSectionForm = {
 };
 
 /** The fields that can be at fault for a shape. */
-export type ShapeField = 'designation' | 'maxCamber' | 'maxCamberPosition' | 'maxThickness' | 'order';
+type ShapeField = 'designation' | 'maxCamber' | 'maxCamberPosition' | 'maxThickness' | 'order';
 export type StartingShape =
   | {
       readonly shape: Shape;

@@ -3,7 +3,7 @@ import { Button } from '#client/ui/button.tsx';
 import { EmptyState } from '#client/ui/empty-state.tsx';
 import { type ListAddress } from './list-address.ts';
 
-export interface NoSectionsProps {
+interface NoSectionsProps {
   address: ListAddress;
   onChange: (change: Partial<ListAddress>) => void;
   onNew: (() => void) | undefined;

@@ -5,7 +5,7 @@ import { fieldClass, fieldHeight } from '#client/ui/field.tsx';
 const PAUSE_MS = 250;
 const LONGEST = 80;
 
-export interface SearchFieldProps {
+interface SearchFieldProps {
   label: string;
   /** The search in force. */
   value: string;

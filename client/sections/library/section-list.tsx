@@ -9,7 +9,7 @@ import { type Section } from '#server/contracts/sections.ts';
 import { SectionMenu } from './section-menu.tsx';
 import { sectionPath, SectionStatus } from './section-words.tsx';
 
-export interface SectionListProps {
+interface SectionListProps {
   /** Null while the first page is on its way. */
   sections: readonly Section[] | null;
   stale: boolean;

@@ -11,7 +11,7 @@ import { sectionPath, SectionStatus } from './section-words.tsx';
 
 const THUMBNAIL = { width: 112, height: 28 } as const;
 
-export interface SectionTableProps {
+interface SectionTableProps {
   /** Null while the first page is on its way: skeleton rows of the true size stand in. */
   sections: readonly Section[] | null;
   address: ListAddress;

@@ -25,7 +25,7 @@ const SORTS: readonly { readonly value: Sort; readonly label: string }[] = [
 /** A table with heads to sort by, two-line rows, or the large rows of who sees what is released only. */
 export type Layout = 'table' | 'list' | 'released';
 
-export interface ToolbarProps {
+interface ToolbarProps {
   address: ListAddress;
   onChange: (change: Partial<ListAddress>) => void;
   layout: Layout;

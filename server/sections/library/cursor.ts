@@ -6,7 +6,7 @@ import { type Sort } from './views.ts';
 export type Direction = 'ascending' | 'descending';
 
 /** The last row of a page in one order of the library: the next page begins behind it. */
-export interface Place {
+interface Place {
   readonly value: string | number | Date;
   readonly id: string;
 }

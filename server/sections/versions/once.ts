@@ -6,7 +6,7 @@ import { Refusal } from '#server/refusal.ts';
 import { type Author } from '../rules.ts';
 
 /** The version that a request has made. */
-export interface Made {
+interface Made {
   readonly sectionId: string;
   readonly number: number;
 }

@@ -6,7 +6,7 @@ import { joinScoped, scoped } from '#server/database/scoped.ts';
 import { type DescribedShape } from '../described.ts';
 import { type Author } from '../rules.ts';
 
-export interface NewVersion {
+interface NewVersion {
   readonly sectionId: string;
   readonly number: number;
   readonly basedOn: number | null;

@@ -56,7 +56,7 @@ export async function listVersions(
   return { items: [...page], nextCursor: last ? encodeCursor([last.number]) : null };
 }
 
-export interface VersionInput {
+interface VersionInput {
   readonly basedOn: number;
   readonly shape: Shape;
   readonly note: string;

@@ -6,7 +6,7 @@ export type Rights = 'one database' | 'all';
 
 export const accountName = 'ribwright';
 export const databaseName = 'ribwright';
-export const collation = 'utf8mb4_unicode_520_ci';
+const collation = 'utf8mb4_unicode_520_ci';
 
 const durabilityOptions: Readonly<Record<Durability, readonly string[]>> = {
   safe: ['--innodb-flush-log-at-trx-commit=1', '--innodb-doublewrite=1', '--innodb-buffer-pool-size=256M'],

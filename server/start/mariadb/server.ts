@@ -26,7 +26,7 @@ import {
 } from './options.ts';
 import { endServers } from './orphans.ts';
 
-export interface MariadbOptions {
+interface MariadbOptions {
   /** The folder for the server's files, its own; made if absent. */
   readonly folder: string;
   /** Path of the server program. */

@@ -2,7 +2,7 @@
  * The NACA 4-digit section straight from its printed formulas (NACA Report 460; NACA Report 824), written a second time and in
  * another way than in geometry/, so that files can be held against something that the writers do not use.
  */
-export interface FourDigits {
+interface FourDigits {
   readonly maxCamber: number;
   readonly maxCamberPosition: number;
   readonly maxThickness: number;

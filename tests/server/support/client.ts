@@ -10,7 +10,7 @@ export interface Input {
   readonly headers?: Readonly<Record<string, string>>;
 }
 
-export interface Answer<Name extends EndpointName = EndpointName> {
+interface Answer<Name extends EndpointName = EndpointName> {
   readonly status: number;
   readonly headers: Headers;
   /** The reply, parsed by its contract; only when the call succeeded. */
@@ -23,7 +23,7 @@ export interface Answer<Name extends EndpointName = EndpointName> {
 }
 
 /** Address of an endpoint with its parameters in place. */
-export function pathOf(name: EndpointName, { params = {}, query = {} }: Input = {}): string {
+function pathOf(name: EndpointName, { params = {}, query = {} }: Input = {}): string {
   const path = endpoints[name].path.replace(/:(\w+)/g, (_, key: string) =>
     encodeURIComponent(String(params[key])),
   );
