@@ -6,10 +6,12 @@ export interface Box {
   readonly height: number;
 }
 
-/** Where everything on the sheet has its place, in pixels of the sheet. */
+/** Where everything on the sheet has its place, in pixels of the sheet: CSS pixels, or `scale` of them each. */
 export interface SheetLayout {
   readonly width: number;
   readonly height: number;
+  /** CSS pixels for each pixel of the sheet. */
+  readonly scale: number;
   /** Narrow sheets (below about 640 px) have a flat title block over the full width and a shorter list of fields. */
   readonly compact: boolean;
   readonly frame: Box;
@@ -37,12 +39,15 @@ export type SecondViewRoom = 'full' | 'small' | 'none';
 /**
  * Lays out a sheet of the given size: a zoned frame (ISO 5457), the title block at the lower right (ISO 7200), and two
  * views under each other on common stations.
- * @param width Width of the sheet in pixels; sizes below `SMALLEST_SHEET` are laid out at that size.
- * @param height Height of the sheet in pixels.
+ * @param size Width and height in CSS pixels, and how many of them a pixel of the sheet gets; sizes below
+ *   `SMALLEST_SHEET` are laid out at that size.
  */
-export function sheetLayout(width: number, height: number, second: SecondViewRoom = 'full'): SheetLayout {
-  const w = Math.max(SMALLEST_SHEET.width, Math.round(width));
-  const h = Math.max(SMALLEST_SHEET.height, Math.round(height));
+export function sheetLayout(
+  { width, height, scale }: { readonly width: number; readonly height: number; readonly scale: number },
+  second: SecondViewRoom = 'full',
+): SheetLayout {
+  const w = Math.max(SMALLEST_SHEET.width, Math.round(width / scale));
+  const h = Math.max(SMALLEST_SHEET.height, Math.round(height / scale));
   const compact = w < COMPACT_BELOW;
   const margin = compact ? { side: 6, top: 6, bottom: 6 } : { side: 17, top: 26, bottom: 26 };
   const frame: Box = {
@@ -52,7 +57,7 @@ export function sheetLayout(width: number, height: number, second: SecondViewRoo
     height: h - margin.top - margin.bottom,
   };
   const titleBlock = titleBlockBox(frame, compact);
-  const remarkHeight = compact ? 22 : 0;
+  const remarkHeight = compact ? 34 : 0;
   const drawing: Box = {
     x: frame.x,
     y: frame.y,
@@ -65,6 +70,7 @@ export function sheetLayout(width: number, height: number, second: SecondViewRoo
   return {
     width: w,
     height: h,
+    scale,
     compact,
     frame,
     zones: { columns: compact ? 4 : 8, rows: 4 },

@@ -22,6 +22,8 @@ export interface SheetTransform {
   readonly chordPixels: number;
   /** Pixels per chord across it: `chordPixels` times the exaggeration. */
   readonly crossPixels: number;
+  /** CSS pixels for each pixel of the sheet: what a pointer moves is divided by it. */
+  readonly scale: number;
 }
 
 /** Lowest and highest ordinate of what is drawn, in fractions of chord. */
@@ -59,6 +61,7 @@ export function sheetTransform(
     }),
     chordPixels,
     crossPixels,
+    scale: layout.scale,
   };
 }
 

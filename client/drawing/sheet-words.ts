@@ -3,7 +3,7 @@ import { type Exaggeration, scaleText, type SheetTransform } from './sheet-view.
 
 /** The scale for the title block: along the chord, and that thickness is drawn larger where it is. */
 export function scaleWords(transform: SheetTransform, chordMm: number, exaggeration: Exaggeration): string {
-  const scale = scaleText(transform.chordPixels, chordMm);
+  const scale = scaleText(transform.chordPixels * transform.scale, chordMm);
   return exaggeration === 1 ? scale : `${scale}, y ×${exaggeration}`;
 }
 
@@ -16,13 +16,13 @@ export interface RemarkInput {
   readonly ghost: number | null;
 }
 
-/** What the sheet says about itself: one short sentence a line. */
+/** What the sheet says about itself: short sentences, those that say how the drawing differs from the section first. */
 export function sheetRemarks({ units, exaggeration, gridMm, comb, ghost }: RemarkInput): string[] {
   const remarks = [`Dimensions in ${units === 'mm' ? 'mm' : 'inches'}.`];
   if (exaggeration > 1) remarks.push(`Thickness drawn ${exaggeration} times too large.`);
+  if (ghost !== null) remarks.push(`Short dashes: version ${ghost}.`);
   if (gridMm !== null) remarks.push(`Grid ${gridLength(gridMm, units)}.`);
   if (comb) remarks.push('Comb: square root of the curvature.');
-  if (ghost !== null) remarks.push(`Short dashes: version ${ghost}.`);
   return remarks;
 }
 

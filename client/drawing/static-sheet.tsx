@@ -14,7 +14,7 @@ import { sheetLayout, type SheetLayout } from './sheet-layout.ts';
 import { FITTED, sheetTransform, type SheetTransform } from './sheet-view.ts';
 import { scaleWords, sheetRemarks } from './sheet-words.ts';
 import { TitleBlock, type TitleBlockFields } from './title-block.tsx';
-import { useSize } from './use-sheet-size.ts';
+import { type Size, useSize } from './use-sheet-size.ts';
 import './printed-sheet.css';
 
 export { type TitleBlockFields } from './title-block.tsx';
@@ -28,16 +28,16 @@ export interface StaticSheetProps {
 }
 
 /** A4 landscape without its margins, in CSS pixels: 277 mm × 190 mm. */
-const A4 = { width: 1047, height: 718 } as const;
+const A4 = { width: 1047, height: 718, scale: 1 } as const;
 
 /** The drawing sheet without handles: fills the width of its place on screen, and A4 or A3 landscape in print. */
 export function StaticSheet(props: StaticSheetProps) {
   const units = useUnits();
-  const [box, size] = useSize<HTMLDivElement>({ width: 960, height: 640 });
+  const [box, size] = useSize<HTMLDivElement>({ width: 960, height: 640, scale: 1 });
   return (
     <>
       <div ref={box} className="aspect-[4/5] w-full border border-rule bg-sheet sm:aspect-[3/2] print:hidden">
-        <SheetDrawing {...props} units={units} width={size.width} height={size.height} />
+        <SheetDrawing {...props} units={units} size={size} />
       </div>
       <PrintedSheet {...props} units={units} />
     </>
@@ -48,22 +48,21 @@ export function StaticSheet(props: StaticSheetProps) {
 export function PrintedSheet(props: StaticSheetProps & { readonly units: Units }) {
   return (
     <div className="printed-sheet hidden print:block" aria-hidden="true">
-      <SheetDrawing {...props} width={A4.width} height={A4.height} printed />
+      <SheetDrawing {...props} size={A4} printed />
     </div>
   );
 }
 
 interface SheetDrawingProps extends StaticSheetProps {
   readonly units: Units;
-  readonly width: number;
-  readonly height: number;
+  readonly size: Size;
   readonly printed?: boolean;
 }
 
 const SheetDrawing = memo(function SheetDrawing(props: SheetDrawingProps) {
-  const { shape, chordMm, title, ghost, units, width, height, printed = false } = props;
+  const { shape, chordMm, title, ghost, units, size, printed = false } = props;
   const drawing = useMemo(() => drawSection(shape), [shape]);
-  const layout = useMemo(() => sheetLayout(width, height), [width, height]);
+  const layout = useMemo(() => sheetLayout(size), [size]);
   const transform = useMemo(
     () => sheetTransform(layout, drawing.measures.extents, 1, FITTED),
     [layout, drawing],
@@ -72,8 +71,8 @@ const SheetDrawing = memo(function SheetDrawing(props: SheetDrawingProps) {
   return (
     <svg
       viewBox={`0 0 ${layout.width} ${layout.height}`}
-      width={layout.width}
-      height={layout.height}
+      width={layout.width * layout.scale}
+      height={layout.height * layout.scale}
       role="img"
       aria-label={`Drawing sheet of ${title.title}, ${title.designation}`}
       className="block h-auto max-w-full"

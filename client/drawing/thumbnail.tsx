@@ -30,7 +30,7 @@ function thumbnailPath(shape: Shape, width: number, height: number): string {
 
 export interface ThumbnailProps {
   shape: Shape;
-  /** Size in px; the section fills it as far as its true shape allows. */
+  /** Size in sixteenths of a rem, which usually are pixels; the section fills it as far as its true shape allows. */
   width: number;
   height: number;
   /** Thin short-dash grey without foam: the way a previous version is drawn. */
@@ -42,8 +42,8 @@ export interface ThumbnailProps {
 export function Thumbnail({ shape, width, height, dashed = false, className }: ThumbnailProps) {
   return (
     <svg
-      width={width}
-      height={height}
+      width={`${String(width / 16)}rem`}
+      height={`${String(height / 16)}rem`}
       viewBox={`0 0 ${String(width)} ${String(height)}`}
       className={className}
       aria-hidden="true"

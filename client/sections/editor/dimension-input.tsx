@@ -52,9 +52,11 @@ export function DimensionInput({
     return true;
   };
   const { textBox } = dimension;
+  const { scale } = layout;
   const left = Math.min(layout.width - WIDTH - 4, Math.max(4, textBox.x + textBox.width / 2 - WIDTH / 2));
+  const top = textBox.y + textBox.height / 2 - 15;
   return (
-    <div className="absolute z-10" style={{ left, top: textBox.y + textBox.height / 2 - 15, width: WIDTH }}>
+    <div className="absolute z-10" style={{ left: left * scale, top: top * scale, width: WIDTH * scale }}>
       <input
         ref={input}
         type="text"
@@ -75,7 +77,7 @@ export function DimensionInput({
         onBlur={() => {
           if (commit()) onLeave(0);
         }}
-        className="h-[30px] w-full rounded border border-wire bg-sheet px-2 text-center text-sm font-semibold text-ink outline-none aria-invalid:border-brick aria-invalid:shadow-[inset_3px_0_0_var(--brick)]"
+        className="h-7.5 w-full rounded border border-wire bg-sheet px-2 text-center text-sm font-semibold text-ink outline-none aria-invalid:border-brick aria-invalid:shadow-[inset_3px_0_0_var(--brick)]"
       />
       {error !== null && <Reason id={id} text={error} />}
     </div>

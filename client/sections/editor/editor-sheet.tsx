@@ -53,8 +53,8 @@ export function EditorSheet(props: EditorSheetProps) {
       <svg
         ref={element}
         viewBox={`0 0 ${layout.width} ${layout.height}`}
-        width={layout.width}
-        height={layout.height}
+        width={layout.width * layout.scale}
+        height={layout.height * layout.scale}
         role="group"
         aria-label="Drawing sheet"
         className="block touch-pan-y select-none data-panning:cursor-grabbing data-panning:[&_[data-handle]]:pointer-events-none"

@@ -26,7 +26,10 @@ interface HandleMarkProps {
 /** Half the diagonal of the mark: a diamond 12 px high. */
 const HALF = 6;
 
-/** A point of the section that can be taken: by pointer, touch or keys. */
+/**
+ * A point of the section that can be taken: by pointer, touch or keys. `block`, because browsers heed `touch-action` on no
+ * inline element, which groups are by default: a finger on the mark would scroll the page.
+ */
 export const HandleMark = memo(function HandleMark(props: HandleMarkProps) {
   const { handle, kind, value, selected, dragged, transform, snap, dispatch, onSelect } = props;
   return (
@@ -46,7 +49,7 @@ export const HandleMark = memo(function HandleMark(props: HandleMarkProps) {
       onKeyDown={(event) => {
         keyDown(event, props);
       }}
-      className={`group touch-none outline-none ${dragged ? 'cursor-grabbing' : 'cursor-grab'}`}
+      className={`group block touch-none outline-none ${dragged ? 'cursor-grabbing' : 'cursor-grab'}`}
     >
       <Grip
         {...{ handle, transform, snap, dispatch }}
@@ -84,7 +87,7 @@ const Grip = memo(function Grip({ handle, transform, snap, dispatch, turns, fill
   };
   const bind = useHandleDrag({ handle, transform, dispatch, snap, onTap: turns === null ? undefined : turn });
   return (
-    <g {...bind()} className="touch-none">
+    <g {...bind()} className="block touch-none">
       <circle r={12} className="fill-transparent pointer-coarse:hidden" />
       <circle r={22} className="hidden fill-transparent pointer-coarse:block" />
       <rect

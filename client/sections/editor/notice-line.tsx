@@ -13,11 +13,16 @@ const HINT = 'Drag a mark, or press a dimension and type. Arrow keys move the ma
 /** What there is to say about the last change: in the free corner of the sheet, or under it where it is narrow. */
 export function NoticeLine({ notice, chordMm, layout }: NoticeLineProps) {
   const units = useUnits();
-  const { remark, compact } = layout;
+  const { remark, compact, scale } = layout;
   const tone = notice === null ? 'text-graphite' : TONES[noticeTone(notice)];
   const place = compact
     ? undefined
-    : { left: remark.x + 14, top: remark.y + 4, width: remark.width - 36, height: remark.height - 44 };
+    : {
+        left: (remark.x + 14) * scale,
+        top: (remark.y + 4) * scale,
+        width: (remark.width - 36) * scale,
+        height: (remark.height - 44) * scale,
+      };
   return (
     <p
       role="status"

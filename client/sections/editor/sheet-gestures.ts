@@ -8,7 +8,7 @@ const WHEEL_STEP = 0.0016;
 const LINE_PIXELS = 16;
 
 interface PinchMemo {
-  readonly scale: number;
+  readonly spread: number;
   readonly x: number;
   readonly y: number;
 }
@@ -33,16 +33,17 @@ export const SheetGestures = memo(function SheetGestures({
   fit,
 }: SheetGesturesProps) {
   const space = useSpaceKey();
+  const { scale } = layout;
   const [panning, setPanning] = useState(false);
   useGesture(
     {
-      onDrag: ({ delta: [dx, dy], event, first, last, pinching, cancel, tap }) => {
-        if (pinching || (first && !pansFrom(event, space))) {
+      onDrag: ({ delta: [dx, dy], movement, event, first, last, pinching, cancel, tap }) => {
+        if (pinching || (first && (!pansFrom(event, space) || scrolls(event, movement)))) {
           cancel();
           return;
         }
         if (first) setPanning(true);
-        if (!tap) setView((before) => panBy(before, layout, dx, dy));
+        if (!tap) setView((before) => panBy(before, layout, dx / scale, dy / scale));
         if (last) setPanning(false);
       },
       onDragEnd: () => {
@@ -50,21 +51,22 @@ export const SheetGestures = memo(function SheetGestures({
       },
       onWheel: ({ event, delta: [, dy] }) => {
         event.preventDefault();
-        const factor = Math.exp(
-          -dy * WHEEL_STEP * (event.deltaMode === WheelEvent.DOM_DELTA_LINE ? LINE_PIXELS : 1),
-        );
-        setView((before) =>
-          zoomAbout(before, layout, pixelOf(element, event.clientX, event.clientY), factor),
-        );
+        const pixel = pixelOf(element, event.clientX, event.clientY, scale);
+        setView((before) => zoomAbout(before, layout, pixel, wheelFactor(event, dy)));
       },
-      onPinch: ({ origin: [x, y], offset: [scale], memo, event, first }) => {
+      onPinch: ({ origin: [x, y], offset: [spread], memo, event, first }) => {
         event.preventDefault();
-        const last = first ? { scale, x, y } : (memo as PinchMemo);
-        const pixel = pixelOf(element, x, y);
+        const last = first ? { spread, x, y } : (memo as PinchMemo);
+        const pixel = pixelOf(element, x, y, scale);
         setView((before) =>
-          zoomAbout(panBy(before, layout, x - last.x, y - last.y), layout, pixel, scale / last.scale),
+          zoomAbout(
+            panBy(before, layout, (x - last.x) / scale, (y - last.y) / scale),
+            layout,
+            pixel,
+            spread / last.spread,
+          ),
         );
-        return { scale, x, y } satisfies PinchMemo;
+        return { spread, x, y } satisfies PinchMemo;
       },
       onDoubleClick: ({ event }) => {
         if (isPaper(event.target)) fit();
@@ -83,6 +85,10 @@ export const SheetGestures = memo(function SheetGestures({
   }, [element, shown]);
   return null;
 });
+
+function wheelFactor({ deltaMode }: WheelEvent, dy: number): number {
+  return Math.exp(-dy * WHEEL_STEP * (deltaMode === WheelEvent.DOM_DELTA_LINE ? LINE_PIXELS : 1));
+}
 
 /** Is the space bar held down outside of fields, buttons and handles? */
 function useSpaceKey(): boolean {
@@ -130,12 +136,23 @@ function pansFrom(event: Event, space: boolean): boolean {
   return space || (event instanceof MouseEvent && event.buttons === MIDDLE_BUTTON) || isPaper(event.target);
 }
 
+/** One finger up or down: the page's own, from its first pixel. */
+function scrolls(event: Event, [x, y]: readonly [number, number]): boolean {
+  return event instanceof PointerEvent && event.pointerType === 'touch' && Math.abs(y) > Math.abs(x);
+}
+
 /** Empty paper: neither a handle nor a dimension that can be pressed. */
 function isPaper(target: EventTarget | null): boolean {
   return target instanceof Element && target.closest('[data-handle], [role="button"]') === null;
 }
 
-function pixelOf(element: RefObject<SVGSVGElement | null>, x: number, y: number): { x: number; y: number } {
+/** The pixel of the sheet under a place of the window. */
+function pixelOf(
+  element: RefObject<SVGSVGElement | null>,
+  x: number,
+  y: number,
+  scale: number,
+): { x: number; y: number } {
   const box = element.current?.getBoundingClientRect();
-  return { x: x - (box?.left ?? 0), y: y - (box?.top ?? 0) };
+  return { x: (x - (box?.left ?? 0)) / scale, y: (y - (box?.top ?? 0)) / scale };
 }

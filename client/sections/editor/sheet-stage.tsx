@@ -29,10 +29,10 @@ export function SheetStage(props: SheetStageProps) {
   const { dispatch, settings, onSettings, title, ghost, enabled, onSave } = props;
   const state = useLiveState();
   const { shape } = state.present;
-  const [box, size] = useSize<HTMLDivElement>({ width: 960, height: 600 });
+  const [box, size] = useSize<HTMLDivElement>({ width: 960, height: 600, scale: 1 });
   const { exaggeration, secondView } = settings;
   const second = secondView === 'none' ? 'none' : exaggeration > 1 ? 'small' : 'full';
-  const layout = useMemo(() => sheetLayout(size.width, size.height, second), [size, second]);
+  const layout = useMemo(() => sheetLayout(size, second), [size, second]);
   const svg = useRef<SVGSVGElement>(null);
   const control = useSheetView(layout, drawSection(shape).measures.extents, exaggeration);
   useEditorKeys({

@@ -7,6 +7,7 @@ import { textWidth } from '#client/drawing/line-types.ts';
 import { type SectionDrawing } from '#client/drawing/section-drawing.ts';
 import { type SheetLayout } from '#client/drawing/sheet-layout.ts';
 import { type SheetTransform } from '#client/drawing/sheet-view.ts';
+import { isSecondFinger } from './second-finger.ts';
 import { type SheetSettings, STATION_LIMITS } from './sheet-settings.ts';
 
 interface StationMarkerProps {
@@ -35,7 +36,8 @@ export const StationMarker = memo(function StationMarker(props: StationMarkerPro
       event: Event;
     }) => {
       event.stopPropagation();
-      onSettings({ station: held(from + (xy[0] - initial[0]) / transform.chordPixels) });
+      if (isSecondFinger(event)) return from;
+      onSettings({ station: held(from + (xy[0] - initial[0]) / (transform.chordPixels * transform.scale)) });
       return from;
     },
     { pointer: { keys: false } },
@@ -64,7 +66,7 @@ export const StationMarker = memo(function StationMarker(props: StationMarkerPro
         event.preventDefault();
         onSettings({ station: next });
       }}
-      className="group cursor-ew-resize touch-none outline-none"
+      className="group block cursor-ew-resize touch-none outline-none"
     >
       <Mark x={x} top={top} bottom={bottom} below={transform.toY(drawing.measures.extents.minY)} />
       <text x={beside} y={top - 9} fontSize={11} className="fill-spruce font-semibold">

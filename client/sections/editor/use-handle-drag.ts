@@ -1,7 +1,8 @@
 import { useDrag } from '@use-gesture/react';
-import { useEffect, useLayoutEffect, useRef } from 'react';
+import { type RefObject, useEffect, useLayoutEffect, useRef } from 'react';
 import { flushSync } from 'react-dom';
 import { type SheetTransform } from '#client/drawing/sheet-view.ts';
+import { isSecondFinger } from './second-finger.ts';
 import { type EditorAction } from './editor-state.ts';
 import { type HandleId } from './handle-ids.ts';
 
@@ -34,25 +35,11 @@ export function useHandleDrag(options: HandleDragOptions) {
     latest.current = options;
   });
   const hold = useRef<Hold | null>(null);
-  useEffect(() => {
-    const alt = (event: KeyboardEvent) => {
-      if (!hold.current || event.key !== 'Alt') return;
-      event.preventDefault();
-      hold.current.alt = event.type === 'keydown';
-      move(latest.current, hold.current);
-    };
-    window.addEventListener('keydown', alt);
-    window.addEventListener('keyup', alt);
-    return () => {
-      window.removeEventListener('keydown', alt);
-      window.removeEventListener('keyup', alt);
-      if (hold.current) cancelAnimationFrame(hold.current.frame);
-      hold.current = null;
-    };
-  }, []);
+  useInterference(hold, latest);
   return useDrag(
     ({ first, last, tap, xy, initial, altKey, canceled, event }) => {
       event.stopPropagation();
+      if (isSecondFinger(event)) return;
       if (tap && onTap) {
         onTap();
         return;
@@ -84,12 +71,42 @@ export function useHandleDrag(options: HandleDragOptions) {
   );
 }
 
+/** What happens beside the pointer while it holds the handle: the Alt key, a second finger, the end of the handle. */
+function useInterference(hold: RefObject<Hold | null>, latest: RefObject<HandleDragOptions>): void {
+  useEffect(() => {
+    const alt = (event: KeyboardEvent) => {
+      if (!hold.current || event.key !== 'Alt') return;
+      event.preventDefault();
+      hold.current.alt = event.type === 'keydown';
+      move(latest.current, hold.current);
+    };
+    // Two fingers move the paper: what the first of them did to the handle is taken back.
+    const join = (event: PointerEvent) => {
+      if (!hold.current || !isSecondFinger(event)) return;
+      cancelAnimationFrame(hold.current.frame);
+      hold.current = null;
+      latest.current.dispatch({ type: 'drag-cancel' });
+    };
+    window.addEventListener('keydown', alt);
+    window.addEventListener('keyup', alt);
+    window.addEventListener('pointerdown', join);
+    return () => {
+      window.removeEventListener('pointerdown', join);
+      window.removeEventListener('keydown', alt);
+      window.removeEventListener('keyup', alt);
+      if (hold.current) cancelAnimationFrame(hold.current.frame);
+      hold.current = null;
+    };
+  }, [hold, latest]);
+}
+
 /** Draws in the frame of the move itself, not in a later one: the surface stays under the pointer. */
 function move({ transform, snap, dispatch }: HandleDragOptions, held: Hold): void {
+  const { scale } = transform;
   flushSync(() => {
     dispatch({
       type: 'drag-move',
-      by: { x: held.dx / transform.chordPixels, y: -held.dy / transform.crossPixels },
+      by: { x: held.dx / scale / transform.chordPixels, y: -held.dy / scale / transform.crossPixels },
       snap: snap !== held.alt,
     });
   });

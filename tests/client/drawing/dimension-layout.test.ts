@@ -23,7 +23,7 @@ interface Scene {
 }
 
 function placed({ shape, width, height, chordMm, exaggeration, view, units }: Scene) {
-  const layout = sheetLayout(width, height);
+  const layout = sheetLayout({ width, height, scale: 1 });
   const drawing = drawSection(shape);
   const transform = sheetTransform(layout, drawing.measures.extents, exaggeration, view);
   const handles = handleIds(shape).flatMap((handle) => handlePoint(shape, handle) ?? []);

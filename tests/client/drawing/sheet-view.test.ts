@@ -13,7 +13,7 @@ import {
 } from '#client/drawing/sheet-view.ts';
 
 const ordinates = { minY: -0.05, maxY: 0.08 };
-const layout = sheetLayout(1040, 560);
+const layout = sheetLayout({ width: 1040, height: 560, scale: 1 });
 const views = fc.record({
   zoom: fc.double({ min: 0.5, max: 20, noNaN: true }),
   panX: fc.double({ min: -200, max: 200, noNaN: true }),
@@ -97,7 +97,7 @@ describe('sheetLayout', () => {
         fc.integer({ min: 200, max: 2200 }),
         fc.constantFrom('full' as const, 'small' as const, 'none' as const),
         (width, height, second) => {
-          const sheet = sheetLayout(width, height, second);
+          const sheet = sheetLayout({ width, height, scale: 1 }, second);
           expect(sheet.width).toBeGreaterThanOrEqual(SMALLEST_SHEET.width);
           for (const box of [
             sheet.titleBlock,

@@ -139,7 +139,7 @@ describe('the nose handle', () => {
 });
 
 describe('a weight handle', () => {
-  const layout = sheetLayout(1000, 640);
+  const layout = sheetLayout({ width: 1000, height: 640, scale: 1 });
 
   it('moves the surface exactly to the pointer, through the sheet and back', () => {
     fc.assert(
