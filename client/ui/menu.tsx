@@ -145,7 +145,7 @@ function moveBetweenItems(event: KeyboardEvent, list: HTMLElement | null, leave:
 }
 
 /** Closes when something else is pressed or the page moves below the menu. */
-function useLeaving(
+export function useLeaving(
   open: boolean,
   inside: readonly RefObject<HTMLElement | null>[],
   close: () => void,

@@ -43,7 +43,7 @@ export function VersionView({ version, inForce }: VersionViewProps) {
         </div>
       </div>
       <aside
-        className="flex flex-col gap-5 border-t border-rule p-4 lg:border-t-0 lg:border-l print:hidden"
+        className="flex flex-col gap-5 md:max-lg:grid md:max-lg:grid-cols-2 md:max-lg:gap-x-8 border-t border-rule p-4 lg:border-t-0 lg:border-l print:hidden"
         aria-label="About this version"
       >
         <Part title="Shape">

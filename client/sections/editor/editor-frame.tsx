@@ -25,7 +25,7 @@ export function EditorFrame({ title, header, note, stage, strip, side, print, ch
       </div>
       <aside
         aria-label="Values of the section"
-        className="flex min-w-0 flex-col gap-5 border-t border-rule p-4 lg:row-span-2 lg:overflow-y-auto lg:border-t-0 lg:border-l print:hidden"
+        className="flex min-w-0 flex-col gap-5 md:max-lg:grid md:max-lg:grid-cols-2 md:max-lg:gap-8 border-t border-rule p-4 lg:row-span-2 lg:overflow-y-auto lg:border-t-0 lg:border-l print:hidden"
       >
         {side}
       </aside>

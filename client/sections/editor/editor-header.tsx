@@ -38,7 +38,7 @@ export const EditorHeader = memo(function EditorHeader(props: EditorHeaderProps)
           <DraftState dirty={dirty} basedOn={basedOn} keeper={keeper} />
         </div>
       </div>
-      <div className="flex flex-wrap gap-2">
+      <div className="flex flex-wrap gap-2 max-sm:w-full max-sm:gap-1.5 max-sm:*:px-2 max-sm:*:text-xs max-sm:[&>:last-child]:grow">
         <Button disabled={!canUndo} onClick={onUndo} title="Undo (Ctrl Z)">
           Undo
         </Button>
