@@ -3,7 +3,7 @@ import { Notice } from '#client/ui/notice.tsx';
 import { ChecksumError } from './receive-file.ts';
 import { type DownloadState } from './use-download.ts';
 
-/** What became of the download, said where it was started; it keeps its place when there is nothing to say. */
+/** What became of the download, said where it was started; before it, in the same place, what a download leaves behind. */
 export function DownloadReport({ state }: { readonly state: DownloadState }) {
   return <div className="min-h-10 text-xs">{noticeOf(state)}</div>;
 }
@@ -11,7 +11,7 @@ export function DownloadReport({ state }: { readonly state: DownloadState }) {
 function noticeOf(state: DownloadState) {
   switch (state.step) {
     case 'idle':
-      return null;
+      return <p className="text-graphite">Each download is kept on record: who took which file, and when.</p>;
     case 'running':
       return <p>{progressOf(state.received, state.total)}</p>;
     case 'done':

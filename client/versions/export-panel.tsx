@@ -74,11 +74,14 @@ function FileColumn({ version, form, focusRefused }: FileColumnProps) {
   return (
     <div className="flex min-w-0 flex-col gap-3">
       <div>
-        <p className="min-h-14 text-xl font-extrabold [overflow-wrap:anywhere]">
-          {file ? <FileName name={file.fileName} /> : 'No file yet'}
-        </p>
         <p className="flex flex-wrap items-baseline gap-x-3 text-xl">
           version {version.number} <StatusMark status={version.status} />
+        </p>
+        {/* Room for a name of two lines, so that nothing below moves while the chord is typed. */}
+        <p className="mt-1 flex min-h-14 items-center text-xl font-extrabold">
+          <span className="[overflow-wrap:anywhere]">
+            {file ? <FileName name={file.fileName} /> : 'No file yet'}
+          </span>
         </p>
       </div>
       <FileFacts file={file} checksum={checksum} />
