@@ -54,6 +54,7 @@ export function routesOf(client: QueryClient): RouteObject[] {
               lazy: () => import('./versions/version-page.tsx'),
               ErrorBoundary: RouteError,
             },
+            { path: '/shop', lazy: () => import('./shop/shop-page.tsx'), ErrorBoundary: RouteError },
             { path: '/account', lazy: () => import('./account/account-page.tsx'), ErrorBoundary: RouteError },
             { path: '*', Component: NotFound },
           ],

@@ -1,11 +1,12 @@
 import { Link, NavLink } from 'react-router';
 import { Mark } from './mark.tsx';
 import { PersonMenu } from './person-menu.tsx';
-import { useMe } from './session.tsx';
+import { useMay, useMe } from './session.tsx';
 
 /** Thin chrome above every screen: where one is, whose workshop it is, who is signed in. */
 export function TopBar({ onShowKeys }: { onShowKeys: () => void }) {
   const me = useMe();
+  const readsShop = useMay('shop.read');
   return (
     <header className="sticky top-0 z-20 flex h-11 shrink-0 items-stretch gap-5 border-b border-rule bg-paper px-4 pointer-coarse:h-13 print:hidden">
       <Link
@@ -16,18 +17,25 @@ export function TopBar({ onShowKeys }: { onShowKeys: () => void }) {
         <Mark />
         <span className="max-sm:sr-only">ribwright</span>
       </Link>
-      <nav aria-label="Main" className="flex items-stretch">
-        <NavLink
-          to="/sections"
-          className="flex items-center border-b-2 border-transparent px-0.5 pt-0.5 text-graphite hover:text-ink aria-[current=page]:border-ink aria-[current=page]:font-semibold aria-[current=page]:text-ink"
-        >
-          Sections
-        </NavLink>
+      <nav aria-label="Main" className="flex items-stretch gap-4">
+        <Place to="/sections">Sections</Place>
+        {readsShop && <Place to="/shop">Shop</Place>}
       </nav>
       <div className="ml-auto flex min-w-0 items-center gap-4">
         <span className="truncate text-graphite max-md:hidden">{me.workshop.name}</span>
         <PersonMenu me={me} onShowKeys={onShowKeys} />
       </div>
     </header>
+  );
+}
+
+function Place({ to, children }: { to: string; children: string }) {
+  return (
+    <NavLink
+      to={to}
+      className="flex items-center border-b-2 border-transparent px-0.5 pt-0.5 text-graphite hover:text-ink aria-[current=page]:border-ink aria-[current=page]:font-semibold aria-[current=page]:text-ink"
+    >
+      {children}
+    </NavLink>
   );
 }

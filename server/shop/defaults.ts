@@ -1,5 +1,15 @@
 import { type Knex } from 'knex';
 import { type MachineSettings, type MaterialSettings } from '#server/contracts/shop.ts';
+import {
+  balsa,
+  expandedFoam,
+  extrudedFoam,
+  handBow,
+  laser,
+  plywood,
+  router,
+  wireBench,
+} from '#server/contracts/shop-samples.ts';
 import { type Author } from '#server/sections/rules.ts';
 import { putKerf } from './kerfs/store.ts';
 import { createItem, machines, materials } from './store.ts';
@@ -15,84 +25,6 @@ export interface ShopFilling {
     readonly speedMmMin: number | null;
   }[];
 }
-
-export const wireBench = {
-  kind: 'wire',
-  towerDistanceMm: 1000,
-  travelXMm: 600,
-  travelYMm: 300,
-  maxFeedMmMin: 1000,
-  travelFeedMmMin: 600,
-  blockXMm: 80,
-  blockYMm: 30,
-  blockFromLeftMm: 150,
-  rootFace: 'left',
-  trailingEdge: 'far',
-  controller: {
-    axes: { leftX: 'X', leftY: 'Y', rightX: 'U', rightY: 'V' },
-    decimals: 4,
-    lineNumbers: true,
-    timeMode: 'inverse-time',
-    inverseTime: 'per-minute',
-    feedOver: 'left-tower',
-    dwellUnit: 'seconds',
-    header: [],
-    footer: [],
-  },
-} satisfies MachineSettings;
-
-export const handBow = { kind: 'bow', wireDiameterMm: 0.4, wireLengthMm: 900 } satisfies MachineSettings;
-
-export const laser = {
-  kind: 'laser',
-  sheetWidthMm: 600,
-  sheetHeightMm: 400,
-  travelXMm: 620,
-  travelYMm: 420,
-  maxFeedMmMin: 6000,
-} satisfies MachineSettings;
-
-const router = {
-  kind: 'router',
-  sheetWidthMm: 900,
-  sheetHeightMm: 600,
-  travelXMm: 950,
-  travelYMm: 650,
-  maxFeedMmMin: 3000,
-} satisfies MachineSettings;
-
-const block = { blockLengthMm: 600, blockHeightMm: 60, blockSpanMm: 1250 };
-
-/** Densities and wire speeds: common practice; foam is cut at 100 to 500 mm/min, expanded foam faster than extruded. */
-export const extrudedFoam = {
-  kind: 'foam',
-  densityKgM3: 32,
-  feedMmMin: 200,
-  maxFeedMmMin: 350,
-  ...block,
-} satisfies MaterialSettings;
-export const expandedFoam = {
-  kind: 'foam',
-  densityKgM3: 20,
-  feedMmMin: 300,
-  maxFeedMmMin: 500,
-  ...block,
-  blockHeightMm: 100,
-} satisfies MaterialSettings;
-export const balsa = {
-  kind: 'sheet',
-  thicknessMm: 2,
-  densityKgM3: 160,
-  sheetWidthMm: 1000,
-  sheetHeightMm: 100,
-} satisfies MaterialSettings;
-export const plywood = {
-  kind: 'sheet',
-  thicknessMm: 2,
-  densityKgM3: 680,
-  sheetWidthMm: 600,
-  sheetHeightMm: 300,
-} satisfies MaterialSettings;
 
 /** What a new workshop finds. Kerfs are common practice (0.5 to 1.5 mm for hot wire); each is marked as not measured. */
 export const shopDefaults: ShopFilling = {

@@ -5,9 +5,9 @@ import {
   handBow,
   laser,
   plywood,
-  type ShopFilling,
   wireBench,
-} from '#server/shop/defaults.ts';
+} from '#server/contracts/shop-samples.ts';
+import { type ShopFilling } from '#server/shop/defaults.ts';
 
 /** The machines and materials of the demo workshop, all invented; nobody has cut a test strip there yet. */
 export const demoShop: ShopFilling = {

@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { balsa, handBow, laser } from '#server/shop/defaults.ts';
+import { balsa, handBow, laser } from '#server/contracts/shop-samples.ts';
 import { startApi, type TestApi, type TestWorkshop } from '../support/api.ts';
 import { type Client } from '../support/client.ts';
 import { makeShop } from '../support/requests.ts';

@@ -1,7 +1,8 @@
 import { v4 as uuid } from 'uuid';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { machineSchema, materialSchema } from '#geometry/cutting/plan.ts';
-import { balsa, extrudedFoam, handBow, laser, shopDefaults, wireBench } from '#server/shop/defaults.ts';
+import { balsa, extrudedFoam, handBow, laser, wireBench } from '#server/contracts/shop-samples.ts';
+import { shopDefaults } from '#server/shop/defaults.ts';
 import { createItem, machines } from '#server/shop/store.ts';
 import { startApi, type TestApi, type TestWorkshop } from '../support/api.ts';
 import { type Client } from '../support/client.ts';

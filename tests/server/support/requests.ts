@@ -4,7 +4,7 @@ import { keepDraft } from '#server/sections/drafts/store.ts';
 import { createSection } from '#server/sections/store.ts';
 import { releaseVersion } from '#server/sections/versions/status-store.ts';
 import { saveVersion } from '#server/sections/versions/store.ts';
-import { balsa, extrudedFoam, handBow, wireBench } from '#server/shop/defaults.ts';
+import { balsa, extrudedFoam, handBow, wireBench } from '#server/contracts/shop-samples.ts';
 import { putKerf } from '#server/shop/kerfs/store.ts';
 import { createItem, machines, materials } from '#server/shop/store.ts';
 import { type TestApi, type TestWorkshop } from './api.ts';
