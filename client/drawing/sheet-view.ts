@@ -1,4 +1,5 @@
 import { type Point } from '#geometry/point.ts';
+import { MM_PER_INCH } from '#client/app/units.ts';
 import { type SheetLayout } from './sheet-layout.ts';
 
 /** What part of the drawing is in sight. Pan is in pixels; zoom 1 with no pan is the fitted sheet. */
@@ -111,7 +112,7 @@ function keepInSight(view: SheetView, layout: SheetLayout): SheetView {
 }
 
 /** CSS pixels per millimetre: a CSS inch is 96 pixels. */
-export const PIXELS_PER_MM = 96 / 25.4;
+export const PIXELS_PER_MM = 96 / MM_PER_INCH;
 
 /**
  * The scale along the chord as the title block states it, "1 : 1", "2.35 : 1" or "1 : 1.4": drawing to workpiece

@@ -1,3 +1,4 @@
+import { LENGTH_LIMITS } from '#geometry/formats/options.ts';
 import { useMemo, useState } from 'react';
 import { Link, useSearchParams } from 'react-router';
 import { type SectionVersion } from '#server/contracts/sections.ts';
@@ -53,8 +54,8 @@ export function VersionView({ version, inForce }: VersionViewProps) {
             kind="length"
             chordMm={chordMm}
             value={chordMm}
-            min={10}
-            max={5000}
+            min={LIMITS.min}
+            max={LIMITS.max}
             decimals={2}
             onCommit={setChordMm}
           />
@@ -148,6 +149,7 @@ function Downloads({ version }: { readonly version: SectionVersion }) {
   );
 }
 
+const LIMITS = LENGTH_LIMITS.chordMm;
 const FIRST_CHORD_MM = 220;
 /** Where the thickness is read off beside the sheet: about where the spar of most wings stands. */
 const SPAR_STATION = 0.3;
@@ -156,7 +158,7 @@ const SPAR_STATION = 0.3;
 function useChord(): readonly [number, (chordMm: number) => void] {
   const [search, setSearch] = useSearchParams();
   const asked = Number(search.get('chord') ?? Number.NaN);
-  const chordMm = asked >= 10 && asked <= 5000 ? asked : FIRST_CHORD_MM;
+  const chordMm = asked >= LIMITS.min && asked <= LIMITS.max ? asked : FIRST_CHORD_MM;
   const setChord = (next: number) => {
     setSearch(
       (before) => {
