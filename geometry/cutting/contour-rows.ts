@@ -9,7 +9,7 @@ export type Sections = Readonly<Record<End, PlacedSection>>;
 /** The polygon that is thinned follows the curve this many times closer than the tolerance. */
 const FINENESS = 10;
 const DENSE = { min: 200, max: 3000 } as const;
-/** Where the skins of both surfaces differ, the thicker one passes over to the thinner by 1 in this many, behind this station. */
+/** Where the skins of both surfaces differ, the thicker one passes over to the thinner by 1 in this many, behind this station: a scarf as it is sanded, our choice of slope. */
 const SCARF = 20;
 const BEHIND_NOSE = 0.04;
 /** Skins that differ by less are alike, mm. */

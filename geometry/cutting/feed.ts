@@ -9,7 +9,7 @@ export function stepLength({ x, y }: Polyline, i: number): number {
 }
 
 /**
- * Seconds for a move from point i − 1 to point i. In the foam the wire has the wanted speed at its faster face; on travel the faster tower has the
+ * Seconds for a move from point i − 1 to point i; common practice: the speed belongs at the foam, not at the carriages. In the foam the wire has the wanted speed at its faster face; on travel the faster tower has the
  * travel feed; no axis goes faster than the machine allows.
  */
 export function moveSeconds(

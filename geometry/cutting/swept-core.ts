@@ -59,7 +59,8 @@ function nearestOn(
     const [a, b] = [at(x, i - 1), at(x, i)];
     for (let s = strip(Math.min(a, b) - reach); s <= strip(Math.max(a, b) + reach); s++) strips[s]?.push(i);
   }
-  const search = (px: number, py: number, moves: Iterable<number>) => {
+  const all = Array.from({ length: x.length - 1 }, (_, i) => i + 1);
+  const search = (px: number, py: number, moves: readonly number[]) => {
     let [distance, move] = [Infinity, 0];
     for (const i of moves) {
       const ay = at(y, i - 1);
@@ -72,11 +73,6 @@ function nearestOn(
   };
   return (px, py) => {
     const near = search(px, py, strips[strip(px)] ?? []);
-    if (near.distance <= reach) return near;
-    return search(
-      px,
-      py,
-      Array.from({ length: x.length - 1 }, (_, i) => i + 1),
-    );
+    return near.distance <= reach ? near : search(px, py, all);
   };
 }

@@ -90,7 +90,7 @@ test('our path and an independent polygon offset differ by at most 0.01 mm, outw
       });
       const path = offsetInStep(buildPanel(plan).chain.root, kerf / 2)!;
       const by = kerf / 2 - skin;
-      const other = independent(fine(outlineOf(section(digits, edge)), 200), by);
+      const other = independent(fine(outlineOf(section(digits, edge)), 200, 900), by);
       expect(farthest(other, path)).toBeLessThanOrEqual(0.01);
       expect(farthest(path, other)).toBeLessThanOrEqual(0.01);
     }
