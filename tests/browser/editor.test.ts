@@ -74,6 +74,30 @@ describe('the drawing sheet', () => {
     await visit.close();
   });
 
+  it('keeps the focus and the mark in sight when the keys carry it out of its view', async () => {
+    const visit = await openSection('Marsh 2412', 'thickness-upper');
+    const { page } = visit;
+    const thickness = handle(page, 'thickness-upper');
+    const room = await page.getByTestId('sheet').boundingBox();
+    const inSight = async () => {
+      const box = await thickness.boundingBox();
+      return box !== null && room !== null && box.y > room.y && box.y + box.height < room.y + room.height;
+    };
+    await thickness.focus();
+    await page.keyboard.press('End');
+    expect(await valueOf(thickness)).toBe(40);
+    expect(await inSight()).toBe(true);
+    await page.keyboard.press('Control+z');
+    for (let i = 0; i < 4; i += 1) await page.getByRole('button', { name: 'Zoom in' }).click();
+    await thickness.focus();
+    await page.keyboard.press('End');
+    await page.keyboard.press('ArrowDown');
+    expect(await valueOf(thickness)).toBeCloseTo(39.95, 6);
+    expect(await thickness.evaluate((element) => element === document.activeElement)).toBe(true);
+    expect(await inSight()).toBe(true);
+    await visit.close();
+  });
+
   it('lays another version over, and continues from it as a new version', async () => {
     const visit = await openSection('Tail fin core', 'upper-1');
     const { page } = visit;

@@ -1,5 +1,6 @@
+import { type Point } from '#geometry/point.ts';
 import { type Units } from '#client/app/units.ts';
-import { type SheetLayout } from '#client/drawing/sheet-layout.ts';
+import { type Box, type SheetLayout } from '#client/drawing/sheet-layout.ts';
 import { type SheetTransform } from '#client/drawing/sheet-view.ts';
 import { type EditorAction, type EditorState } from './editor-state.ts';
 import { handlePoint } from './handle-points.ts';
@@ -20,7 +21,7 @@ interface HandlesProps {
   readonly units: Units;
 }
 
-/** All handles of the section that are in sight, and the value of the one in hand. */
+/** All handles of the section that are in sight or have the focus, and the value of the one in hand. */
 export function Handles({
   layout,
   transform,
@@ -38,11 +39,12 @@ export function Handles({
     const dragged = drag?.handle === handle;
     const at = dragged ? drag.at : handlePoint(shape, handle);
     if (!at) return [];
-    const x = transform.toX(at.x);
-    const y = transform.toY(at.y);
-    const inSight =
-      x >= section.x && x <= section.x + section.width && y >= section.y && y <= section.y + section.height;
-    if (!inSight && !dragged) return [];
+    const place = { x: transform.toX(at.x), y: transform.toY(at.y) };
+    const near = within(place, section);
+    const inSight = near.x === place.x && near.y === place.y;
+    if (!inSight && !dragged && selected !== handle) return [];
+    // With the focus on it, a mark that the keys carry out of sight waits at the edge of the view.
+    const { x, y } = dragged ? place : near;
     return [{ handle, dragged, x, y, words: handleWords(shape, handle, at, chordMm, units) }];
   });
   const held = marks.find(({ dragged }) => dragged);
@@ -71,4 +73,12 @@ export function Handles({
       {held && <ValueTag x={held.x} y={held.y} text={held.words.tag} layout={layout} />}
     </g>
   );
+}
+
+/** The nearest place inside a box. */
+function within({ x, y }: Point, box: Box): Point {
+  return {
+    x: Math.min(box.x + box.width, Math.max(box.x, x)),
+    y: Math.min(box.y + box.height, Math.max(box.y, y)),
+  };
 }

@@ -34,7 +34,12 @@ export function SheetStage(props: SheetStageProps) {
   const second = secondView === 'none' ? 'none' : exaggeration > 1 ? 'small' : 'full';
   const layout = useMemo(() => sheetLayout(size, second), [size, second]);
   const svg = useRef<SVGSVGElement>(null);
-  const control = useSheetView(layout, drawSection(shape).measures.extents, exaggeration);
+  const control = useSheetView(
+    layout,
+    drawSection(shape).measures.extents,
+    exaggeration,
+    state.drag !== null,
+  );
   useEditorKeys({
     dispatch,
     dragging: state.drag !== null,

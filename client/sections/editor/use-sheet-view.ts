@@ -32,13 +32,14 @@ export const ZOOM_STEP = 1.25;
 
 /**
  * What part of the drawing is in sight.
- * @param ordinates Of the section as it is now; the fitted scale follows them only when the sheet is fitted again, so
- *   that nothing moves while a handle is dragged.
+ * @param ordinates Of the section as it is now; the fitted scale follows them only when the sheet is fitted again, or
+ *   when they have outgrown the fitted sheet, and never while a handle is dragged.
  */
 export function useSheetView(
   layout: SheetLayout,
   ordinates: Ordinates,
   exaggeration: Exaggeration,
+  dragging: boolean,
 ): SheetControl {
   const [view, setView] = useState(FITTED);
   const [fitted, setFitted] = useState({ ordinates, exaggeration });
@@ -63,5 +64,17 @@ export function useSheetView(
     () => sheetTransform(layout, fitted.ordinates, exaggeration, view),
     [layout, fitted, exaggeration, view],
   );
+  if (
+    view === FITTED &&
+    !dragging &&
+    fitted.ordinates !== ordinates &&
+    outgrows(layout, transform, ordinates)
+  )
+    setFitted({ ordinates, exaggeration });
   return { transform, view, setView, fit, zoom };
+}
+
+/** Does the section reach out of its view? */
+function outgrows({ section }: SheetLayout, { toY }: SheetTransform, { minY, maxY }: Ordinates): boolean {
+  return toY(maxY) < section.y || toY(minY) > section.y + section.height;
 }
