@@ -96,7 +96,7 @@ const SheetDrawing = memo(function SheetDrawing(props: SheetDrawingProps) {
             comb: false,
             ghost: ghost?.number ?? null,
           }),
-          ...(printed ? ['Print at 100 % and check the chord with a rule.'] : []),
+          ...(printed ? ['Print at 100 % and check the chord with a rule.', ...standingOf(title)] : []),
         ]}
       />
       <TitleBlock
@@ -108,6 +108,14 @@ const SheetDrawing = memo(function SheetDrawing(props: SheetDrawingProps) {
     </svg>
   );
 });
+
+/** Paper outlives the screen: a sheet that is not in force says so itself. */
+function standingOf({ status }: TitleBlockFields): string[] {
+  if (status === 'released') return [];
+  return [
+    status === 'draft' ? 'Draft: not released, do not cut from it.' : `As ${status}: do not cut from it.`,
+  ];
+}
 
 interface SheetViewsProps {
   readonly drawing: SectionDrawing;

@@ -47,7 +47,7 @@ export function Standing({ version, inForce }: StandingProps) {
 }
 
 function Line({ className, children }: { readonly className: string; readonly children: ReactNode }) {
-  return <p className={`border-l-[3px] py-1 pl-3 ${className}`}>{children}</p>;
+  return <p className={`border-l-[3px] py-1 pl-3 print:hidden ${className}`}>{children}</p>;
 }
 
 function InForce({

@@ -36,7 +36,7 @@ export function VersionView({ version, inForce }: VersionViewProps) {
   return (
     <div data-page="flowing" className="grid flex-1 lg:grid-cols-[minmax(0,1fr)_22rem] print:block">
       <title>{`${version.sectionName} v${version.number} · Ribwright`}</title>
-      <div className="flex min-w-0 flex-col gap-3 p-4">
+      <div className="flex min-w-0 flex-col gap-3 p-4 print:p-0">
         <Head version={version} inForce={inForce} onOpen={setOpen} />
         <Standing version={version} inForce={inForce} />
         <div className="lg:max-w-[calc((100dvh-11rem)*1.5)] print:max-w-none">
