@@ -59,12 +59,15 @@ function Frame() {
   );
 }
 
+/** Lies over the lower edge and lets presses through, so that nothing moves when the network goes. */
 function OfflineNote() {
   if (useOnline()) return null;
   return (
-    <p role="status" className="border-b border-amber bg-sheet px-4 py-1 text-amber print:hidden">
-      No network. What is on the screen was loaded before; changes are sent when the network is back and you
-      try again.
+    <p
+      role="status"
+      className="pointer-events-none fixed inset-x-3 bottom-3 z-30 mx-auto w-fit rounded border border-amber bg-sheet px-3 py-1.5 text-xs text-amber print:hidden"
+    >
+      No network. Drafts are sent by themselves when it is back; anything else has to be tried again then.
     </p>
   );
 }

@@ -101,7 +101,7 @@ describe('unsaved work', () => {
     await thickness.focus();
     await visit.page.keyboard.press('Shift+ArrowUp');
     const value = await valueOf(thickness);
-    await visit.page.getByText(/not kept on the server: offline/).waitFor();
+    await visit.page.getByText(/not kept: offline/).waitFor();
     await visit.page.close();
 
     const again = await visit.tab();

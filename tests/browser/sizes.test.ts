@@ -66,6 +66,57 @@ describe('the editor on a very large screen', () => {
   });
 });
 
+describe('the editor while its section is fetched', () => {
+  it.each([
+    [360, 740],
+    [1280, 800],
+  ])('has the sheet where it will be, at %i px', async (width, height) => {
+    const { page } = visit;
+    await page.setViewportSize({ width, height });
+    await page.goto('/sections');
+    let answer = (): void => undefined;
+    const asked = new Promise<void>((resolve) => {
+      answer = resolve;
+    });
+    const path = await sectionPath(app, 'Heron winglet');
+    await page.route(`**/api${path}`, async (route) => {
+      await asked;
+      await route.continue();
+    });
+    await page.goto(path);
+    const place = (part: string) =>
+      page
+        .locator(part)
+        .first()
+        .evaluate((element) => element.getBoundingClientRect().y);
+    await page.getByRole('status', { name: 'Loading the section' }).waitFor();
+    const before = await place('[data-place="sheet"]');
+    answer();
+    await handle(page, 'nose').waitFor();
+    expect(await place('[data-place="sheet"]')).toBeCloseTo(before, 0);
+    await page.unrouteAll({ behavior: 'wait' });
+  });
+});
+
+describe('paper', () => {
+  it('is one sheet, from the editor and of a version that is not in force', async () => {
+    const { page } = visit;
+    for (const path of [
+      await sectionPath(app, 'Heron winglet'),
+      await sectionPath(app, 'Heron outer panel', 1),
+    ]) {
+      await page.goto(path);
+      await page.getByRole('heading', { level: 1 }).waitFor();
+      await page.locator('[data-part="outline"]:visible').waitFor();
+      const pdf = await page.pdf({ preferCSSPageSize: true, landscape: true });
+      expect(pdf.toString('latin1').match(/\/Type\s*\/Page\b/g)).toHaveLength(1);
+    }
+    await page.emulateMedia({ media: 'print' });
+    await page.getByText(/As superseded: do not cut from it/).waitFor();
+    await page.emulateMedia({ media: null });
+  });
+});
+
 describe('the editor on a narrow screen', () => {
   it('has its sheet on the first screen, and the choices of the sheet behind one button that moves nothing', async () => {
     const page = await openAt(360, 740);

@@ -28,9 +28,7 @@ export function draftWords(dirty: boolean, basedOn: number, keeper: KeeperState,
 
 function troubleWords(keeper: KeeperState): string | null {
   if (keeper.step === 'retrying') {
-    return keeper.offline
-      ? 'not kept on the server: offline, trying again'
-      : 'not kept on the server yet, trying again';
+    return keeper.offline ? 'not kept: offline, trying again' : 'not kept yet, trying again';
   }
-  return keeper.step === 'refused' ? `not kept on the server: ${keeper.reason}` : null;
+  return keeper.step === 'refused' ? `not kept: ${keeper.reason}` : null;
 }

@@ -59,6 +59,7 @@ export function SheetStage(props: SheetStageProps) {
       />
       <div
         ref={box}
+        data-place="sheet"
         className="h-[min(34rem,150vw)] min-h-110 w-full shrink-0 relative overflow-hidden border border-rule bg-sheet lg:h-auto lg:flex-1"
       >
         <SheetGestures element={svg} layout={layout} setView={control.setView} fit={control.fit} />

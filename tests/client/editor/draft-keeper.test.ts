@@ -159,7 +159,7 @@ describe('the words for a draft', () => {
     expect(draftWords(true, 3, { step: 'kept', at: 1000 }, 3000)).toBe('draft on version 3, kept 2 s ago');
     expect(draftWords(true, 3, { step: 'sending' }, 0)).toBe('draft on version 3, keeping…');
     expect(draftWords(true, 3, { step: 'retrying', offline: true }, 0)).toBe(
-      'draft on version 3, not kept on the server: offline, trying again',
+      'draft on version 3, not kept: offline, trying again',
     );
     expect(draftWords(false, 3, { step: 'kept', at: 0 }, 0)).toBe('version 3, no unsaved changes');
     expect([ago(-5), ago(59_400), ago(90_000), ago(7_200_000)]).toEqual(['0 s', '59 s', '2 min', '2 h']);
