@@ -38,7 +38,7 @@ export const MeasuredValues = memo(function MeasuredValues({
             'Largest camber',
             Math.abs(measures.maxCamber) < 5e-7 ? 'none' : at(measures.maxCamber, measures.maxCamberPosition),
           ],
-          ['Nose radius', length(measures.noseRadius)],
+          ['Nose radius', noseRadii(length(measures.noseRadiusUpper), length(measures.noseRadiusLower))],
           ['Edge angle', formatAngle(measures.trailingEdgeAngleDeg)],
           ['Edge gap', length(measures.trailingEdgeGap)],
           ['Area', area(measures.area * chordMm ** 2, units)],
@@ -53,6 +53,11 @@ export const MeasuredValues = memo(function MeasuredValues({
     </>
   );
 });
+
+/** One radius, or both where the surfaces leave the nose with different ones. */
+function noseRadii(upper: string, lower: string): string {
+  return upper === lower ? upper : `${upper.split(' ')[0] ?? ''} above, ${lower} below`;
+}
 
 function furtherRows(measures: Measures, chordMm: number, units: Units): Row[] {
   const length = (fraction: number) => formatLength(fraction * chordMm, units);
