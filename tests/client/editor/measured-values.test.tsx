@@ -1,4 +1,4 @@
-import { render, screen } from '@testing-library/react';
+import { render } from '@testing-library/react';
 import { expect, it } from 'vitest';
 import { drawSection } from '#client/drawing/section-drawing.ts';
 import { MeasuredValues } from '#client/sections/editor/measured-values.tsx';
@@ -14,8 +14,12 @@ const freeForm: CstShape = {
 };
 
 function noseRadiusOf(shape: CstShape): string | undefined {
-  render(<MeasuredValues drawing={drawSection(shape)} chordMm={200} units="mm" station={0.3} />);
-  return screen.getByText('Nose radius').nextElementSibling?.textContent;
+  const { getByText, unmount } = render(
+    <MeasuredValues drawing={drawSection(shape)} chordMm={200} units="mm" station={0.3} />,
+  );
+  const said = getByText('Nose radius').nextElementSibling?.textContent;
+  unmount();
+  return said;
 }
 
 it('says both nose radii where the surfaces differ', () => {
