@@ -1,4 +1,5 @@
 import { readFileSync } from 'node:fs';
+import { constants } from 'node:zlib';
 import { ExpressAuth } from '@auth/express';
 import compression from 'compression';
 import express, { type Express } from 'express';
@@ -32,6 +33,9 @@ interface AppDependencies {
   readonly clientFolder: string | null;
 }
 
+/** The middleware's own level, 4, makes the first load larger than gzip would; 6 makes it smaller at little cost. */
+const brotli = { params: { [constants.BROTLI_PARAM_QUALITY]: 6 } };
+
 const packageFile = new URL('../package.json', import.meta.url);
 const { version } = JSON.parse(readFileSync(packageFile, 'utf8')) as { version: string };
 
@@ -56,7 +60,7 @@ export function createApp({ config, knex, logger, clientFolder }: AppDependencie
   app.use(requestLog(logger));
   app.use(securityHeaders(config.publicUrl.startsWith('https:')));
   app.use(believeProxiesOnlyIf(config.trustProxy !== false));
-  app.use(compression());
+  app.use(compression({ brotli }));
   app.use(['/api', '/auth'], sameSiteOnly);
   app.use('/auth', beforeAuth({ knex, attempts, authenticate }), ExpressAuth(auth));
   app.get('/api/openapi.json', (_request, response) => {
