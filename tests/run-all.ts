@@ -105,7 +105,7 @@ async function script(root: string, name: string): Promise<Count> {
 }
 
 async function checkAll(root: string): Promise<Count> {
-  // The browser tests watch for slow frames, so they have the machine to themselves.
+  // The browser tests wait for real time to pass, so nothing else competes with them.
   const scripts = script(root, 'types').then(async (types) =>
     sumOfCounts([types, await script(root, 'lint')]),
   );
