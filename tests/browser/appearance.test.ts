@@ -71,7 +71,7 @@ const screens: readonly Screen[] = [
     as: 'technician',
     // The section itself is out of a technician's reach once nothing of it is in force.
     refusal: /^\/api\/sections\/[^/]+$/,
-    show: version('Sedge rudder', 1, 'Sedge rudder v1'),
+    show: version('Sedge rudder', 2, 'Sedge rudder v2'),
   },
   {
     name: 'export',
