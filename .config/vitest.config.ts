@@ -17,7 +17,7 @@ export default defineConfig({
         root,
         test: {
           name: 'geometry',
-          setupFiles,
+          setupFiles: [...setupFiles, 'tests/setup-properties.ts'],
           include: ['tests/{geometry,reference,structure}/**/*.test.ts'],
         },
       },
@@ -35,7 +35,7 @@ export default defineConfig({
         root,
         test: {
           name: 'server',
-          setupFiles,
+          setupFiles: [...setupFiles, 'tests/setup-properties.ts'],
           globalSetup: ['tests/setup-database.ts'],
           include: ['tests/server/**/*.test.ts'],
           testTimeout: 30_000,

@@ -143,16 +143,16 @@ function smoothError(
   return largest;
 }
 
-/** The point of greatest distance from the chord of a surface taken as one arc, for a surface that would be a single segment. */
-export function farthestParameter(surface: SurfaceCurve): number {
-  const [start, end] = [surface.at(0), surface.at(1)];
-  let [best, largest] = [0.5, -1];
+/**
+ * Where a surface that would be a single segment is best divided in two: the parameter, of 255, with the smallest larger error. The point of
+ * greatest distance will not do: on an S-shaped surface a segment through it may lie farther off than the undivided one.
+ */
+export function bestDivision(surface: SurfaceCurve, turns: readonly number[]): number {
+  let [best, smallest] = [0.5, Infinity];
   for (let i = 1; i < STEPS; i++) {
-    const point = surface.at(i / STEPS);
-    const distance = Math.abs(
-      (end.x - start.x) * (point.y - start.y) - (end.y - start.y) * (point.x - start.x),
-    );
-    if (distance > largest) [best, largest] = [i / STEPS, distance];
+    const t = i / STEPS;
+    const error = Math.max(arcError(surface, 0, t, turns), arcError(surface, t, 1, turns));
+    if (error < smallest) [best, smallest] = [t, error];
   }
   return best;
 }

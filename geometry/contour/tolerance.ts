@@ -1,6 +1,6 @@
 import { shapeError } from '../shapes/error.ts';
 import { type Outline, type SurfaceCurve } from '../shapes/outline.ts';
-import { arcError, farthestParameter, inflectionsOf } from './arc-error.ts';
+import { arcError, bestDivision, inflectionsOf } from './arc-error.ts';
 import { type Contour, contourAt } from './contour.ts';
 
 /** Accepted tolerances in fractions of chord: from 0.01 µm on a metre of chord to a tenth of the chord. */
@@ -45,7 +45,7 @@ function fewestParameters(surface: SurfaceCurve, tolerance: number): number[] {
   const kept =
     inflections.length === 0 ? across : walk(surface, [0, ...inflections, 1], inflections, tolerance);
   const fewest = kept.length < across.length ? kept : across;
-  return fewest.length > 2 ? fewest : [0, farthestParameter(surface), 1];
+  return fewest.length > 2 ? fewest : [0, bestDivision(surface, inflections), 1];
 }
 
 /** The vertices of the walk through pieces whose ends are fixed. */

@@ -110,7 +110,7 @@ const calls: Readonly<Record<string, () => readonly unknown[]>> = {
   areaProperties: () => [outline()],
   inflectionsOf: () => [upper()],
   arcError: () => [upper(), 0.2, 0.3, [0.25]],
-  farthestParameter: () => [upper()],
+  bestDivision: () => [upper(), []],
   largestChordalError: () => [outline(), contour()],
   fitCst: () => [outline(), { orderUpper: 4, orderLower: 4 }],
   thicknessAt: () => [outline(), 0.3],

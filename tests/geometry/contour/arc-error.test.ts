@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { arcError, farthestParameter, inflectionsOf } from '#geometry/contour/arc-error.ts';
+import { arcError, bestDivision, inflectionsOf } from '#geometry/contour/arc-error.ts';
 import { cstOutline } from '#geometry/shapes/cst.ts';
 import { naca4Outline } from '#geometry/shapes/naca4.ts';
 import { type SurfaceCurve, parameterOf } from '#geometry/shapes/outline.ts';
@@ -71,8 +71,12 @@ describe('the error of an arc', () => {
     expect(arcError(bent, 0, 0.4, [])).toBe(Infinity);
   });
 
-  test('the farthest point of a surface is where its height is largest', () => {
-    const t = farthestParameter(cstOutline(UNIT).upper);
-    expect(Math.abs(t - parameterOf(1 / 3))).toBeLessThan(1 / 256);
+  test('the best division has a smaller error than its neighbours', () => {
+    const surface = cstOutline(UNIT).upper;
+    const error = (t: number) => Math.max(arcError(surface, 0, t, []), arcError(surface, t, 1, []));
+    const t = bestDivision(surface, []);
+    expect(error(t)).toBeLessThan(error(t - 1 / 256));
+    expect(error(t)).toBeLessThan(error(t + 1 / 256));
+    expect(error(t)).toBeLessThan(arcError(surface, 0, 1, []));
   });
 });

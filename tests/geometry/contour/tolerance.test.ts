@@ -41,6 +41,20 @@ describe('sampling to a tolerance', () => {
     );
   });
 
+  test('divides an S-shaped surface that one segment would do for without leaving the tolerance', () => {
+    const shape = {
+      kind: 'naca4',
+      maxCamber: 0.026519230037370993,
+      maxCamberPosition: 0.4078479844712898,
+      maxThickness: 0.04525602976073496,
+      trailingEdge: 'open',
+    } as const;
+    const outline = outlineOf(shape);
+    const contour = sampleToTolerance(outline, 0.0099);
+    expect(contour.x.length).toBe(6);
+    expect(largestChordalError(outline, contour)).toBeLessThanOrEqual(0.0099);
+  });
+
   test.each([
     ['0012', naca4Outline(naca4('0012'))],
     ['2412 open', naca4Outline(naca4('2412', 'open'))],
