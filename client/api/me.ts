@@ -1,4 +1,5 @@
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
+import { accountEndpoints } from '#server/contracts/account-endpoints.ts';
 import { type Preferences } from '#server/contracts/people.ts';
 import { request } from './request.ts';
 
@@ -6,7 +7,7 @@ import { request } from './request.ts';
 export const meQuery = () =>
   queryOptions({
     queryKey: ['me'] as const,
-    queryFn: ({ signal }) => request('me', { signal }),
+    queryFn: ({ signal }) => request(accountEndpoints.me, { signal }),
     staleTime: Infinity,
     retry: false,
   });
@@ -14,7 +15,8 @@ export const meQuery = () =>
 export function useChangePreferences() {
   const client = useQueryClient();
   return useMutation({
-    mutationFn: (preferences: Partial<Preferences>) => request('changePreferences', { body: preferences }),
+    mutationFn: (preferences: Partial<Preferences>) =>
+      request(accountEndpoints.changePreferences, { body: preferences }),
     onSuccess: (me) => client.setQueryData(meQuery().queryKey, me),
   });
 }
@@ -22,6 +24,6 @@ export function useChangePreferences() {
 export function useChangePassword() {
   return useMutation({
     mutationFn: (passwords: { current: string; next: string }) =>
-      request('changePassword', { body: passwords }),
+      request(accountEndpoints.changePassword, { body: passwords }),
   });
 }

@@ -1,29 +1,24 @@
 import { type z } from 'zod';
 import { problemSchema } from '#server/contracts/common.ts';
 import { type Endpoint } from '#server/contracts/endpoint.ts';
-import { type EndpointName, endpoints } from '#server/contracts/endpoints.ts';
 import { OfflineError, ProblemError, ReplyError } from './errors.ts';
 
 export { fieldErrors, OfflineError, ProblemError, ReplyError } from './errors.ts';
 
-type Definition<Name extends EndpointName> = (typeof endpoints)[Name];
-type InputOf<Name extends EndpointName, Part extends 'params' | 'query' | 'body'> =
-  Definition<Name> extends Record<Part, infer Schema extends z.ZodType> ? z.input<Schema> : undefined;
+type InputOf<E extends Endpoint, Part extends 'params' | 'query' | 'body'> =
+  E extends Record<Part, infer Schema extends z.ZodType> ? z.input<Schema> : undefined;
 
 /** What an endpoint answers; 204 answers nothing. */
-export type Reply<Name extends EndpointName> = Definition<Name>['reply'] extends infer Schema extends
-  z.ZodType
+export type Reply<E extends Endpoint> = E['reply'] extends infer Schema extends z.ZodType
   ? z.output<Schema>
   : undefined;
 
-interface RequestInput<Name extends EndpointName> {
-  readonly params?: InputOf<Name, 'params'> | undefined;
-  readonly query?: InputOf<Name, 'query'> | undefined;
-  readonly body?: InputOf<Name, 'body'> | undefined;
+interface RequestInput<E extends Endpoint> {
+  readonly params?: InputOf<E, 'params'> | undefined;
+  readonly query?: InputOf<E, 'query'> | undefined;
+  readonly body?: InputOf<E, 'body'> | undefined;
   readonly signal?: AbortSignal | undefined;
 }
-
-type FileEndpointName = 'datFile' | 'dxfFile' | 'svgFile';
 
 const sessionEndListeners = new Set<() => void>();
 
@@ -34,15 +29,14 @@ export function onSessionEnd(listener: () => void): () => void {
 }
 
 /**
- * The one door to the API: typed by the endpoint table, the reply parsed with its schema.
+ * The one door to the API: typed by an endpoint of the contracts, the reply parsed with its schema.
  * Throws ProblemError (the server said no), OfflineError (no answer), ReplyError (an answer of an unknown form),
  * and passes the AbortError of `signal` on.
  */
-export async function request<Name extends EndpointName>(
-  name: Name,
-  input: RequestInput<Name> = {},
-): Promise<Reply<Name>> {
-  const endpoint: Endpoint = endpoints[name];
+export async function request<E extends Endpoint>(
+  endpoint: E,
+  input: RequestInput<E> = {},
+): Promise<Reply<E>> {
   const response = await send(addressOf(endpoint, input.params, input.query), {
     method: endpoint.method,
     headers: {
@@ -56,19 +50,19 @@ export async function request<Name extends EndpointName>(
     if (response.status === 401) for (const listener of sessionEndListeners) listener();
     throw await problemOf(response);
   }
-  if (endpoint.reply === null) return undefined as Reply<Name>;
+  if (endpoint.reply === null) return undefined as Reply<E>;
   const parsed = endpoint.reply.safeParse(await bodyOf(response));
   if (!parsed.success) throw new ReplyError(response.headers.get('x-request-id'), { cause: parsed.error });
-  return parsed.data as Reply<Name>;
+  return parsed.data as Reply<E>;
 }
 
 /** The address of a cut file, for a download; the answer is the file itself. */
-export function fileUrl<Name extends FileEndpointName>(
-  name: Name,
-  params: InputOf<Name, 'params'>,
-  query: InputOf<Name, 'query'>,
+export function fileUrl<E extends Endpoint & { readonly file: string }>(
+  endpoint: E,
+  params: InputOf<E, 'params'>,
+  query: InputOf<E, 'query'>,
 ): string {
-  return addressOf(endpoints[name], params, query);
+  return addressOf(endpoint, params, query);
 }
 
 /** fetch that tells "no answer" from "the answer was no". Cookies of this origin go along. */

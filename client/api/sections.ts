@@ -6,6 +6,7 @@ import {
   useQueryClient,
 } from '@tanstack/react-query';
 import { type z } from 'zod';
+import { sectionEndpoints } from '#server/contracts/section-endpoints.ts';
 import {
   type draftInputSchema,
   type sectionChangeSchema,
@@ -31,7 +32,7 @@ export const sectionsQuery = (filter: SectionListFilter = {}) =>
   infiniteQueryOptions({
     queryKey: [...keys.lists, filter] as const,
     queryFn: ({ pageParam, signal }) =>
-      request('listSections', { query: { ...filter, cursor: pageParam }, signal }),
+      request(sectionEndpoints.listSections, { query: { ...filter, cursor: pageParam }, signal }),
     initialPageParam: undefined as string | undefined,
     getNextPageParam: (page) => page.nextCursor ?? undefined,
   });
@@ -39,7 +40,7 @@ export const sectionsQuery = (filter: SectionListFilter = {}) =>
 export const sectionQuery = (id: string) =>
   queryOptions({
     queryKey: [...keys.one(id), 'section'] as const,
-    queryFn: ({ signal }) => request('getSection', { params: { sectionId: id }, signal }),
+    queryFn: ({ signal }) => request(sectionEndpoints.getSection, { params: { sectionId: id }, signal }),
   });
 
 /** Versions of a section, newest first. */
@@ -47,7 +48,11 @@ export const versionsQuery = (id: string) =>
   infiniteQueryOptions({
     queryKey: [...keys.one(id), 'versions'] as const,
     queryFn: ({ pageParam, signal }) =>
-      request('listVersions', { params: { sectionId: id }, query: { cursor: pageParam }, signal }),
+      request(sectionEndpoints.listVersions, {
+        params: { sectionId: id },
+        query: { cursor: pageParam },
+        signal,
+      }),
     initialPageParam: undefined as string | undefined,
     getNextPageParam: (page) => page.nextCursor ?? undefined,
   });
@@ -55,7 +60,8 @@ export const versionsQuery = (id: string) =>
 export const versionQuery = (id: string, number: number) =>
   queryOptions({
     queryKey: [...keys.one(id), 'versions', number] as const,
-    queryFn: ({ signal }) => request('getVersion', { params: { sectionId: id, number }, signal }),
+    queryFn: ({ signal }) =>
+      request(sectionEndpoints.getVersion, { params: { sectionId: id, number }, signal }),
   });
 
 /** The person's own unsaved work on a section, or null when there is none. */
@@ -64,7 +70,7 @@ export const draftQuery = (id: string) =>
     queryKey: [...keys.one(id), 'draft'] as const,
     queryFn: async ({ signal }) => {
       try {
-        return await request('getDraft', { params: { sectionId: id }, signal });
+        return await request(sectionEndpoints.getDraft, { params: { sectionId: id }, signal });
       } catch (error) {
         if (error instanceof ProblemError && error.status === 404) return null;
         throw error;
@@ -76,7 +82,11 @@ export const downloadsQuery = (id: string, number: number) =>
   infiniteQueryOptions({
     queryKey: [...keys.one(id), 'versions', number, 'downloads'] as const,
     queryFn: ({ pageParam, signal }) =>
-      request('listDownloads', { params: { sectionId: id, number }, query: { cursor: pageParam }, signal }),
+      request(sectionEndpoints.listDownloads, {
+        params: { sectionId: id, number },
+        query: { cursor: pageParam },
+        signal,
+      }),
     initialPageParam: undefined as string | undefined,
     getNextPageParam: (page) => page.nextCursor ?? undefined,
   });
@@ -92,7 +102,7 @@ async function refreshSection(client: QueryClient, id: string): Promise<void> {
 export function useCreateSection() {
   const client = useQueryClient();
   return useMutation({
-    mutationFn: (section: SectionCreate) => request('createSection', { body: section }),
+    mutationFn: (section: SectionCreate) => request(sectionEndpoints.createSection, { body: section }),
     onSuccess: async (section) => {
       client.setQueryData(sectionQuery(section.id).queryKey, section);
       await client.invalidateQueries({ queryKey: keys.lists });
@@ -105,7 +115,7 @@ export function useChangeSection(id: string) {
   const client = useQueryClient();
   return useMutation({
     mutationFn: (change: SectionChange) =>
-      request('changeSection', { params: { sectionId: id }, body: change }),
+      request(sectionEndpoints.changeSection, { params: { sectionId: id }, body: change }),
     onSuccess: () => refreshSection(client, id),
   });
 }
@@ -115,7 +125,7 @@ export function useSaveVersion(id: string) {
   const client = useQueryClient();
   return useMutation({
     mutationFn: (version: VersionCreate) =>
-      request('saveVersion', { params: { sectionId: id }, body: version }),
+      request(sectionEndpoints.saveVersion, { params: { sectionId: id }, body: version }),
     onSuccess: () => refreshSection(client, id),
   });
 }
@@ -124,7 +134,7 @@ export function useReleaseVersion(id: string) {
   const client = useQueryClient();
   return useMutation({
     mutationFn: ({ number, reason }: { number: number; reason?: string }) =>
-      request('releaseVersion', {
+      request(sectionEndpoints.releaseVersion, {
         params: { sectionId: id, number },
         body: reason === undefined ? {} : { reason },
       }),
@@ -136,16 +146,16 @@ export function useWithdrawVersion(id: string) {
   const client = useQueryClient();
   return useMutation({
     mutationFn: ({ number, reason }: { number: number; reason: string }) =>
-      request('withdrawVersion', { params: { sectionId: id, number }, body: { reason } }),
+      request(sectionEndpoints.withdrawVersion, { params: { sectionId: id, number }, body: { reason } }),
     onSuccess: () => refreshSection(client, id),
   });
 }
 
 /** Keeps unsaved work on the server; the last call wins. */
 export function keepDraft(id: string, draft: DraftInput, signal?: AbortSignal) {
-  return request('keepDraft', { params: { sectionId: id }, body: draft, signal });
+  return request(sectionEndpoints.keepDraft, { params: { sectionId: id }, body: draft, signal });
 }
 
 export function dropDraft(id: string, signal?: AbortSignal) {
-  return request('dropDraft', { params: { sectionId: id }, signal });
+  return request(sectionEndpoints.dropDraft, { params: { sectionId: id }, signal });
 }

@@ -12,6 +12,7 @@ import {
   materialCreateSchema,
   type MaterialSettings,
 } from '#server/contracts/shop.ts';
+import { shopEndpoints } from '#server/contracts/shop-endpoints.ts';
 import { ProblemError, request } from './request.ts';
 
 export type ShopSort = 'machine' | 'material';
@@ -30,31 +31,37 @@ const all = ['shop'] as const;
 export const machinesQuery = () =>
   queryOptions({
     queryKey: [...all, 'machines'] as const,
-    queryFn: async ({ signal }) => (await request('listMachines', { signal })).items,
+    queryFn: async ({ signal }) => (await request(shopEndpoints.listMachines, { signal })).items,
   });
 
 export const materialsQuery = () =>
   queryOptions({
     queryKey: [...all, 'materials'] as const,
-    queryFn: async ({ signal }) => (await request('listMaterials', { signal })).items,
+    queryFn: async ({ signal }) => (await request(shopEndpoints.listMaterials, { signal })).items,
   });
 
 export const kerfsQuery = () =>
   queryOptions({
     queryKey: [...all, 'kerfs'] as const,
-    queryFn: async ({ signal }) => (await request('listKerfs', { signal })).items,
+    queryFn: async ({ signal }) => (await request(shopEndpoints.listKerfs, { signal })).items,
   });
 
 function createItem(sort: ShopSort, input: ItemInput): Promise<ShopItem> {
   return sort === 'machine'
-    ? request('createMachine', { body: machineCreateSchema.parse(input) })
-    : request('createMaterial', { body: materialCreateSchema.parse(input) });
+    ? request(shopEndpoints.createMachine, { body: machineCreateSchema.parse(input) })
+    : request(shopEndpoints.createMaterial, { body: materialCreateSchema.parse(input) });
 }
 
 function changeItem(sort: ShopSort, id: string, change: ItemChange): Promise<ShopItem> {
   return sort === 'machine'
-    ? request('changeMachine', { params: { machineId: id }, body: machineChangeSchema.parse(change) })
-    : request('changeMaterial', { params: { materialId: id }, body: materialChangeSchema.parse(change) });
+    ? request(shopEndpoints.changeMachine, {
+        params: { machineId: id },
+        body: machineChangeSchema.parse(change),
+      })
+    : request(shopEndpoints.changeMaterial, {
+        params: { materialId: id },
+        body: materialChangeSchema.parse(change),
+      });
 }
 
 /** Makes a machine or material, or changes the one of the id; {@link standingOf} tells of a change in between. */
@@ -71,7 +78,7 @@ export function useSaveItem(sort: ShopSort) {
 export function useSaveKerf(place: Pick<Kerf, 'machineId' | 'materialId'>) {
   const client = useQueryClient();
   return useMutation({
-    mutationFn: (kerf: KerfInput) => request('putKerf', { params: place, body: kerf }),
+    mutationFn: (kerf: KerfInput) => request(shopEndpoints.putKerf, { params: place, body: kerf }),
     onSuccess: () => client.invalidateQueries({ queryKey: all }),
   });
 }

@@ -1,5 +1,6 @@
 import { useQueryClient } from '@tanstack/react-query';
 import { lazy, Suspense, useEffect, useState } from 'react';
+import { accountEndpoints } from '#server/contracts/account-endpoints.ts';
 import { meQuery } from '#client/api/me.ts';
 import { onSessionEnd, request } from '#client/api/request.ts';
 import { Dialog } from '#client/ui/dialog.tsx';
@@ -25,7 +26,7 @@ export function SignInAgain() {
   if (!ended) return null;
 
   const goOn = async () => {
-    const now = await request('me');
+    const now = await request(accountEndpoints.me);
     if (now.id !== me.id) {
       location.assign('/');
       return;

@@ -1,6 +1,7 @@
 import { useQueryClient } from '@tanstack/react-query';
 import { Fragment, useMemo, useRef } from 'react';
 import { useForm, type UseFormReturn, useWatch } from 'react-hook-form';
+import { sectionEndpoints } from '#server/contracts/section-endpoints.ts';
 import { type SectionVersion } from '#server/contracts/sections.ts';
 import { fileUrl } from '#client/api/request.ts';
 import { downloadsQuery } from '#client/api/sections.ts';
@@ -127,7 +128,8 @@ const notInForce = {
   withdrawn: 'This version is withdrawn. Do not cut from it.',
 } as const;
 
-const endpoints = { dat: 'datFile', dxf: 'dxfFile', svg: 'svgFile' } as const;
+const { datFile: dat, dxfFile: dxf, svgFile: svg } = sectionEndpoints;
+const endpoints = { dat, dxf, svg } as const;
 
 function urlOf(version: SectionVersion, fields: ExportFields): string {
   return fileUrl(

@@ -1,5 +1,5 @@
 import { useEffect, useState, useSyncExternalStore } from 'react';
-import { endpoints } from '#server/contracts/endpoints.ts';
+import { sectionEndpoints } from '#server/contracts/section-endpoints.ts';
 import { OfflineError, ProblemError } from '#client/api/request.ts';
 import { type DraftInput, keepDraft } from '#client/api/sections.ts';
 import { useMe } from '#client/app/session.tsx';
@@ -77,7 +77,7 @@ function isFinal(status: number): boolean {
 
 /** A request that outlives the page (fetch with keepalive carries up to 64 kB; a draft has about 1). */
 function sendLast(sectionId: string, draft: DraftInput): void {
-  const { path, method } = endpoints.keepDraft;
+  const { path, method } = sectionEndpoints.keepDraft;
   void fetch(path.replace(':sectionId', sectionId), {
     method,
     keepalive: true,

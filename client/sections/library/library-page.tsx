@@ -5,6 +5,7 @@ import {
   type UseInfiniteQueryResult,
 } from '@tanstack/react-query';
 import { lazy, Suspense, useState } from 'react';
+import { type sectionEndpoints } from '#server/contracts/section-endpoints.ts';
 import { type Reply } from '#client/api/request.ts';
 import { sectionsQuery } from '#client/api/sections.ts';
 import { type KeyGroup, useHotkey, useKeys } from '#client/app/keys.tsx';
@@ -74,7 +75,7 @@ export function Component() {
 }
 
 interface SectionsProps {
-  list: UseInfiniteQueryResult<InfiniteData<Reply<'listSections'>>>;
+  list: UseInfiniteQueryResult<InfiniteData<Reply<typeof sectionEndpoints.listSections>>>;
   address: ListAddress;
   onChange: (change: Partial<ListAddress>) => void;
   layout: Layout;
