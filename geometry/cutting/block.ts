@@ -3,7 +3,7 @@ import { type Core } from './core.ts';
 import { type PlacedFeature } from './features.ts';
 import { type Finding, error, mm, warning } from './findings.ts';
 import { ruledVolume } from './panel.ts';
-import { type BlockPlan, ENDS, type End, type Machine, type Plan } from './plan.ts';
+import { type BlockPlan, ENDS, type End, type FoamPlan, type Machine, type Plan } from './plan.ts';
 
 /** One core's place in the block: x from the front, y from the underside, mm; turned about the root's leading edge. */
 export interface BlockPlace {
@@ -43,14 +43,13 @@ export function toMachine(machine: Machine, block: BlockPlan, line: Polyline): P
 }
 
 /** Places the core, or the pair, in the block and checks it with the margin at both faces. The kerf counts as part of the cut. */
-export function fitBlock(plan: Plan, core: Core): BlockFit {
-  const { block } = plan;
+export function fitBlock(plan: Plan, block: BlockPlan, core: Core): BlockFit {
   const turned = { xMm: 0, yMm: 0, tiltDeg: block.tiltDeg };
   const boxes = {
     root: grown(boxOf(toBlock(turned, core.root.path)), core.root.halfKerfMm),
     tip: grown(boxOf(toBlock(turned, core.tip.path)), core.tip.halfKerfMm),
   };
-  const findings = [...spanFinding(plan), ...sizeFindings(block, boxes)];
+  const findings = [...spanFinding(plan, block), ...sizeFindings(block, boxes)];
   const lift = block.pair ? stackHeight(boxes, block.marginMm) : 0;
   const all = around(boxes.root, boxes.tip);
   const tooHigh = block.pair && all.maxY - all.minY + lift + 2 * block.marginMm > block.heightMm;
@@ -112,7 +111,7 @@ function least(of: Sides): number {
   return Math.min(...Object.values(of));
 }
 
-function spanFinding({ block, panel }: Plan): Finding[] {
+function spanFinding({ panel }: Plan, block: BlockPlan): Finding[] {
   if (block.spanMm >= panel.spanMm) return [];
   const message = `The block’s span of ${mm(block.spanMm)} is shorter than the panel’s ${mm(panel.spanMm)}.`;
   return [error('block-too-short', 'block.spanMm', message)];
@@ -164,7 +163,7 @@ export interface FoamAmounts {
 /**
  * Volumes by the prismatoid formula and masses from the material's density. A slot's mouth is taken as flat between its edges.
  */
-export function foamAmounts(plan: Plan, core: Core, features: readonly PlacedFeature[]): FoamAmounts {
+export function foamAmounts(plan: FoamPlan, core: Core, features: readonly PlacedFeature[]): FoamAmounts {
   const { block, panel, material } = plan;
   const blockVolumeMm3 = block.lengthMm * block.heightMm * block.spanMm;
   const taken = features.reduce(

@@ -87,6 +87,7 @@ function meetingFinding({ end, station, aheadMm, thicknessMm }: SkinsMeet): Find
 }
 
 function thinEdges(plan: Plan, panel: Panel): Finding[] {
+  if (!plan.block) return [];
   if (plan.allowances.upperMm + plan.allowances.lowerMm > 0 || plan.stock.trailingEdgeStation !== null)
     return [];
   const least = plan.limits.minimumTrailingEdgeMm;

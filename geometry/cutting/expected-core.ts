@@ -3,7 +3,7 @@ import { type Polyline, at, polylineOf } from './arrays.ts';
 import { type BlockPlace, toBlock, toMachine } from './block.ts';
 import { type Core } from './core.ts';
 import { type PlacedFeature } from './features.ts';
-import { type End, type Plan } from './plan.ts';
+import { type End, type WirePlan } from './plan.ts';
 import { PART } from './row.ts';
 
 /** A line at both faces in step, in the machine's frame. */
@@ -32,7 +32,7 @@ export interface ExpectedCore {
 
 /** The cores of a block in the machine's frame, as the simulated cut must leave them. */
 export function expectedCores(
-  plan: Plan,
+  plan: WirePlan,
   core: Core,
   features: readonly PlacedFeature[],
   places: readonly BlockPlace[],

@@ -1,6 +1,6 @@
 import { type Polyline, at } from './arrays.ts';
 import { type Finding, error, mm, stationText, warning } from './findings.ts';
-import { ENDS, type End, type Machine, type Plan } from './plan.ts';
+import { ENDS, type End, type Machine, type WirePlan } from './plan.ts';
 import { type MoveKind, type WirePath } from './wire-path.ts';
 
 /** The length of the segment that ends at point i, mm. */
@@ -48,7 +48,7 @@ const LONGEST_STAND_S = 2;
 const STRETCHES = 50;
 
 /** Compares both ends along the contour of the first core. */
-export function meltReport(plan: Plan, path: WirePath, seconds: Float64Array): MeltReport {
+export function meltReport(plan: WirePlan, path: WirePath, seconds: Float64Array): MeltReport {
   const rootLeft = plan.machine.rootFace === 'left';
   const [root, tip] = rootLeft ? [path.left, path.right] : [path.right, path.left];
   const ways: { root: number; tip: number; station: number; seconds: number }[] = [];
@@ -107,7 +107,7 @@ function longestStand(ways: Ways): Pick<MeltReport, 'longestStandS' | 'standsAtS
 }
 
 /** What the feed and the melt report give reason to say. */
-export function feedFindings(plan: Plan, melt: MeltReport): Finding[] {
+export function feedFindings(plan: WirePlan, melt: MeltReport): Finding[] {
   const { feedMmMin, maxFeedMmMin } = plan.material;
   const findings: Finding[] = [];
   if (feedMmMin > maxFeedMmMin) {

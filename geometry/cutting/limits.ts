@@ -2,7 +2,7 @@ import { type Polyline, at, between, boxOf } from './arrays.ts';
 import { type ExpectedCore } from './expected-core.ts';
 import { stepLength } from './feed.ts';
 import { type Finding, error, mm } from './findings.ts';
-import { type Plan } from './plan.ts';
+import { type WirePlan } from './plan.ts';
 import { type ReadMove } from './read-program.ts';
 
 /** Findings of one kind beyond this number are counted instead of listed. */
@@ -18,7 +18,7 @@ interface Faces {
 
 /** What the moves of a program overstep: travel, the machine's and the material's feed, and the block while a core is cut. */
 export function limitBreaches(
-  plan: Plan,
+  plan: WirePlan,
   moves: readonly ReadMove[],
   faces: Faces,
   cores: readonly ExpectedCore[],
@@ -33,7 +33,7 @@ export function limitBreaches(
   return shortened(findings);
 }
 
-function travelBreach({ machine }: Plan, { line, leftX, leftY, rightX, rightY }: ReadMove): Finding[] {
+function travelBreach({ machine }: WirePlan, { line, leftX, leftY, rightX, rightY }: ReadMove): Finding[] {
   const { axes } = machine.controller;
   const checks = [
     [axes.leftX, leftX, machine.travelXMm, 'travelXMm'],
@@ -48,7 +48,7 @@ function travelBreach({ machine }: Plan, { line, leftX, leftY, rightX, rightY }:
   });
 }
 
-function feedBreaches(plan: Plan, from: ReadMove, to: ReadMove, faces: Faces, i: number): Finding[] {
+function feedBreaches(plan: WirePlan, from: ReadMove, to: ReadMove, faces: Faces, i: number): Finding[] {
   const { machine, material } = plan;
   const found: Finding[] = [];
   const speed = (way: number) => (way === 0 ? 0 : (60 * way) / to.seconds);
@@ -78,7 +78,7 @@ interface Rectangle {
   readonly maxY: number;
 }
 
-function blockOf({ machine, block }: Plan): Rectangle {
+function blockOf({ machine, block }: WirePlan): Rectangle {
   return {
     minX: machine.blockXMm,
     maxX: machine.blockXMm + block.lengthMm,
@@ -88,7 +88,7 @@ function blockOf({ machine, block }: Plan): Rectangle {
 }
 
 /** True when a segment of a face's path passes through the block (clipped against its sides). */
-function inFoam(plan: Plan, { x, y }: Polyline, i: number): boolean {
+function inFoam(plan: WirePlan, { x, y }: Polyline, i: number): boolean {
   const { minX, maxX, minY, maxY } = blockOf(plan);
   let [from, to] = [0, 1];
   for (const [start, end, low, high] of [
@@ -109,7 +109,7 @@ function inFoam(plan: Plan, { x, y }: Polyline, i: number): boolean {
 
 /** Moves that cut the core's surface where there is no foam: the core would not come out whole. */
 function blockBreaches(
-  plan: Plan,
+  plan: WirePlan,
   moves: readonly ReadMove[],
   faces: Faces,
   cores: readonly ExpectedCore[],

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { shapeSchema } from '../shapes/shape.ts';
+import { length, name, number, station, whole } from './fields.ts';
 
 /** The accepted ranges, for fields and checks alike. Lengths in mm, angles in degrees, stations in fractions of chord. */
 export const PLAN_LIMITS = {
@@ -10,32 +11,15 @@ export const PLAN_LIMITS = {
   kerfMm: { min: 0, max: 6 },
   toleranceMm: { min: 0.001, max: 0.5 },
   feedMmMin: { min: 1, max: 20_000 },
+  inspectionStation: { min: 0.02, max: 0.98 },
+  inspectionMm: { min: 0.01, max: 5 },
   features: 24,
   ribs: 60,
+  inspectionStations: 12,
 } as const;
 
-function number(label: string, unit: string, min: number, max: number) {
-  const range = `${label} must be between ${min} and ${max}${unit}.`;
-  return z.number({ error: range }).min(min, { error: range }).max(max, { error: range });
-}
-const length = (label: string, min: number, max: number) => number(label, ' mm', min, max);
-const station = (label: string) => {
-  const range = `${label} must be between 0 % and 100 % of chord.`;
-  return z.number({ error: range }).min(0, { error: range }).max(1, { error: range });
-};
 const feed = (label: string) =>
   number(label, ' mm/min', PLAN_LIMITS.feedMmMin.min, PLAN_LIMITS.feedMmMin.max);
-const whole = (label: string, min: number, max: number) => {
-  const range = `${label} must be a whole number between ${min} and ${max}.`;
-  return z
-    .number({ error: range })
-    .int({ error: range })
-    .min(min, { error: range })
-    .max(max, { error: range });
-};
-const name = z
-  .string({ error: 'A name must be text of at most 60 characters.' })
-  .max(60, { error: 'A name must be text of at most 60 characters.' });
 
 const endSchema = (label: string) =>
   z.strictObject({
@@ -266,6 +250,28 @@ export const limitsSchema = z.strictObject({
   speedRatio: number('The speed ratio', '', 1, 50),
 });
 
+const { inspectionStation, inspectionMm } = PLAN_LIMITS;
+const inspectionStationRange = `An inspection station must be between ${inspectionStation.min * 100} % and ${inspectionStation.max * 100} % of chord.`;
+
+/** Where the finished part is measured with a caliper. */
+export const inspectionSchema = z.strictObject({
+  stations: z
+    .array(
+      z
+        .number({ error: inspectionStationRange })
+        .min(inspectionStation.min, { error: inspectionStationRange })
+        .max(inspectionStation.max, { error: inspectionStationRange }),
+    )
+    .min(1, { error: 'The inspection needs a station.' })
+    .max(PLAN_LIMITS.inspectionStations, { error: `At most ${PLAN_LIMITS.inspectionStations} stations.` })
+    .refine((stations) => new Set(stations).size === stations.length, {
+      error: 'An inspection station stands twice.',
+    }),
+  toleranceMm: length('The inspection tolerance', inspectionMm.min, inspectionMm.max),
+  /** The bare core, or the part with its skins on. */
+  measured: z.enum(['core', 'with-skin'], { error: 'What is measured is the core or the part with skin.' }),
+});
+
 /** Everything that decides what is cut. Same plan, same cut. */
 export const planSchema = z.strictObject({
   panel: panelSchema,
@@ -286,16 +292,23 @@ export const planSchema = z.strictObject({
   features: z
     .array(featureSchema)
     .max(PLAN_LIMITS.features, { error: `At most ${PLAN_LIMITS.features} features.` }),
-  block: blockSchema,
-  machine: machineSchema,
-  material: materialSchema,
+  /** Foam to cut a core from, and what it is made of; null: no foam core, ribs alone. */
+  block: blockSchema.nullable(),
+  /** Null: no wire machine cuts, but people by hand, or there are ribs alone. */
+  machine: machineSchema.nullable(),
+  material: materialSchema.nullable(),
   cut: cutSchema,
   ribs: ribsSchema.nullable(),
   template: templateSchema.nullable(),
   limits: limitsSchema,
+  inspection: inspectionSchema,
 });
 
 export type Plan = z.infer<typeof planSchema>;
+/** A plan of a foam core. */
+export type FoamPlan = Plan & { readonly block: BlockPlan; readonly material: Material };
+/** A plan that a wire machine cuts. */
+export type WirePlan = FoamPlan & { readonly machine: Machine };
 export type PanelPlan = z.infer<typeof panelSchema>;
 export type Feature = z.infer<typeof featureSchema>;
 export type BlockPlan = z.infer<typeof blockSchema>;
@@ -306,3 +319,13 @@ export type RibsPlan = z.infer<typeof ribsSchema>;
 export type TemplatePlan = z.infer<typeof templateSchema>;
 export type End = 'root' | 'tip';
 export const ENDS = ['root', 'tip'] as const;
+
+/** Whether a plan has all that the amounts of foam need. */
+export function hasFoam(plan: Plan): plan is FoamPlan {
+  return plan.block !== null && plan.material !== null;
+}
+
+/** Whether a plan has all that a machine program needs. */
+export function hasWire(plan: Plan): plan is WirePlan {
+  return hasFoam(plan) && plan.machine !== null;
+}

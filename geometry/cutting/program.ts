@@ -1,6 +1,6 @@
 import { type Polyline, at } from './arrays.ts';
 import { moveSeconds } from './feed.ts';
-import { type Controller, type Plan } from './plan.ts';
+import { type Controller, type WirePlan } from './plan.ts';
 import { comment, commentText, decimal } from './program-text.ts';
 import { type Bench, benchOf, fromTowers, toTowers } from './towers.ts';
 import { type WirePath } from './wire-path.ts';
@@ -33,7 +33,7 @@ const CHECKSUM_DIGITS = 12;
  * Every cutting line carries its F. Coordinates are rounded first and the times taken from the rounded ones, rounded to the slow side, so
  * that the program never runs faster than planned.
  */
-export function writeProgram(plan: Plan, path: WirePath, identity: ProgramIdentity): Program {
+export function writeProgram(plan: WirePlan, path: WirePath, identity: ProgramIdentity): Program {
   const { controller } = plan.machine;
   const bench = benchOf(plan);
   const towers = roundedTowers(bench, path, controller.decimals);
@@ -72,7 +72,7 @@ export function writeProgram(plan: Plan, path: WirePath, identity: ProgramIdenti
   };
 }
 
-function headerOf({ machine, panel, block, cut }: Plan, identity: ProgramIdentity): string[] {
+function headerOf({ machine, panel, block, cut }: WirePlan, identity: ProgramIdentity): string[] {
   const { axes } = machine.controller;
   const trailing = machine.trailingEdge === 'origin' ? 'toward the origin' : 'away from the origin';
   return [

@@ -1,6 +1,6 @@
 import { type Polyline, between } from './arrays.ts';
 import { type Finding, error, mm } from './findings.ts';
-import { type Plan } from './plan.ts';
+import { type WirePlan } from './plan.ts';
 
 /** Where the faces stand between the towers, as distances from the left tower's plane, mm. */
 export interface Bench {
@@ -10,7 +10,7 @@ export interface Bench {
 }
 
 /** Places of the panel's two faces on the machine: the block's left face, and the panel's span to the right of it. */
-export function benchOf(plan: Plan): Bench {
+export function benchOf(plan: WirePlan): Bench {
   const leftFaceMm = plan.machine.blockFromLeftMm;
   return {
     leftFaceMm,
@@ -37,7 +37,7 @@ export function fromTowers(bench: Bench, towers: { left: Polyline; right: Polyli
 }
 
 /** Checks that the panel and its block stand between the towers. */
-export function checkBench(plan: Plan): Finding[] {
+export function checkBench(plan: WirePlan): Finding[] {
   const { leftFaceMm, rightFaceMm, towerDistanceMm } = benchOf(plan);
   const span = plan.panel.spanMm;
   if (towerDistanceMm < span) {

@@ -3,7 +3,7 @@ import { type Polyline, at, polylineOf } from './arrays.ts';
 import { type BlockPlace, toBlock, toMachine } from './block.ts';
 import { type Core } from './core.ts';
 import { type PlacedFeature } from './features.ts';
-import { type Plan } from './plan.ts';
+import { type WirePlan } from './plan.ts';
 import { PART } from './row.ts';
 
 /** What the wire does on its way to a node. */
@@ -48,7 +48,7 @@ interface Step {
  * the nose and comes back by the same slit.
  */
 export function buildWirePath(
-  plan: Plan,
+  plan: WirePlan,
   core: Core,
   features: readonly PlacedFeature[],
   places: readonly BlockPlace[],
@@ -70,7 +70,7 @@ function pathOf(nodes: readonly WireNode[]): WirePath {
 }
 
 /** The way round the core in the panel's frame, from the trailing edge to the trailing edge. */
-function aroundCore(plan: Plan, core: Core, features: readonly PlacedFeature[]): Step[] {
+function aroundCore(plan: WirePlan, core: Core, features: readonly PlacedFeature[]): Step[] {
   const { station, part } = core.panel.chain;
   const steps: Step[] = [];
   let labelled: number = PART.tail;
@@ -119,7 +119,7 @@ function pointAt({ x, y }: Polyline, i: number): Point {
 }
 
 /** The steps round one core on the machine, with the way in and out behind the trailing edge. */
-function coreNodes(plan: Plan, steps: readonly Step[], place: BlockPlace, core: number): WireNode[] {
+function coreNodes(plan: WirePlan, steps: readonly Step[], place: BlockPlace, core: number): WireNode[] {
   const onMachine = (end: 'root' | 'tip') =>
     toMachine(plan.machine, plan.block, toBlock(place, polylineOf(steps.map((step) => step[end]))));
   const rootLeft = (plan.machine.rootFace === 'left') !== place.mirrored;
@@ -150,7 +150,7 @@ function coreNodes(plan: Plan, steps: readonly Step[], place: BlockPlace, core: 
 }
 
 /** The planes across the bench, behind and in front of the block, where the wire hangs clear. */
-function clearPlanes({ machine, block, cut }: Plan): { rear: number; front: number } {
+function clearPlanes({ machine, block, cut }: WirePlan): { rear: number; front: number } {
   const near = machine.blockXMm - cut.clearanceMm;
   const far = machine.blockXMm + block.lengthMm + cut.clearanceMm;
   return machine.trailingEdge === 'origin' ? { rear: near, front: far } : { rear: far, front: near };
@@ -161,7 +161,7 @@ function aside(node: WireNode, x: number, kind: MoveKind): WireNode {
 }
 
 /** From the origin to where the wire enters: over the block when the trailing edge points away from the origin. */
-function approach({ machine, block, cut }: Plan, entry: WireNode): WireNode[] {
+function approach({ machine, block, cut }: WirePlan, entry: WireNode): WireNode[] {
   const travel = (left: Point, right: Point): WireNode => ({
     left,
     right,

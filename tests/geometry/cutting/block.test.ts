@@ -35,12 +35,12 @@ test('the trailing edge points to the origin or away from it', () => {
 
 test('a core without a place stands in the middle; the margin counts from the kerf', () => {
   const { core } = planned(planWith({ features: [] }));
-  const [place] = core.fit.places;
+  const [place] = core.fit!.places;
   const boxes = [core.core.root.path, core.core.tip.path].map((of) => boxOf(toBlock(place!, of)));
   const lowest = Math.min(...boxes.map(({ minY }) => minY)) - 0.4;
   const highest = Math.max(...boxes.map(({ maxY }) => maxY)) + 0.4;
   expect(lowest).toBeCloseTo(60 - highest, 9);
-  expect(Math.min(core.fit.marginMm.root, core.fit.marginMm.tip)).toBeCloseTo(
+  expect(Math.min(core.fit!.marginMm.root, core.fit!.marginMm.tip)).toBeCloseTo(
     Math.min(lowest, ...boxes.map(({ minX, maxX }) => Math.min(minX, 260 - maxX) - 0.4)),
     9,
   );
@@ -60,7 +60,7 @@ test('a tip larger than the block, a core beside it and a small margin are findi
 test('a mirrored pair is stacked with the margin between both cores, and its simulated cut agrees', () => {
   const { core, findings } = planned(planWith({ block: { pair: true, heightMm: 90 } }));
   expect(findings.filter((of) => !of.startsWith('skins-meet'))).toEqual([]);
-  const [first, second] = core.fit.places;
+  const [first, second] = core.fit!.places;
   expect(second).toMatchObject({ mirrored: true, xMm: first!.xMm });
   // At the face with the first core's root stands the second core's tip, and the other way round.
   for (const [own, other] of [
@@ -77,16 +77,16 @@ test('a mirrored pair is stacked with the margin between both cores, and its sim
 test('a pair that does not fit is a finding, and one core is planned', () => {
   const { core, findings } = planned(planWith({ block: { pair: true } }));
   expect(findings).toContain('pair-does-not-fit block.pair');
-  expect(core.fit.places).toHaveLength(1);
+  expect(core.fit!.places).toHaveLength(1);
 });
 
 test('masses come from volumes and density; features are taken off', () => {
-  const bare = planned(prismOf(section('0012'), 200)).core.foam;
+  const bare = planned(prismOf(section('0012'), 200)).core.foam!;
   // Area of the closed 0012 at 200 mm: 3268.24 mm².
   expect(bare.coreVolumeMm3 / (3268.24 * 600)).toBeCloseTo(1, 3);
   expect(bare.coreMassG).toBeCloseTo((bare.coreVolumeMm3 / 1e9) * 20 * 1000, 9);
   expect(bare.blockMassG).toBeCloseTo(0.26 * 0.06 * 0.6 * 20 * 1000, 9);
-  const without = planned(planWith({ features: [] })).core.foam.coreVolumeMm3;
-  const slotted = planned(planWith({ features: PLAN.features.slice(1) })).core.foam.coreVolumeMm3;
+  const without = planned(planWith({ features: [] })).core.foam!.coreVolumeMm3;
+  const slotted = planned(planWith({ features: PLAN.features.slice(1) })).core.foam!.coreVolumeMm3;
   expect(without - slotted).toBeCloseTo(5 * 2 * 600, -2);
 });

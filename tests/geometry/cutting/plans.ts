@@ -4,6 +4,8 @@ import {
   type Plan,
   type RibsPlan,
   type TemplatePlan,
+  type WirePlan,
+  hasWire,
   planSchema,
 } from '#geometry/cutting/plan.ts';
 import { parseDesignation } from '#geometry/shapes/naca4.ts';
@@ -38,8 +40,15 @@ export const SLOT: Extract<Feature, { kind: 'slot' }> = {
   tipDepthMm: 2,
 };
 
+/** A checked plan that a wire machine cuts. */
+function wired(values: unknown): WirePlan {
+  const plan = planSchema.parse(values);
+  if (!hasWire(plan)) throw new Error('The plan has no machine, block or material.');
+  return plan;
+}
+
 /** The tapered panel of the shop: 220 → 160 mm, 600 mm span, 2° washout, 1 mm skin, 0.8 mm kerf, a tube and a slot. */
-export const PLAN: Plan = planSchema.parse({
+export const PLAN: WirePlan = wired({
   panel: {
     root: { shape: section('2412', 'open'), chordMm: 220 },
     tip: { shape: section('2412', 'open'), chordMm: 160 },
@@ -92,6 +101,7 @@ export const PLAN: Plan = planSchema.parse({
   ribs: null,
   template: null,
   limits: { minimumWebMm: 1, minimumTrailingEdgeMm: 0.8, speedRatio: 3 },
+  inspection: { stations: [0.1, 0.3, 0.65], toleranceMm: 0.3, measured: 'core' },
 } satisfies Plan);
 
 /** A rib set of 3 mm material with all that a rib can carry. */
@@ -113,18 +123,20 @@ export const TEMPLATE: TemplatePlan = {
   pinStations: [0.25, 0.6],
 };
 
-/** The plan with some of its parts replaced, one level deep. */
-export function planWith(changes: { readonly [Key in keyof Plan]?: Partial<Plan[Key]> | Plan[Key] }): Plan {
+/** The plan of the machine with some of its parts replaced, one level deep. */
+export function planWith(changes: {
+  readonly [Key in keyof WirePlan]?: Partial<WirePlan[Key]> | WirePlan[Key];
+}): WirePlan {
   const merged = Object.entries(changes).map(([key, value]) => {
     const old = PLAN[key as keyof Plan];
     const both = typeof old === 'object' && old && !Array.isArray(old) && value && !Array.isArray(value);
     return [key, both ? { ...old, ...value } : value];
   });
-  return planSchema.parse({ ...PLAN, ...Object.fromEntries(merged) });
+  return wired({ ...PLAN, ...Object.fromEntries(merged) });
 }
 
 /** The plan without features, skins and kerf, and both ends alike. */
-export function prismOf(shape: Shape, chordMm: number): Plan {
+export function prismOf(shape: Shape, chordMm: number): WirePlan {
   return planWith({
     panel: {
       root: { shape, chordMm },
@@ -167,7 +179,7 @@ function scaled(shape: Shape, factor: number): Shape {
 }
 
 /** Random plans of ordinary sections: taper, sweep, washout, kerf and skins as a shop would choose them. */
-export const plans: fc.Arbitrary<Plan> = fc
+export const plans: fc.Arbitrary<WirePlan> = fc
   .record({
     root: ordinary,
     tipFactor: within(0.8, 1.2),

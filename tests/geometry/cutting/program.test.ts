@@ -9,7 +9,7 @@ import { benchOf, toTowers } from '#geometry/cutting/towers.ts';
 import { PLAN, planWith } from './plans.ts';
 
 const IDENTITY = { sheetName: 'Reed wing', versionNumber: 3, checksum: '3f2a9c81b0de5577a1c0', part: 'core' };
-const withController = (changes: Partial<Controller>): Plan =>
+const withController = (changes: Partial<Controller>) =>
   planWith({ machine: { controller: { ...PLAN.machine.controller, ...changes } } });
 const cutOf = (plan: Plan, identity = IDENTITY) => {
   const core: CorePlan = planCore(plan, identity).core!;

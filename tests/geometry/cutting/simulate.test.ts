@@ -1,6 +1,6 @@
 import { expect, test } from 'vitest';
 import { expectedCores } from '#geometry/cutting/expected-core.ts';
-import { type Plan } from '#geometry/cutting/plan.ts';
+import { type WirePlan } from '#geometry/cutting/plan.ts';
 import { planCore } from '#geometry/cutting/planner.ts';
 import { readProgram } from '#geometry/cutting/read-program.ts';
 import { simulate } from '#geometry/cutting/simulate.ts';
@@ -9,8 +9,8 @@ import { PLAN, planWith } from './plans.ts';
 const IDENTITY = { sheetName: 'Reed wing', versionNumber: 1, checksum: 'abc', part: 'core' };
 const { core: WHOLE } = planCore(PLAN, IDENTITY);
 const TEXT = WHOLE!.cut!.program.text;
-const EXPECTED = expectedCores(PLAN, WHOLE!.core, WHOLE!.features, WHOLE!.fit.places);
-const run = (text: string, plan: Plan = PLAN) => simulate(text, plan, EXPECTED);
+const EXPECTED = expectedCores(PLAN, WHOLE!.core, WHOLE!.features, WHOLE!.fit!.places);
+const run = (text: string, plan: WirePlan = PLAN) => simulate(text, plan, EXPECTED);
 const edited = (find: RegExp, change: (line: string) => string) => {
   const lines = TEXT.split('\n');
   const index = lines.findIndex((line) => find.test(line));
@@ -51,7 +51,7 @@ test('a point moved by 0.1 mm is found, with its line', () => {
 test('a kerf that the plan does not have, and a wire that never comes, differ', () => {
   const wider = planWith({ kerfMm: { root: 1, tip: 1 } });
   const built = planCore(wider, IDENTITY).core!;
-  const expected = expectedCores(wider, built.core, built.features, built.fit.places);
+  const expected = expectedCores(wider, built.core, built.features, built.fit!.places);
   expect(simulate(TEXT, wider, expected).largestDeviationMm).toBeGreaterThan(0.05);
   expect(run('G21 G90\nG93\nG1 X1 Y1 U1 V1 F10\n').largestDeviationMm).toBeGreaterThan(10);
 });
