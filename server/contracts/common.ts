@@ -12,6 +12,13 @@ export const sectionNameSchema = z
   .min(1, 'Give the section a name.')
   .max(80, 'A name holds at most 80 characters.')
   .regex(/^[^\p{Cc}\p{Zl}\p{Zp}]*$/u, 'A name is one line of plain text.');
+/** The name of a machine, a material or a cut sheet. */
+export const itemNameSchema = z
+  .string({ error: 'Give it a name.' })
+  .trim()
+  .min(1, 'Give it a name.')
+  .max(60, 'A name holds at most 60 characters.')
+  .regex(/^[^\p{Cc}\p{Zl}\p{Zp}]*$/u, 'A name is one line of plain text.');
 export const purposeSchema = z
   .string()
   .trim()

@@ -17,6 +17,12 @@ export const permissions = {
   'versions.release': ['owner', 'designer'],
   'files.download': ['owner', 'designer', 'builder', 'technician'],
   'downloads.read': ['owner', 'designer', 'builder'],
+  'cut-sheets.read': ['owner', 'designer', 'builder'],
+  'cut-sheets.write': ['owner', 'designer', 'builder'],
+  'cut-sheets.release': ['owner', 'designer', 'builder'],
+  'cuts.log': ['owner', 'designer', 'builder', 'technician'],
+  'inspections.write': ['owner', 'designer', 'builder', 'technician'],
+  'inspections.answer': ['owner', 'designer', 'builder'],
   'shop.read': ['owner', 'designer', 'builder', 'technician'],
   'shop.write': ['owner', 'builder'],
 } as const satisfies Record<string, readonly Role[]>;

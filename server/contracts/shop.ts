@@ -7,7 +7,7 @@ import {
   ribsSchema,
   templateSchema,
 } from '#geometry/cutting/plan.ts';
-import { idSchema, pageOf, personRefSchema, timeSchema } from './common.ts';
+import { idSchema, itemNameSchema, pageOf, personRefSchema, timeSchema } from './common.ts';
 
 export const machineKinds = ['wire', 'bow', 'laser', 'router'] as const;
 export type MachineKind = (typeof machineKinds)[number];
@@ -24,13 +24,6 @@ function number(label: string, unit: string, min: number, max: number) {
   return z.number({ error: range }).min(min, { error: range }).max(max, { error: range });
 }
 const feed = (label: string) => number(label, 'mm/min', PLAN_LIMITS.feedMmMin.min, PLAN_LIMITS.feedMmMin.max);
-
-const itemNameSchema = z
-  .string({ error: 'Give it a name.' })
-  .trim()
-  .min(1, 'Give it a name.')
-  .max(60, 'A name holds at most 60 characters.')
-  .regex(/^[^\p{Cc}\p{Zl}\p{Zp}]*$/u, 'A name is one line of plain text.');
 
 /** What a plan needs to know of a four-axis machine, but for its name. Lengths in mm, feeds in mm/min. */
 const wireSettingsSchema = wireMachineSchema

@@ -28,11 +28,14 @@ describe('the table of permissions', () => {
     );
     const reads = ['account.own', 'released.read', 'sections.read'];
     const all = [...reads, 'sections.write', 'versions.release', 'files.download', 'downloads.read'];
+    const sheets = ['cut-sheets.read', 'cut-sheets.write', 'cut-sheets.release'];
+    const floor = ['cuts.log', 'inspections.write'];
+    const cutting = [...sheets, ...floor, 'inspections.answer', 'shop.read'];
     expect(table).toEqual({
-      owner: [...all, 'shop.read', 'shop.write'],
-      designer: [...all, 'shop.read'],
-      builder: [...reads, 'files.download', 'downloads.read', 'shop.read', 'shop.write'],
-      technician: ['account.own', 'released.read', 'files.download', 'shop.read'],
+      owner: [...all, ...cutting, 'shop.write'],
+      designer: [...all, ...cutting],
+      builder: [...reads, 'files.download', 'downloads.read', ...cutting, 'shop.write'],
+      technician: ['account.own', 'released.read', 'files.download', ...floor, 'shop.read'],
       guest: [],
     });
   });

@@ -1,0 +1,157 @@
+import { z } from 'zod';
+import { idSchema, pageQuerySchema } from './common.ts';
+import {
+  cutSheetChangeSchema,
+  cutSheetCreateSchema,
+  cutSheetListQuerySchema,
+  cutSheetPageSchema,
+  cutSheetSchema,
+  sheetDownloadPageSchema,
+  sheetDraftInputSchema,
+  sheetDraftSchema,
+  sheetFilesSchema,
+  sheetVersionCreateSchema,
+  sheetVersionPageSchema,
+  sheetVersionSchema,
+} from './cut-sheets.ts';
+import { type Endpoint } from './endpoint.ts';
+import { releaseSchema, withdrawSchema } from './sections.ts';
+
+const sheetParams = z.object({ sheetId: idSchema });
+const versionParams = sheetParams.extend({ number: z.coerce.number().int().min(1).max(1_000_000) });
+const sheet = '/api/cut-sheets/:sheetId';
+const version = '/api/cut-sheets/:sheetId/versions/:number';
+
+/** The requests about cut sheets, their versions and files. */
+export const cutSheetEndpoints = {
+  listCutSheets: {
+    method: 'GET',
+    path: '/api/cut-sheets',
+    summary: 'The cut sheets',
+    permission: 'released.read',
+    query: cutSheetListQuerySchema,
+    reply: cutSheetPageSchema,
+  },
+  createCutSheet: {
+    method: 'POST',
+    path: '/api/cut-sheets',
+    summary: 'New cut sheet with version 1',
+    permission: 'cut-sheets.write',
+    body: cutSheetCreateSchema,
+    reply: cutSheetSchema,
+    status: 201,
+  },
+  getCutSheet: {
+    method: 'GET',
+    path: sheet,
+    summary: 'One cut sheet',
+    permission: 'released.read',
+    params: sheetParams,
+    reply: cutSheetSchema,
+  },
+  changeCutSheet: {
+    method: 'PATCH',
+    path: sheet,
+    summary: 'Name, purpose, archive or take back',
+    permission: 'cut-sheets.write',
+    params: sheetParams,
+    body: cutSheetChangeSchema,
+    reply: cutSheetSchema,
+  },
+  getSheetDraft: {
+    method: 'GET',
+    path: `${sheet}/draft`,
+    summary: 'Own unsaved plan',
+    permission: 'cut-sheets.write',
+    params: sheetParams,
+    reply: sheetDraftSchema,
+  },
+  keepSheetDraft: {
+    method: 'PUT',
+    path: `${sheet}/draft`,
+    summary: 'Keep an unsaved plan',
+    permission: 'cut-sheets.write',
+    params: sheetParams,
+    body: sheetDraftInputSchema,
+    reply: sheetDraftSchema,
+  },
+  dropSheetDraft: {
+    method: 'DELETE',
+    path: `${sheet}/draft`,
+    summary: 'Discard an unsaved plan',
+    permission: 'cut-sheets.write',
+    params: sheetParams,
+    reply: null,
+  },
+  listSheetVersions: {
+    method: 'GET',
+    path: `${sheet}/versions`,
+    summary: 'Versions, newest first',
+    permission: 'released.read',
+    params: sheetParams,
+    query: pageQuerySchema,
+    reply: sheetVersionPageSchema,
+  },
+  saveSheetVersion: {
+    method: 'POST',
+    path: `${sheet}/versions`,
+    summary: 'Save as the next version; 409 when another came in between',
+    permission: 'cut-sheets.write',
+    params: sheetParams,
+    body: sheetVersionCreateSchema,
+    reply: sheetVersionSchema,
+    status: 201,
+  },
+  getSheetVersion: {
+    method: 'GET',
+    path: version,
+    summary: 'One immutable version',
+    permission: 'released.read',
+    params: versionParams,
+    reply: sheetVersionSchema,
+  },
+  releaseSheetVersion: {
+    method: 'POST',
+    path: `${version}/release`,
+    summary: 'Release; refused while a finding is an error or a section version is not released',
+    permission: 'cut-sheets.release',
+    params: versionParams,
+    body: releaseSchema,
+    reply: sheetVersionSchema,
+  },
+  withdrawSheetVersion: {
+    method: 'POST',
+    path: `${version}/withdraw`,
+    summary: 'Withdraw a released version',
+    permission: 'cut-sheets.release',
+    params: versionParams,
+    body: withdrawSchema,
+    reply: sheetVersionSchema,
+  },
+  listSheetFiles: {
+    method: 'GET',
+    path: `${version}/files`,
+    summary: 'The files of a version with their checksums',
+    permission: 'files.download',
+    params: versionParams,
+    reply: sheetFilesSchema,
+  },
+  sheetFile: {
+    method: 'GET',
+    path: `${version}/files/:name`,
+    summary: 'One file of a version, such as core.nc or all.zip',
+    permission: 'files.download',
+    params: versionParams.extend({ name: z.string().regex(/^[a-z0-9-]{1,40}\.[a-z0-9]{1,8}$/) }),
+    reply: z.string(),
+    file: 'application/octet-stream',
+  },
+  listSheetDownloads: {
+    method: 'GET',
+    path: `${version}/downloads`,
+    summary: 'Who took which file',
+    permission: 'downloads.read',
+    params: versionParams,
+    query: pageQuerySchema,
+    reply: sheetDownloadPageSchema,
+  },
+} as const satisfies Record<string, Endpoint>;
