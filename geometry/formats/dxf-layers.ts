@@ -1,4 +1,5 @@
 import { LONG_DASH_DOT_MM, OUTLINE_WIDTH_MM, THIN_WIDTH_MM } from './drawing.ts';
+import type { DxfLayer } from './dxf-document.ts';
 import type { Layer } from './options.ts';
 
 export const CENTER = {
@@ -9,17 +10,10 @@ export const CENTER = {
   length: LONG_DASH_DOT_MM.reduce((sum, length) => sum + length, 0),
 };
 
-interface LayerStyle {
-  /** Colour number of the DXF reference: 7 black or white, 1 red, 5 blue, 3 green. */
-  readonly color: number;
-  readonly centerLine: boolean;
-  /** In hundredths of a millimetre, as group 370 wants it. */
-  readonly lineWeight: number;
-}
-
-export const LAYER_STYLES: Readonly<Record<Layer, LayerStyle>> = {
-  OUTLINE: { color: 7, centerLine: false, lineWeight: OUTLINE_WIDTH_MM * 100 },
-  CHORD: { color: 1, centerLine: true, lineWeight: THIN_WIDTH_MM * 100 },
-  CAMBER: { color: 5, centerLine: true, lineWeight: THIN_WIDTH_MM * 100 },
-  TEXT: { color: 3, centerLine: false, lineWeight: THIN_WIDTH_MM * 100 },
+/** The layers of a section's drawing. */
+export const SECTION_LAYERS: Readonly<Record<Layer, DxfLayer>> = {
+  OUTLINE: { name: 'OUTLINE', color: 7, centerLine: false, lineWeight: OUTLINE_WIDTH_MM * 100 },
+  CHORD: { name: 'CHORD', color: 1, centerLine: true, lineWeight: THIN_WIDTH_MM * 100 },
+  CAMBER: { name: 'CAMBER', color: 5, centerLine: true, lineWeight: THIN_WIDTH_MM * 100 },
+  TEXT: { name: 'TEXT', color: 3, centerLine: false, lineWeight: THIN_WIDTH_MM * 100 },
 };

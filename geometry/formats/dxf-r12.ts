@@ -1,7 +1,6 @@
-import type { Chain, Drawing, DrawingText } from './drawing.ts';
-import { CENTER, LAYER_STYLES } from './dxf-layers.ts';
-import { DxfTags, dxfVertices } from './dxf-tags.ts';
-import type { Layer } from './options.ts';
+import type { DxfDocument, DxfEntity, DxfLayer } from './dxf-document.ts';
+import { CENTER } from './dxf-layers.ts';
+import { type DxfPolyline, DxfTags, dxfVertices } from './dxf-tags.ts';
 
 const CLOSED = 1;
 const PATTERN_OVER_VERTICES = 128;
@@ -9,25 +8,20 @@ const SOLID_LINE = 65;
 /** R12 states no unit in its data, so the drawing carries a line of known length. */
 const TEST_LINE_MM = 100;
 
-export function writeR12(drawing: Drawing): string {
+export function writeR12(document: DxfDocument): string {
   const tags = new DxfTags();
-  for (const line of drawing.header) tags.text(999, line);
+  for (const line of document.comments) tags.text(999, line);
   tags.word(999, 'All lengths in millimetres');
-  header(tags, drawing);
-  tables(tags, drawing.layers);
+  header(tags, document);
+  tables(tags, document.layers);
   tags.word(0, 'SECTION').word(2, 'BLOCKS').word(0, 'ENDSEC');
   tags.word(0, 'SECTION').word(2, 'ENTITIES');
-  if (drawing.layers.includes('OUTLINE')) polyline(tags, 'OUTLINE', drawing.outline, true);
-  if (drawing.layers.includes('CHORD')) {
-    const [nose, edge] = drawing.chordLine;
-    line(tags, 'CHORD', nose.x, nose.y, edge.x, edge.y);
-  }
-  if (drawing.layers.includes('CAMBER')) polyline(tags, 'CAMBER', drawing.camberLine, false);
-  if (drawing.layers.includes('TEXT')) texts(tags, drawing.texts);
+  for (const entity of document.entities) writeEntity(tags, entity);
+  testLine(tags, document.entities);
   return tags.word(0, 'ENDSEC').word(0, 'EOF').toString();
 }
 
-function header(tags: DxfTags, { extents }: Drawing): void {
+function header(tags: DxfTags, { extents }: DxfDocument): void {
   tags.word(0, 'SECTION').word(2, 'HEADER');
   tags.word(9, '$ACADVER').word(1, 'AC1009');
   tags.word(9, '$INSBASE').point(10, 0, 0);
@@ -37,7 +31,7 @@ function header(tags: DxfTags, { extents }: Drawing): void {
   tags.word(0, 'ENDSEC');
 }
 
-function tables(tags: DxfTags, layers: readonly Layer[]): void {
+function tables(tags: DxfTags, layers: readonly DxfLayer[]): void {
   tags.word(0, 'SECTION').word(2, 'TABLES');
   tags.word(0, 'TABLE').word(2, 'LTYPE').whole(70, 2);
   lineType(tags, 'CONTINUOUS', 'Solid line', [], 0);
@@ -48,9 +42,8 @@ function tables(tags: DxfTags, layers: readonly Layer[]): void {
     .word(2, 'LAYER')
     .whole(70, layers.length + 1);
   layerRecord(tags, '0', 7, 'CONTINUOUS');
-  for (const layer of layers) {
-    const style = LAYER_STYLES[layer];
-    layerRecord(tags, layer, style.color, style.centerLine ? CENTER.name : 'CONTINUOUS');
+  for (const { name, color, centerLine } of layers) {
+    layerRecord(tags, name, color, centerLine ? CENTER.name : 'CONTINUOUS');
   }
   tags.word(0, 'ENDTAB');
   tags.word(0, 'TABLE').word(2, 'STYLE').whole(70, 1);
@@ -75,28 +68,44 @@ function layerRecord(tags: DxfTags, name: string, color: number, lineTypeName: s
   tags.word(0, 'LAYER').word(2, name).whole(70, 0).whole(62, color).word(6, lineTypeName);
 }
 
-function polyline(tags: DxfTags, layer: Layer, chain: Chain, closed: boolean): void {
+function writeEntity(tags: DxfTags, entity: DxfEntity): void {
+  switch (entity.kind) {
+    case 'polyline':
+      polyline(tags, entity);
+      break;
+    case 'line':
+      tags.word(0, 'LINE').word(8, entity.layer);
+      tags.point(10, entity.from.x, entity.from.y).point(11, entity.to.x, entity.to.y);
+      break;
+    case 'circle':
+      tags.word(0, 'CIRCLE').word(8, entity.layer).point(10, entity.center.x, entity.center.y);
+      tags.real(40, entity.radius);
+      break;
+    case 'text': {
+      const { text, x, y, height } = entity.text;
+      tags.word(0, 'TEXT').word(8, entity.layer).point(10, x, y).real(40, height).text(1, text);
+      tags.word(7, 'STANDARD');
+    }
+  }
+}
+
+function polyline(tags: DxfTags, entity: DxfPolyline): void {
+  const { layer, closed } = entity;
   tags.word(0, 'POLYLINE').word(8, layer).whole(66, 1).point(10, 0, 0);
   tags.whole(70, closed ? CLOSED : PATTERN_OVER_VERTICES);
-  for (const vertex of dxfVertices(chain, closed)) {
+  for (const vertex of dxfVertices(entity)) {
     tags.word(0, 'VERTEX').word(8, layer).vertex(vertex).real(30, 0).bulge(vertex);
   }
   tags.word(0, 'SEQEND').word(8, layer);
 }
 
-function line(tags: DxfTags, layer: Layer, x1: number, y1: number, x2: number, y2: number): void {
-  tags.word(0, 'LINE').word(8, layer).point(10, x1, y1).point(11, x2, y2);
-}
-
-function text(tags: DxfTags, { text: words, x, y, height }: DrawingText): void {
-  tags.word(0, 'TEXT').word(8, 'TEXT').point(10, x, y).real(40, height).text(1, words).word(7, 'STANDARD');
-}
-
-function texts(tags: DxfTags, lines: readonly DrawingText[]): void {
-  for (const words of lines) text(tags, words);
-  const last = lines.at(-1);
+/** Below the last text, with its height. */
+function testLine(tags: DxfTags, entities: readonly DxfEntity[]): void {
+  const last = entities.findLast((entity) => entity.kind === 'text');
   if (last === undefined) return;
-  const y = last.y - 2 * last.height;
-  text(tags, { ...last, text: `Test line ${TEST_LINE_MM} mm`, y });
-  line(tags, 'TEXT', last.x, y - last.height, last.x + TEST_LINE_MM, y - last.height);
+  const { layer, text } = last;
+  const y = text.y - 2 * text.height;
+  writeEntity(tags, { kind: 'text', layer, text: { ...text, text: `Test line ${TEST_LINE_MM} mm`, y } });
+  const from = { x: text.x, y: y - text.height };
+  writeEntity(tags, { kind: 'line', layer, from, to: { ...from, x: from.x + TEST_LINE_MM } });
 }

@@ -1,5 +1,5 @@
-import type { Drawing } from './drawing.ts';
-import { CENTER, LAYER_STYLES } from './dxf-layers.ts';
+import type { DxfDocument } from './dxf-document.ts';
+import { CENTER } from './dxf-layers.ts';
 import type { DxfTags } from './dxf-tags.ts';
 
 /** Handles that other sections refer to: the block records, which own the entities, and the plot style that every layer names. */
@@ -13,12 +13,12 @@ const SOLID_LINE = 65;
 const DEFAULT_LINE_WEIGHT = -3;
 
 /** The nine symbol tables of an AC1015 file, in the order of the DXF reference, each with the records that are referred to. */
-export function writeTables(tags: DxfTags, drawing: Drawing): TableHandles {
+export function writeTables(tags: DxfTags, document: DxfDocument): TableHandles {
   tags.word(0, 'SECTION').word(2, 'TABLES');
   const plotStyle = tags.handle();
-  table(tags, 'VPORT', 1, (owner) => viewport(tags, owner, drawing));
+  table(tags, 'VPORT', 1, (owner) => viewport(tags, owner, document));
   table(tags, 'LTYPE', 4, (owner) => lineTypes(tags, owner));
-  table(tags, 'LAYER', drawing.layers.length + 1, (owner) => layers(tags, owner, plotStyle, drawing));
+  table(tags, 'LAYER', document.layers.length + 1, (owner) => layers(tags, owner, plotStyle, document));
   table(tags, 'STYLE', 1, (owner) => {
     record(tags, 'STYLE', owner, 'AcDbTextStyleTableRecord', 'Standard').real(40, 0).real(41, 1).real(50, 0);
     tags.whole(71, 0).real(42, 2.5).word(3, 'txt').word(4, '');
@@ -56,7 +56,7 @@ function record(tags: DxfTags, type: string, owner: string, subclass: string, na
 }
 
 /** The view in which the drawing opens: the whole outline with some room about it. */
-function viewport(tags: DxfTags, owner: string, { extents }: Drawing): void {
+function viewport(tags: DxfTags, owner: string, { extents }: DxfDocument): void {
   const width = extents.maxX - extents.minX;
   record(tags, 'VPORT', owner, 'AcDbViewportTableRecord', '*Active');
   tags.point(10, 0, 0, true).point(11, 1, 1, true);
@@ -100,7 +100,7 @@ function lineType(
   for (const dash of pattern) tags.real(49, dash).whole(74, 0);
 }
 
-function layers(tags: DxfTags, owner: string, plotStyle: string, drawing: Drawing): void {
+function layers(tags: DxfTags, owner: string, plotStyle: string, document: DxfDocument): void {
   const layer = (name: string, color: number, lineTypeName: string, lineWeight: number) =>
     record(tags, 'LAYER', owner, 'AcDbLayerTableRecord', name)
       .whole(62, color)
@@ -108,9 +108,8 @@ function layers(tags: DxfTags, owner: string, plotStyle: string, drawing: Drawin
       .whole(370, lineWeight)
       .word(390, plotStyle);
   layer('0', 7, 'Continuous', DEFAULT_LINE_WEIGHT);
-  for (const name of drawing.layers) {
-    const style = LAYER_STYLES[name];
-    layer(name, style.color, style.centerLine ? CENTER.name : 'Continuous', style.lineWeight);
+  for (const { name, color, centerLine, lineWeight } of document.layers) {
+    layer(name, color, centerLine ? CENTER.name : 'Continuous', lineWeight);
   }
 }
 

@@ -1,7 +1,6 @@
-import type { Chain, Drawing } from './drawing.ts';
+import type { DxfDocument, DxfEntity } from './dxf-document.ts';
 import { writeTables, type TableHandles } from './dxf-r2000-tables.ts';
-import { DxfTags, dxfVertices } from './dxf-tags.ts';
-import type { Layer } from './options.ts';
+import { type DxfPolyline, DxfTags, dxfVertices } from './dxf-tags.ts';
 
 const MILLIMETRE = 4;
 const METRIC = 1;
@@ -9,20 +8,22 @@ const CLOSED = 1;
 const PATTERN_OVER_VERTICES = 128;
 
 /** The header states the first handle that is still free, so it is written last and put in front. */
-export function writeR2000(drawing: Drawing): string {
+export function writeR2000(document: DxfDocument): string {
   const body = new DxfTags();
-  const handles = writeTables(body, drawing);
+  const handles = writeTables(body, document);
   writeBlocks(body, handles);
-  writeEntities(body, drawing, handles.modelSpace);
+  body.word(0, 'SECTION').word(2, 'ENTITIES');
+  for (const entity of document.entities) writeEntity(body, entity, handles.modelSpace);
+  body.word(0, 'ENDSEC');
   writeObjects(body, handles);
 
   const file = new DxfTags();
-  for (const line of drawing.header) file.text(999, line);
-  writeHeader(file, drawing, body.handle());
+  for (const line of document.comments) file.text(999, line);
+  writeHeader(file, document, body.handle());
   return file.append(body).word(0, 'EOF').toString();
 }
 
-function writeHeader(tags: DxfTags, { extents }: Drawing, nextHandle: string): void {
+function writeHeader(tags: DxfTags, { extents }: DxfDocument, nextHandle: string): void {
   tags.word(0, 'SECTION').word(2, 'HEADER');
   tags.word(9, '$ACADVER').word(1, 'AC1015');
   tags.word(9, '$DWGCODEPAGE').word(3, 'ANSI_1252');
@@ -53,43 +54,41 @@ function writeBlocks(tags: DxfTags, handles: TableHandles): void {
 }
 
 function block(tags: DxfTags, name: string, record: string): void {
-  entity(tags, 'BLOCK', record, '0').word(100, 'AcDbBlockBegin');
+  beginRecord(tags, 'BLOCK', record, '0').word(100, 'AcDbBlockBegin');
   tags.word(2, name).whole(70, 0).point(10, 0, 0).word(3, name).word(1, '');
-  entity(tags, 'ENDBLK', record, '0').word(100, 'AcDbBlockEnd');
+  beginRecord(tags, 'ENDBLK', record, '0').word(100, 'AcDbBlockEnd');
 }
 
-function entity(tags: DxfTags, type: string, owner: string, layer: Layer | '0'): DxfTags {
+function beginRecord(tags: DxfTags, type: string, owner: string, layer: string): DxfTags {
   return tags.word(0, type).word(5, tags.handle()).word(330, owner).word(100, 'AcDbEntity').word(8, layer);
 }
 
-function writeEntities(tags: DxfTags, drawing: Drawing, owner: string): void {
-  tags.word(0, 'SECTION').word(2, 'ENTITIES');
-  if (drawing.layers.includes('OUTLINE')) polyline(tags, owner, 'OUTLINE', drawing.outline, true);
-  if (drawing.layers.includes('CHORD')) {
-    const [nose, edge] = drawing.chordLine;
-    entity(tags, 'LINE', owner, 'CHORD')
-      .word(100, 'AcDbLine')
-      .point(10, nose.x, nose.y)
-      .point(11, edge.x, edge.y);
-  }
-  if (drawing.layers.includes('CAMBER')) polyline(tags, owner, 'CAMBER', drawing.camberLine, false);
-  if (drawing.layers.includes('TEXT')) {
-    for (const { text, x, y, height } of drawing.texts) {
-      entity(tags, 'TEXT', owner, 'TEXT')
-        .word(100, 'AcDbText')
-        .point(10, x, y)
-        .real(40, height)
-        .text(1, text);
+function writeEntity(tags: DxfTags, entity: DxfEntity, owner: string): void {
+  switch (entity.kind) {
+    case 'polyline':
+      polyline(tags, owner, entity);
+      break;
+    case 'line':
+      beginRecord(tags, 'LINE', owner, entity.layer).word(100, 'AcDbLine');
+      tags.point(10, entity.from.x, entity.from.y).point(11, entity.to.x, entity.to.y);
+      break;
+    case 'circle':
+      beginRecord(tags, 'CIRCLE', owner, entity.layer).word(100, 'AcDbCircle');
+      tags.point(10, entity.center.x, entity.center.y).real(40, entity.radius);
+      break;
+    case 'text': {
+      const { text, x, y, height } = entity.text;
+      beginRecord(tags, 'TEXT', owner, entity.layer).word(100, 'AcDbText');
+      tags.point(10, x, y).real(40, height).text(1, text);
       tags.word(7, 'Standard').word(100, 'AcDbText');
     }
   }
-  tags.word(0, 'ENDSEC');
 }
 
-function polyline(tags: DxfTags, owner: string, layer: Layer, chain: Chain, closed: boolean): void {
-  const vertices = dxfVertices(chain, closed);
-  entity(tags, 'LWPOLYLINE', owner, layer).word(100, 'AcDbPolyline').whole(90, vertices.length);
-  tags.whole(70, closed ? CLOSED : PATTERN_OVER_VERTICES).real(43, 0);
+function polyline(tags: DxfTags, owner: string, entity: DxfPolyline): void {
+  const vertices = dxfVertices(entity);
+  beginRecord(tags, 'LWPOLYLINE', owner, entity.layer).word(100, 'AcDbPolyline').whole(90, vertices.length);
+  tags.whole(70, entity.closed ? CLOSED : PATTERN_OVER_VERTICES).real(43, 0);
   for (const vertex of vertices) tags.vertex(vertex).bulge(vertex);
 }
 

@@ -1,4 +1,4 @@
-import type { Chain } from './drawing.ts';
+import type { DxfEntity } from './dxf-document.ts';
 import { dxfText, fixed } from './text.ts';
 
 /** Decimals of lengths in mm: vertices lie within 0.000005 mm in x and y of what was computed. */
@@ -66,6 +66,8 @@ export class DxfTags {
   }
 }
 
+export type DxfPolyline = Extract<DxfEntity, { kind: 'polyline' }>;
+
 interface DxfVertex {
   readonly x: string;
   readonly y: string;
@@ -73,20 +75,21 @@ interface DxfVertex {
 }
 
 /**
- * The vertices as they are written. A vertex that rounding puts onto the one after it (in a closed chain also the last
- * onto the first) is left out, so that no piece has zero length.
+ * The vertices as they are written. Unless repeats are kept, a vertex that rounding puts onto the one after it (in a closed
+ * chain also the last onto the first) is left out, so that no piece has zero length.
  */
-export function dxfVertices(chain: Chain, closed: boolean): readonly DxfVertex[] {
+export function dxfVertices({ chain, closed, keepRepeats }: DxfPolyline): readonly DxfVertex[] {
   const vertices: DxfVertex[] = [];
   for (let i = 0; i < chain.x.length; i += 1) {
     const x = fixed(chain.x[i] ?? NaN, DXF_DECIMALS);
     const y = fixed(chain.y[i] ?? NaN, DXF_DECIMALS);
     const last = vertices.at(-1);
-    if (last !== undefined && last.x === x && last.y === y) vertices.pop();
+    if (!keepRepeats && last !== undefined && last.x === x && last.y === y) vertices.pop();
     vertices.push({ x, y, bulge: chain.bulge?.[i] ?? 0 });
   }
   const first = vertices[0];
   const last = vertices.at(-1);
-  if (closed && vertices.length > 1 && first?.x === last?.x && first?.y === last?.y) vertices.pop();
+  const repeated = vertices.length > 1 && first?.x === last?.x && first?.y === last?.y;
+  if (closed && !keepRepeats && repeated) vertices.pop();
   return vertices;
 }

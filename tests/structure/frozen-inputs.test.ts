@@ -7,7 +7,7 @@ import { datOptionsSchema, dxfOptionsSchema } from '#geometry/formats/options.ts
 import { roundContour } from '#geometry/formats/rounding.ts';
 import { similarityOf } from '#geometry/shapes/placement.ts';
 import { outlineOf, shapeSchema } from '#geometry/shapes/shape.ts';
-import { SMALL_DRAWING } from '#tests/geometry/formats/drawing-example.ts';
+import { SMALL_DOCUMENT, SMALL_DRAWING } from '#tests/geometry/formats/drawing-example.ts';
 import { MARSH } from '#tests/geometry/formats/identity-example.ts';
 import { FREE_FORM, naca4 } from '#tests/geometry/shapes/samples.ts';
 
@@ -124,9 +124,10 @@ const calls: Readonly<Record<string, () => readonly unknown[]>> = {
   contourPoints: () => [contour()],
   contourAt: () => [outline(), [0, 0.5, 1], [0, 0.5, 1]],
   writeDxf: () => [structuredClone(SMALL_DRAWING), 'r2000'],
-  writeR12: () => [structuredClone(SMALL_DRAWING)],
-  writeR2000: () => [structuredClone(SMALL_DRAWING)],
-  dxfVertices: () => [structuredClone(SMALL_DRAWING.outline), true],
+  writeDxfDocument: () => [structuredClone(SMALL_DOCUMENT), 'r2000'],
+  writeR12: () => [structuredClone(SMALL_DOCUMENT)],
+  writeR2000: () => [structuredClone(SMALL_DOCUMENT)],
+  dxfVertices: () => [{ layer: 'CUT', chain: structuredClone(SMALL_DRAWING.outline), closed: true }],
   writeSvg: () => [structuredClone(SMALL_DRAWING)],
   writeDat: () => [written(), 'Marsh', datOptionsSchema.parse({})],
   fileNameOf: () => [structuredClone(MARSH), 220, 'dxf'],

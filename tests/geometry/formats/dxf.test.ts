@@ -1,8 +1,8 @@
 import DxfParser from 'dxf-parser';
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { writeDxf } from '#geometry/formats/dxf.ts';
-import { SMALL_DRAWING } from './drawing-example.ts';
+import { writeDxf, writeDxfDocument } from '#geometry/formats/dxf.ts';
+import { SMALL_DOCUMENT, SMALL_DRAWING } from './drawing-example.ts';
 import { pairsOf, recordsOf, valuesOf, type Pair } from './dxf-pairs.ts';
 import { NASTY_NAMES } from './identity-example.ts';
 
@@ -20,6 +20,8 @@ interface ReadEntity {
   readonly shape?: boolean;
   readonly vertices?: readonly ReadVertex[];
   readonly text?: string;
+  readonly center?: { readonly x: number; readonly y: number };
+  readonly radius?: number;
 }
 
 function read(text: string) {
@@ -161,6 +163,31 @@ describe.each(RELEASES)('a %s drawing', (release) => {
       [50, -9],
     ]);
     expect(vertices[1]?.bulge).toBe(0.25);
+  });
+
+  test('holds each kind of entity, and keeps repeated vertices where they must stay in step', () => {
+    const document = SMALL_DOCUMENT;
+    const [polyline, line, circle, words] = read(writeDxfDocument(document, release)).entities;
+    expect(polyline?.vertices?.map(({ x, y }) => [x, y])).toEqual([
+      [50, 0],
+      [0, 5],
+    ]);
+    expect(line?.vertices?.map(({ x, y }) => [x, y])).toEqual([
+      [0, 1],
+      [2, 3],
+    ]);
+    expect(circle).toMatchObject({ type: 'CIRCLE', layer: 'CUT', radius: 1.5, center: { x: 20, y: 2 } });
+    expect(words).toMatchObject({ layer: 'TEXT', text: 'Reed wing v1' });
+    const [first, ...others] = document.entities;
+    if (first?.kind !== 'polyline') throw new Error('no polyline');
+    const inStep = { ...document, entities: [{ ...first, keepRepeats: true }, ...others] };
+    const vertices = read(writeDxfDocument(inStep, release)).entities[0]?.vertices;
+    expect(vertices?.map(({ x, y }) => [x, y])).toEqual([
+      [50, 0],
+      [50, 0],
+      [0, 5],
+      [50, 0],
+    ]);
   });
 
   test('refuses coordinates that are no numbers', () => {
