@@ -26,11 +26,12 @@ const PLAIN_LETTERS: Readonly<Record<string, string>> = {
  * @param extension without the point
  */
 export function fileNameOf(identity: FileIdentity, chordMm: number | null, extension: string): string {
-  const chord = chordMm === null ? 'unit' : `${Number(chordMm.toFixed(3))}mm`;
+  const chord = chordMm === null ? 'unit' : `${shortLength(chordMm)}mm`;
   return `${slugOf(identity.sectionName) || 'section'}_v${identity.versionNumber}_${chord}.${extension}`;
 }
 
-function slugOf(name: string): string {
+/** A name folded to a-z, 0-9 and `-`, at most 40 characters, neither beginning nor ending with `-`; may be empty. */
+export function slugOf(name: string): string {
   return name
     .toLowerCase()
     .replace(/[ßæœøđðħıłþ]/g, (letter) => PLAIN_LETTERS[letter] ?? '')
@@ -39,4 +40,9 @@ function slugOf(name: string): string {
     .replace(/[^a-z0-9]+/g, '-')
     .slice(0, SLUG_LENGTH)
     .replace(/^-+|-+$/g, '');
+}
+
+/** A length in mm for a file's name: at most three decimals. */
+export function shortLength(lengthMm: number): string {
+  return String(Number(lengthMm.toFixed(3)));
 }

@@ -1,8 +1,9 @@
 import { type Extents } from '../contour/contour.ts';
 import { type Outline, stationOf } from '../shapes/outline.ts';
-import { type Chain, type Drawing, type DrawingText } from './drawing.ts';
+import { type Chain, type Drawing } from './drawing.ts';
 import { type FileIdentity, headerLines, titleOf } from './identity.ts';
 import { type Layer } from './options.ts';
+import { textsBelow } from './text-block.ts';
 
 /** What a drawing of a section is made of; lengths in mm. */
 interface SectionDrawingParts {
@@ -31,20 +32,9 @@ export function sectionDrawing(parts: SectionDrawingParts): Drawing {
       { x: parts.chordMm, y: 0 },
     ],
     camberLine: camberLine(parts.outline, parts.chordMm, parts.toleranceMm),
-    texts: textsBelow(header, parts.chordMm, Math.min(parts.extents.minY, 0)),
+    texts: textsBelow(header, parts.chordMm, { x: 0, y: Math.min(parts.extents.minY, 0) }),
     extents: parts.extents,
   };
-}
-
-/** Heights of capitals in mm: the series of ISO 3098 (from memory). */
-const LETTER_HEIGHTS_MM = [1.8, 2.5, 3.5, 5, 7, 10, 14, 20];
-/** Letters of this height let a line of some 40 letters end within the chord. */
-const CHORD_SHARE = 1 / 40;
-const LINE_PITCH = 1.6;
-
-function textsBelow(lines: readonly string[], chordMm: number, lowest: number): readonly DrawingText[] {
-  const height = LETTER_HEIGHTS_MM.findLast((h) => h <= chordMm * CHORD_SHARE) ?? 1.8;
-  return lines.map((text, i) => ({ text, x: 0, y: lowest - height * (2.5 + LINE_PITCH * i), height }));
 }
 
 const CHECKS_PER_PIECE = 8;

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { fileNameOf } from '#geometry/formats/export.ts';
+import { fileNameOf, shortLength, slugOf } from '#geometry/formats/file-name.ts';
 import { MARSH, NASTY_NAMES } from './identity-example.ts';
 
 describe('fileNameOf', () => {
@@ -27,4 +27,14 @@ describe('fileNameOf', () => {
       }),
     );
   });
+});
+
+test('a name without a letter or digit that can be folded leaves nothing, a long one 40 characters', () => {
+  expect(slugOf('翼型 !')).toBe('');
+  expect(slugOf('Outer panel, left')).toBe('outer-panel-left');
+  expect(slugOf('a'.repeat(60))).toBe('a'.repeat(40));
+});
+
+test('a length in a name has at most three decimals and no exponent', () => {
+  expect([220, 215.9, 220.12345, 10].map(shortLength)).toEqual(['220', '215.9', '220.123', '10']);
 });
