@@ -12,11 +12,14 @@ export default defineConfig({
     passWithNoTests: false,
     allowOnly: false,
     dangerouslyIgnoreUnhandledErrors: false,
+    maxWorkers: 2,
     projects: [
       {
         root,
         test: {
           name: 'geometry',
+          // Pure functions leave nothing behind, so the files of a worker share what they have imported.
+          isolate: false,
           setupFiles: [...setupFiles, 'tests/setup-properties.ts'],
           include: ['tests/{geometry,reference,structure}/**/*.test.ts'],
         },
