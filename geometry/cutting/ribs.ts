@@ -8,6 +8,7 @@ import { type SheetLayout, packRibs } from './packing.ts';
 import { faceAt } from './panel.ts';
 import { offsetInStep } from './offset.ts';
 import { type Plan, type RibsPlan } from './plan.ts';
+import { strokeText, strokeWidth } from './strokes.ts';
 import { type Change, notchOf, splitByStrips, tabOf, withChanges, withoutRepeats } from './rib-outline.ts';
 
 /** One rib, in the panel's frame at its station: chord of the root level, so that all ribs stand alike on a flat board. */
@@ -21,8 +22,9 @@ export interface Rib {
   /** Round holes: tubes first, then lightening holes. */
   readonly tubes: readonly Polyline[];
   readonly holes: readonly Hole[];
-  /** Lines to engrave: the level line, and the lower surface where a tab is cut off later. */
+  /** Lines to engrave: the level line, the lower surface where a tab is cut off later, and the number in single strokes. */
   readonly engraved: readonly Polyline[];
+  /** The number's middle and height; its strokes are among `engraved`, none where there is no room. */
   readonly label: { readonly text: string; readonly at: Point; readonly heightMm: number };
   readonly areaMm2: number;
 }
@@ -133,8 +135,9 @@ function ribOf(
     holes.reduce((sum, { radius }) => sum + Math.PI * radius * radius, 0);
   const level = boardY === null ? [] : [levelLine(body)].filter((of) => of !== null);
   const removed = tabs.map(({ aft, fore }) => lowerBetween(body, fore, aft));
-  const label = labelAt(setting, number, outline, body, [...obstacles, ...holes]);
-  return { number, spanMm, outlines, tubes, holes, engraved: [...level, ...removed], label, areaMm2 };
+  const { strokes, ...label } = labelAt(setting, number, outline, body, [...obstacles, ...holes]);
+  const engraved = [...level, ...removed, ...strokes];
+  return { number, spanMm, outlines, tubes, holes, engraved, label, areaMm2 };
 }
 
 function tabsAt({ plan, core, rules, findings }: Setting, body: Polyline, share: number, boardY: number) {
@@ -215,6 +218,9 @@ function levelLine(body: Polyline): Polyline | null {
   return { x: Float64Array.of(Math.min(...crossings), Math.max(...crossings)), y: Float64Array.of(y, y) };
 }
 
+/** Numbers lower than this are not legible, mm; common practice. */
+const LEAST_NUMBER_MM = 1;
+
 /** Where the number has most room beside holes and edges; smaller where there is too little. */
 function labelAt(
   { rules, findings }: Setting,
@@ -222,7 +228,7 @@ function labelAt(
   outline: Polyline,
   body: Polyline,
   holes: readonly Hole[],
-): Rib['label'] {
+): Rib['label'] & { readonly strokes: readonly Polyline[] } {
   const room = roomsAlong(outline, body)
     .map(({ x, y, radius }) => ({
       x,
@@ -230,10 +236,19 @@ function labelAt(
       radius: Math.min(radius, ...holes.map((of) => Math.hypot(x - of.x, y - of.y) - of.radius)),
     }))
     .reduce((best, of) => (of.radius > best.radius ? of : best));
-  const heightMm = Math.min(rules.numberHeightMm, Math.max(1, room.radius));
+  const text = String(number);
+  // A box of the number's width and height lies in the round room.
+  const most = (2 * room.radius) / Math.hypot(strokeWidth(text), 1);
+  const place = { text, at: { x: room.x, y: room.y } };
+  if (most < LEAST_NUMBER_MM) {
+    const message = `Rib ${number} has no room for its number: write it on by hand.`;
+    findings.push(warning('number-without-room', 'ribs.numberHeightMm', message));
+    return { ...place, heightMm: LEAST_NUMBER_MM, strokes: [] };
+  }
+  const heightMm = Math.min(rules.numberHeightMm, most);
   if (heightMm < rules.numberHeightMm) {
     const message = `The number of rib ${number} is engraved ${mm(heightMm, 1)} high, because there is no room for more.`;
     findings.push(note('number-smaller', 'ribs.numberHeightMm', message));
   }
-  return { text: String(number), at: { x: room.x, y: room.y }, heightMm };
+  return { ...place, heightMm, strokes: strokeText(text, place.at, heightMm) };
 }

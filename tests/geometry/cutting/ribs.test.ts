@@ -117,8 +117,9 @@ test('jig tabs end on one board below the lowest rib, with a level line and the 
     const onBoard = Array.from(outline.y).filter((y) => y === boardY);
     expect(onBoard).toHaveLength(4);
     expect(crossingsByHand(outline)).toBe(0);
-    expect(rib.engraved).toHaveLength(3);
-    const [level, ...hidden] = rib.engraved;
+    // The level line, the surface hidden by each tab, and one stroke of the number's single digit.
+    expect(rib.engraved).toHaveLength(4);
+    const [level, ...hidden] = rib.engraved.slice(0, -1);
     expect(level!.y[0]).toBe(level!.y[1]);
     for (const line of hidden) {
       line.x.forEach((x, i) =>
@@ -147,15 +148,33 @@ test('a strip through both surfaces divides the rib', () => {
   expect(whole.areaMm2 - rib.areaMm2).toBeGreaterThan(3.1 * 15);
 });
 
-test('the number stands inside the rib and shrinks where there is no room', () => {
-  for (const { label, outlines, holes } of ribsOf(planWith({ ribs: RIBS })).ribs) {
-    expect(distanceTo(outlines[0]!, label.at.x, label.at.y)).toBeGreaterThan(0.5);
-    for (const hole of holes)
-      expect(Math.hypot(label.at.x - hole.x, label.at.y - hole.y)).toBeGreaterThan(hole.radius);
+test('the number is engraved inside the rib, clear of holes and tubes, and shrinks where there is no room', () => {
+  for (const numberHeightMm of [3, 25]) {
+    const plan = planWith({ ribs: { ...RIBS, jigTabs: null, numberHeightMm } });
+    for (const { label, outlines, holes, tubes, engraved } of ribsOf(plan).ribs) {
+      expect(engraved).toHaveLength(1);
+      const [stroke] = engraved;
+      const box = boxOf(stroke!);
+      expect(box.maxY - box.minY).toBeCloseTo(0.9 * label.heightMm, 9);
+      stroke!.x.forEach((x, i) => {
+        const y = at(stroke!.y, i);
+        // Half the stroke's thickness stays on its outside.
+        const clear = label.heightMm / 20 - 1e-9;
+        for (const line of [outlines[0]!, tubes[0]!]) expect(distanceTo(line, x, y)).toBeGreaterThan(clear);
+        for (const hole of holes)
+          expect(Math.hypot(x - hole.x, y - hole.y) - hole.radius).toBeGreaterThan(clear);
+      });
+    }
   }
   expect(codesOf(planWith({ ribs: { ...RIBS, numberHeightMm: 25 } }))).toContain(
     'number-smaller ribs.numberHeightMm',
   );
+});
+
+test('a rib too small for a number says so instead of cutting through it', () => {
+  const tiny = planWith({ ...prismOf(section('0004'), 20), ribs: { ...bare, numberHeightMm: 2 } });
+  expect(codesOf(tiny)).toContain('number-without-room ribs.numberHeightMm');
+  for (const { engraved } of ribsOf(tiny).ribs) expect(engraved).toEqual([]);
 });
 
 test('sheeting that fills a rib, and a rib larger than the sheet', () => {
