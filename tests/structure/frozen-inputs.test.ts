@@ -1,10 +1,11 @@
 import { expect, test } from 'vitest';
-import { type Contour } from '#geometry/contour/contour.ts';
+import { type Contour, contourPoints } from '#geometry/contour/contour.ts';
 import { sidesOf } from '#geometry/contour/chord-line.ts';
 import { arcContour } from '#geometry/contour/arcs.ts';
 import { sampleCosine } from '#geometry/contour/sampling.ts';
 import { datOptionsSchema, dxfOptionsSchema } from '#geometry/formats/options.ts';
 import { roundContour } from '#geometry/formats/rounding.ts';
+import { type MeasuredShape } from '#geometry/shapes/measured.ts';
 import { similarityOf } from '#geometry/shapes/placement.ts';
 import { outlineOf, shapeSchema } from '#geometry/shapes/shape.ts';
 import { SMALL_DOCUMENT, SMALL_DRAWING } from '#tests/geometry/formats/drawing-example.ts';
@@ -31,6 +32,11 @@ const shape = () => structuredClone(FREE_FORM);
 const outline = () => outlineOf(digits);
 const contour = () => sampleCosine(outline(), 20);
 const written = (): Contour => roundContour(contour(), 4);
+const measured = (): MeasuredShape => {
+  const points = contourPoints(contour());
+  const closed = [...points, points[0] ?? point()];
+  return { kind: 'measured', x: closed.map(({ x }) => x), y: closed.map(({ y }) => y) };
+};
 const arcs = () => arcContour(outline(), 1e-4);
 const line = () => sidesOf(outline()).line;
 const upper = () => outline().upper;
@@ -77,6 +83,15 @@ const calls: Readonly<Record<string, () => readonly unknown[]>> = {
   raiseOrder: () => [shape(), 'both', 8],
   lowerOrder: () => [shape(), 'both', 3],
   fitWeights: () => [{ n1: 0.5, n2: 1 }, 2, Float64Array.of(0, 0.2, 0.4, 0.6, 0.8), new Float64Array(5)],
+  splineThrough: () => [
+    [0, 1, 2],
+    [0, 1, 0],
+  ],
+  crossingSides: () => [
+    [0, 1, 1, 0],
+    [0, 0, 1, 1],
+  ],
+  measuredOutline: () => [measured()],
   crossesItself: () => [[point(), { x: 0.4, y: 0 }, { x: 0.3, y: -0.05 }]],
   checkShape: () => [shape()],
   outlineOf: () => [shape()],
