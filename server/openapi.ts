@@ -43,8 +43,8 @@ function refusalsOf(endpoint: Endpoint): number[] {
   const statuses: number[] = [500, 503];
   if (endpoint.permission !== 'public') statuses.push(401, 403);
   if (endpoint.params) statuses.push(404);
-  if (endpoint.query || endpoint.body) statuses.push(422);
-  if (endpoint.body) statuses.push(400, 409, 413, 415);
+  if (endpoint.query) statuses.push(422);
+  if (endpoint.body || endpoint.upload) statuses.push(400, 409, 413, 415, 422);
   if (endpoint.file) statuses.push(409);
   return [...new Set(statuses)].sort((a, b) => a - b);
 }
@@ -60,6 +60,18 @@ function problemResponse(name: EndpointName, status: number): Json {
   };
 }
 
+/** What an endpoint takes as a body: JSON, or one file of a form. */
+function requestBodyOf({ body, upload }: Endpoint): Json {
+  if (body) {
+    const content = { 'application/json': { schema: jsonSchema(body, 'input') } };
+    return { requestBody: { required: true, content } };
+  }
+  if (!upload) return {};
+  const file = { type: 'string', format: 'binary', description: `At most ${upload.maxBytes} bytes` };
+  const schema = { type: 'object', properties: { file }, required: ['file'], additionalProperties: false };
+  return { requestBody: { required: true, content: { 'multipart/form-data': { schema } } } };
+}
+
 function operationOf(name: EndpointName): Json {
   const endpoint: Endpoint = endpoints[name];
   const isPublic = endpoint.permission === 'public';
@@ -72,14 +84,7 @@ function operationOf(name: EndpointName): Json {
       : { description: `For: ${permissions[endpoint.permission].join(', ')}.` }),
     security: isPublic ? [] : [{ session: [] }],
     parameters: [...parametersOf(endpoint.params, 'path'), ...parametersOf(endpoint.query, 'query')],
-    ...(endpoint.body
-      ? {
-          requestBody: {
-            required: true,
-            content: { 'application/json': { schema: jsonSchema(endpoint.body, 'input') } },
-          },
-        }
-      : {}),
+    ...requestBodyOf(endpoint),
     responses: { ...successOf(endpoint), ...Object.fromEntries(refusals) },
   };
 }

@@ -7,6 +7,7 @@ import { Refusal } from '#server/refusal.ts';
 import { sendFile } from './file.ts';
 import { type Call, type FileReply, type Handlers } from './handlers.ts';
 import { inputOf } from './input.ts';
+import { readUpload } from './upload.ts';
 
 /** The longest body a request may have; the largest shape takes about one kilobyte. */
 const BODY_LIMIT = '32kb';
@@ -46,7 +47,8 @@ function answer(name: EndpointName, handlers: Handlers): RequestHandler {
   return async (request, response) => {
     response.setHeader('Cache-Control', 'private, no-store');
     const person = (response.locals['person'] ?? null) as Call<EndpointName>['person'];
-    const call = { ...inputOf(endpoint, request), person, now: new Date(), request, response };
+    const upload: unknown = response.locals['upload'];
+    const call = { ...inputOf(endpoint, request), upload, person, now: new Date(), request, response };
     const reply = await handle(call as Call<EndpointName>);
     if (endpoint.file) return sendFile(request, response, reply as FileReply);
     sendReply(response, endpoint, reply);
@@ -58,9 +60,10 @@ export function apiRoutes(handlers: Handlers, authenticate: Authenticate): Route
   const router = Router({ caseSensitive: true, strict: true });
   const methods = new Map<string, string[]>();
   for (const name of Object.keys(endpoints) as EndpointName[]) {
-    const { method, path }: Endpoint = endpoints[name];
+    const { method, path, upload }: Endpoint = endpoints[name];
     const verb = method.toLowerCase() as 'get' | 'post' | 'put' | 'patch' | 'delete';
-    router[verb](path, guard(endpoints[name], authenticate), jsonBody, answer(name, handlers));
+    const readBody = upload ? readUpload(upload.maxBytes) : jsonBody;
+    router[verb](path, guard(endpoints[name], authenticate), readBody, answer(name, handlers));
     methods.set(path, [...(methods.get(path) ?? []), ...(method === 'GET' ? ['GET', 'HEAD'] : [method])]);
   }
   for (const [path, allowed] of methods) {

@@ -86,7 +86,8 @@ describe('the OpenAPI document', () => {
       expect(Object.keys(success[1].content ?? {})).toEqual(
         endpoint.reply === null ? [] : [endpoint.file ?? 'application/json'],
       );
-      expect(operation.requestBody === undefined).toBe(endpoint.body === undefined);
+      const taken = endpoint.body ? ['application/json'] : endpoint.upload ? ['multipart/form-data'] : [];
+      expect(Object.keys(operation.requestBody?.content ?? {})).toEqual(taken);
       expect('401' in operation.responses).toBe(endpoint.permission !== 'public');
       expect(operation.parameters.some((parameter) => parameter.in === 'query')).toBe(
         endpoint.query !== undefined,
