@@ -1,18 +1,22 @@
-import { useInfiniteQuery } from '@tanstack/react-query';
-import { downloadsQuery } from '#client/api/sections.ts';
+import { type InfiniteData, type UseInfiniteQueryResult } from '@tanstack/react-query';
 import { ErrorState } from '#client/ui/error-state.tsx';
-import { Skeleton } from '#client/ui/skeleton.tsx';
 import { Moment } from '#client/ui/moment.tsx';
+import { Skeleton } from '#client/ui/skeleton.tsx';
 
-/** Who took which file of this version; for those who answer for what was cut. */
+interface TakenFile {
+  readonly id: string;
+  readonly fileName: string;
+  readonly checksum: string;
+  readonly at: string;
+  readonly person: { readonly name: string };
+}
+
+/** Who took which file of a version; for those who answer for what was cut. */
 export function DownloadsList({
-  sectionId,
-  number,
+  query,
 }: {
-  readonly sectionId: string;
-  readonly number: number;
+  readonly query: UseInfiniteQueryResult<InfiniteData<{ readonly items: readonly TakenFile[] }>>;
 }) {
-  const query = useInfiniteQuery(downloadsQuery(sectionId, number));
   if (query.isPending) return <Skeleton className="h-16 w-full" />;
   if (query.isError && !query.data)
     return <ErrorState error={query.error} retry={() => void query.refetch()} />;

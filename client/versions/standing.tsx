@@ -3,7 +3,10 @@ import { Link } from 'react-router';
 import { type SectionVersion } from '#server/contracts/sections.ts';
 
 interface StandingProps {
-  readonly version: SectionVersion;
+  readonly version: Pick<SectionVersion, 'status' | 'statusAt' | 'statusBy' | 'statusReason'>;
+  /** What the versions are of: "section" or "cut sheet". */
+  readonly noun: string;
+  readonly pathOf: (number: number) => string;
   /** Number of the version in force, null when none is, undefined while it is not known. */
   readonly inForce: number | null | undefined;
 }
@@ -11,11 +14,11 @@ interface StandingProps {
 const DAY = new Intl.DateTimeFormat(undefined, { day: 'numeric', month: 'short', year: 'numeric' });
 
 /** Says in a sentence whether this version may be cut, since when, why, and which one is in force instead. */
-export function Standing({ version, inForce }: StandingProps) {
+export function Standing({ version, noun, pathOf, inForce }: StandingProps) {
   const since = version.statusAt === null ? '' : ` on ${DAY.format(new Date(version.statusAt))}`;
   const by = version.statusBy === null ? '' : ` by ${version.statusBy.name}`;
   const reason = version.statusReason === '' ? '' : ` ${asSentence(version.statusReason)}`;
-  const instead = <InForce sectionId={version.sectionId} inForce={inForce} />;
+  const instead = <InForce noun={noun} pathOf={pathOf} inForce={inForce} />;
   switch (version.status) {
     case 'released':
       return (
@@ -50,18 +53,12 @@ function Line({ className, children }: { readonly className: string; readonly ch
   return <p className={`border-l-[3px] py-1 pl-3 print:hidden ${className}`}>{children}</p>;
 }
 
-function InForce({
-  sectionId,
-  inForce,
-}: {
-  readonly sectionId: string;
-  readonly inForce: StandingProps['inForce'];
-}) {
+function InForce({ noun, pathOf, inForce }: Omit<StandingProps, 'version'>) {
   if (inForce === undefined) return null;
-  if (inForce === null) return <>No version of this section is in force.</>;
+  if (inForce === null) return <>No version of this {noun} is in force.</>;
   return (
     <>
-      <Link className="font-semibold underline underline-offset-4" to={versionPath(sectionId, inForce)}>
+      <Link className="font-semibold underline underline-offset-4" to={pathOf(inForce)}>
         Version {inForce}
       </Link>{' '}
       is in force.

@@ -1,7 +1,9 @@
 import { LENGTH_LIMITS } from '#geometry/formats/options.ts';
+import { useInfiniteQuery } from '@tanstack/react-query';
 import { useMemo, useState } from 'react';
 import { Link, useSearchParams } from 'react-router';
 import { type SectionVersion } from '#server/contracts/sections.ts';
+import { downloadsQuery } from '#client/api/sections.ts';
 import { useMay, useMe } from '#client/app/session.tsx';
 import { formatLength, useUnits } from '#client/app/units.ts';
 import { drawSection } from '#client/drawing/section-drawing.ts';
@@ -15,7 +17,7 @@ import { ExportPanel } from './export-panel.tsx';
 import { Part } from './part.tsx';
 import { ReleaseDialog, WithdrawDialog } from './release-dialog.tsx';
 import { ShapeValues } from './shape-values.tsx';
-import { Standing } from './standing.tsx';
+import { Standing, versionPath } from './standing.tsx';
 import { VersionRecord } from './version-record.tsx';
 
 interface VersionViewProps {
@@ -30,6 +32,7 @@ export function VersionView({ version, inForce }: VersionViewProps) {
   const [open, setOpen] = useState<OpenDialog>(null);
   const [chordMm, setChordMm] = useChord();
   const units = useUnits();
+  const readsDownloads = useMay('downloads.read');
   const owner = useMe().workshop.name;
   const drawing = useMemo(() => drawSection(version.shape), [version.shape]);
   const close = () => setOpen(null);
@@ -38,7 +41,12 @@ export function VersionView({ version, inForce }: VersionViewProps) {
       <title>{`${version.sectionName} v${version.number} · Ribwright`}</title>
       <div className="flex min-w-0 flex-col gap-3 p-4 print:p-0">
         <Head version={version} inForce={inForce} onOpen={setOpen} />
-        <Standing version={version} inForce={inForce} />
+        <Standing
+          version={version}
+          noun="section"
+          pathOf={(number) => versionPath(version.sectionId, number)}
+          inForce={inForce}
+        />
         <div className="lg:max-w-[calc((100dvh-11rem)*1.5)] print:max-w-none">
           <StaticSheet shape={version.shape} chordMm={chordMm} title={titleOf(version, owner)} />
         </div>
@@ -67,7 +75,7 @@ export function VersionView({ version, inForce }: VersionViewProps) {
         <Part title="Record">
           <VersionRecord version={version} />
         </Part>
-        <Downloads version={version} />
+        {readsDownloads && <Downloads version={version} />}
       </aside>
       {open === 'export' && <ExportPanel version={version} chordMm={chordMm} onClose={close} />}
       {open === 'release' && <ReleaseDialog version={version} onClose={close} />}
@@ -141,10 +149,10 @@ function Head({
 }
 
 function Downloads({ version }: { readonly version: SectionVersion }) {
-  if (!useMay('downloads.read')) return null;
+  const query = useInfiniteQuery(downloadsQuery(version.sectionId, version.number));
   return (
     <Part title="Downloads">
-      <DownloadsList sectionId={version.sectionId} number={version.number} />
+      <DownloadsList query={query} />
     </Part>
   );
 }

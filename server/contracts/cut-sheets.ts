@@ -195,5 +195,11 @@ export type SheetFile = z.infer<typeof sheetFileSchema>;
 export const sheetFilesSchema = z.object({ items: z.array(sheetFileSchema) });
 
 export const sheetDownloadPageSchema = pageOf(
-  z.object({ id: idSchema, person: personRefSchema, name: z.string(), checksum: z.string(), at: timeSchema }),
+  z.object({
+    id: idSchema,
+    person: personRefSchema,
+    fileName: z.string(),
+    checksum: z.string(),
+    at: timeSchema,
+  }),
 );

@@ -1,7 +1,7 @@
 import { Button } from '#client/ui/button.tsx';
 import { SelectField } from '#client/ui/select-field.tsx';
 import { type ListAddress, type Sort } from './list-address.ts';
-import { SearchField } from './search-field.tsx';
+import { SearchField } from '#client/ui/search-field.tsx';
 
 const STATUSES = [
   { value: '', label: 'Any status' },
