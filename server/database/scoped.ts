@@ -1,7 +1,7 @@
 import { type Knex } from 'knex';
 
 /** Tables whose rows belong to a workshop: all but the workshops themselves. */
-type WorkshopTable =
+export type WorkshopTable =
   | 'people'
   | 'sections'
   | 'section_versions'
@@ -9,10 +9,15 @@ type WorkshopTable =
   | 'downloads'
   | 'machines'
   | 'materials'
-  | 'kerfs';
+  | 'kerfs'
+  | 'cut_sheets'
+  | 'cut_sheet_versions'
+  | 'cut_sheet_drafts'
+  | 'cut_files'
+  | 'cut_downloads';
 
 /** A row to be written, without the workshop: that comes from the scope and from nowhere else. */
-type NewRow = Readonly<Record<string, string | number | boolean | Date | null>>;
+type NewRow = Readonly<Record<string, string | number | boolean | Date | Buffer | null>>;
 
 /** The tables of one workshop. */
 interface Scope {

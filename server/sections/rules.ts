@@ -64,9 +64,9 @@ export function checkBase(basedOn: number, latestNumber: number): void {
   throw refuseField('basedOn', `There is no version ${basedOn}; the newest is ${latestNumber}.`);
 }
 
-/** What is said to a change of a section that is put away. */
-export function archived(): Refusal {
-  return new Refusal('archived', { detail: 'Take the section back from the archive first.' });
+/** What is said to a change of something that is put away. */
+export function archived(what: 'section' | 'cut sheet' = 'section'): Refusal {
+  return new Refusal('archived', { detail: `Take the ${what} back from the archive first.` });
 }
 
 const sentences: Readonly<Record<VersionStatus, string>> = {
@@ -78,13 +78,19 @@ const sentences: Readonly<Record<VersionStatus, string>> = {
 
 /**
  * Whether a version may take a new status: from draft to released, from released to superseded or withdrawn.
+ * @param holds what a version of that kind holds
  * @throws Refusal `status-conflict` with a sentence that says how the version stands
  */
-export function checkTransition(number: number, from: VersionStatus, to: 'released' | 'withdrawn'): void {
+export function checkTransition(
+  number: number,
+  from: VersionStatus,
+  to: 'released' | 'withdrawn',
+  holds: 'shape' | 'plan' = 'shape',
+): void {
   const needed = to === 'released' ? 'draft' : 'released';
   if (from === needed) return;
   const advice =
-    to === 'released' && from !== 'released' ? ' Save its shape as a new version and release that.' : '';
+    to === 'released' && from !== 'released' ? ` Save its ${holds} as a new version and release that.` : '';
   throw new Refusal('status-conflict', { detail: `Version ${number} ${sentences[from]}.${advice}` });
 }
 

@@ -2,13 +2,13 @@ import { type Knex } from 'knex';
 import { v7 as uuid } from 'uuid';
 import { type Shape } from '#geometry/shapes/shape.ts';
 import { type Section, type VersionStatus } from '#server/contracts/sections.ts';
+import { once } from '#server/database/once.ts';
 import { scoped } from '#server/database/scoped.ts';
 import { Refusal } from '#server/refusal.ts';
 import { describe, requestChecksum } from './described.ts';
 import { findSection } from './library/store.ts';
 import { type Author, type Reach } from './rules.ts';
-import { addVersion, latestColumns } from './versions/rows.ts';
-import { once } from './versions/once.ts';
+import { addVersion, latestColumns, versionKeys } from './versions/rows.ts';
 
 /** What decisions about a section need to know of it. */
 interface SectionState {
@@ -77,31 +77,37 @@ export async function createSection(db: Knex, author: Author, input: SectionInpu
   const shape = describe(input.shape);
   const { name, purpose, note } = input;
   const request = requestChecksum('section', author.personId, name, purpose, note, shape.checksum);
-  const made = await once(db, author, { key: input.key, request }, async (transaction) => {
-    const sectionId = uuid();
-    const scope = scoped(transaction, author.workshopId);
-    await scope.insert('sections', {
-      id: sectionId,
-      name,
-      purpose,
-      ...latestColumns(null, shape),
-      updated_at: author.at,
-      updated_by: author.personId,
-      created_at: author.at,
-    });
-    await addVersion(transaction, author, {
-      sectionId,
-      number: 1,
-      basedOn: null,
-      shape,
-      note,
-      key: input.key,
-      request,
-    });
-    await scope.table('sections').where({ id: sectionId }).update({ latest_number: 1 });
-    return { sectionId, number: 1 };
-  });
-  return findSection(db, author.workshopId, made.sectionId, 'all');
+  const made = await once(
+    db,
+    author.workshopId,
+    versionKeys,
+    { key: input.key, request },
+    async (transaction) => {
+      const sectionId = uuid();
+      const scope = scoped(transaction, author.workshopId);
+      await scope.insert('sections', {
+        id: sectionId,
+        name,
+        purpose,
+        ...latestColumns(null, shape),
+        updated_at: author.at,
+        updated_by: author.personId,
+        created_at: author.at,
+      });
+      await addVersion(transaction, author, {
+        sectionId,
+        number: 1,
+        basedOn: null,
+        shape,
+        note,
+        key: input.key,
+        request,
+      });
+      await scope.table('sections').where({ id: sectionId }).update({ latest_number: 1 });
+      return { section_id: sectionId, number: 1 };
+    },
+  );
+  return findSection(db, author.workshopId, made.section_id, 'all');
 }
 
 interface SectionChange {

@@ -2,19 +2,29 @@ import { type Knex } from 'knex';
 import { v7 as uuid } from 'uuid';
 import { type SectionVersion, type VersionStatus } from '#server/contracts/sections.ts';
 import { type Shape } from '#geometry/shapes/shape.ts';
+import { type Keyed, keyColumns, type KeyKeeping } from '#server/database/once.ts';
 import { joinScoped, scoped } from '#server/database/scoped.ts';
 import { type DescribedShape } from '../described.ts';
 import { type Author } from '../rules.ts';
 
-interface NewVersion {
+/** The version that a request has made. */
+interface Made {
+  readonly section_id: string;
+  readonly number: number;
+}
+
+export const versionKeys: KeyKeeping<Made> = {
+  table: 'section_versions',
+  uniqueKey: 'versions_idempotency',
+  columns: ['section_id', 'number'],
+};
+
+interface NewVersion extends Keyed {
   readonly sectionId: string;
   readonly number: number;
   readonly basedOn: number | null;
   readonly shape: DescribedShape;
   readonly note: string;
-  readonly key: string | undefined;
-  /** Sum of the request, kept beside its key. */
-  readonly request: string;
 }
 
 /** Writes a version as a draft. */
@@ -33,8 +43,7 @@ export async function addVersion(db: Knex, author: Author, version: NewVersion):
     note: version.note,
     author_id: author.personId,
     created_at: author.at,
-    idempotency_key: version.key ?? null,
-    request_checksum: version.key === undefined ? null : version.request,
+    ...keyColumns(version),
   });
 }
 

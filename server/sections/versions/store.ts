@@ -3,14 +3,14 @@ import { z } from 'zod';
 import { type Shape } from '#geometry/shapes/shape.ts';
 import { type SectionVersion } from '#server/contracts/sections.ts';
 import { decodeCursor, encodeCursor, pageOfRows } from '#server/database/cursor.ts';
+import { madeBefore, once } from '#server/database/once.ts';
 import { scoped } from '#server/database/scoped.ts';
 import { Refusal } from '#server/refusal.ts';
 import { describe, requestChecksum } from '../described.ts';
 import { dropSavedDraft } from '../drafts/store.ts';
 import { type Author, checkSave, type Reach, statusesFor } from '../rules.ts';
 import { sectionState } from '../store.ts';
-import { madeBefore, once } from './once.ts';
-import { addVersion, latestColumns, versionOf, versionRows } from './rows.ts';
+import { addVersion, latestColumns, versionKeys, versionOf, versionRows } from './rows.ts';
 
 /**
  * One version.
@@ -86,9 +86,9 @@ export async function saveVersion(
     note,
     shape.checksum,
   );
-  const made = await once(db, author, { key, request }, async (transaction) => {
+  const made = await once(db, author.workshopId, versionKeys, { key, request }, async (transaction) => {
     const section = await sectionState(transaction, author.workshopId, sectionId, { lock: true });
-    const before = await madeBefore(transaction, author, { key, request });
+    const before = await madeBefore(transaction, author.workshopId, versionKeys, { key, request });
     if (before) return before;
     const base = await shapeOf(transaction, author.workshopId, section.id, basedOn);
     if (checkSave({ ...section, base }, input) === 'conflict') {
@@ -119,9 +119,9 @@ export async function saveVersion(
       .where({ id: section.id })
       .update({ ...latestColumns(number, shape), updated_at: author.at, updated_by: author.personId });
     await dropSavedDraft(transaction, author, section.id, input.shape);
-    return { sectionId: section.id, number };
+    return { section_id: section.id, number };
   });
-  return findVersion(db, author.workshopId, made.sectionId, made.number, 'all');
+  return findVersion(db, author.workshopId, made.section_id, made.number, 'all');
 }
 
 async function shapeOf(
