@@ -2,7 +2,7 @@ import { type Polyline, at, between, boxOf } from './arrays.ts';
 import { type ExpectedCore } from './expected-core.ts';
 import { stepLength } from './feed.ts';
 import { type Finding, error, mm } from './findings.ts';
-import { type WirePlan } from './plan.ts';
+import { type WireSetup } from './plan.ts';
 import { type ReadMove } from './read-program.ts';
 
 /** Findings of one kind beyond this number are counted instead of listed. */
@@ -18,7 +18,7 @@ interface Faces {
 
 /** What the moves of a program overstep: travel, the machine's and the material's feed, and the block while a core is cut. */
 export function limitBreaches(
-  plan: WirePlan,
+  setup: WireSetup,
   moves: readonly ReadMove[],
   faces: Faces,
   cores: readonly ExpectedCore[],
@@ -27,13 +27,13 @@ export function limitBreaches(
   for (let i = 1; i < moves.length; i++) {
     const [from, to] = [moves[i - 1], moves[i]];
     if (!from || !to) continue;
-    findings.push(...travelBreach(plan, to), ...feedBreaches(plan, from, to, faces, i));
+    findings.push(...travelBreach(setup, to), ...feedBreaches(setup, from, to, faces, i));
   }
-  findings.push(...blockBreaches(plan, moves, faces, cores));
+  findings.push(...blockBreaches(setup, moves, faces, cores));
   return shortened(findings);
 }
 
-function travelBreach({ machine }: WirePlan, { line, leftX, leftY, rightX, rightY }: ReadMove): Finding[] {
+function travelBreach({ machine }: WireSetup, { line, leftX, leftY, rightX, rightY }: ReadMove): Finding[] {
   const { axes } = machine.controller;
   const checks = [
     [axes.leftX, leftX, machine.travelXMm, 'travelXMm'],
@@ -48,8 +48,8 @@ function travelBreach({ machine }: WirePlan, { line, leftX, leftY, rightX, right
   });
 }
 
-function feedBreaches(plan: WirePlan, from: ReadMove, to: ReadMove, faces: Faces, i: number): Finding[] {
-  const { machine, material } = plan;
+function feedBreaches(setup: WireSetup, from: ReadMove, to: ReadMove, faces: Faces, i: number): Finding[] {
+  const { machine, material } = setup;
   const found: Finding[] = [];
   const speed = (way: number) => (way === 0 ? 0 : (60 * way) / to.seconds);
   const axis = Math.max(
@@ -61,7 +61,7 @@ function feedBreaches(plan: WirePlan, from: ReadMove, to: ReadMove, faces: Faces
   }
   const wire = Math.max(
     ...([faces.left, faces.right] as const).map((face) =>
-      inFoam(plan, face, i) ? speed(stepLength(face, i)) : 0,
+      inFoam(setup, face, i) ? speed(stepLength(face, i)) : 0,
     ),
   );
   if (wire > material.maxFeedMmMin * (1 + RELATIVE)) {
@@ -78,7 +78,7 @@ interface Rectangle {
   readonly maxY: number;
 }
 
-function blockOf({ machine, block }: WirePlan): Rectangle {
+function blockOf({ machine, block }: WireSetup): Rectangle {
   return {
     minX: machine.blockXMm,
     maxX: machine.blockXMm + block.lengthMm,
@@ -88,8 +88,8 @@ function blockOf({ machine, block }: WirePlan): Rectangle {
 }
 
 /** True when a segment of a face's path passes through the block (clipped against its sides). */
-function inFoam(plan: WirePlan, { x, y }: Polyline, i: number): boolean {
-  const { minX, maxX, minY, maxY } = blockOf(plan);
+function inFoam(setup: WireSetup, { x, y }: Polyline, i: number): boolean {
+  const { minX, maxX, minY, maxY } = blockOf(setup);
   let [from, to] = [0, 1];
   for (const [start, end, low, high] of [
     [at(x, i - 1), at(x, i), minX, maxX],
@@ -109,12 +109,12 @@ function inFoam(plan: WirePlan, { x, y }: Polyline, i: number): boolean {
 
 /** Moves that cut the core's surface where there is no foam: the core would not come out whole. */
 function blockBreaches(
-  plan: WirePlan,
+  setup: WireSetup,
   moves: readonly ReadMove[],
   faces: Faces,
   cores: readonly ExpectedCore[],
 ): Finding[] {
-  const block = blockOf(plan);
+  const block = blockOf(setup);
   return (['left', 'right'] as const).flatMap((side) => {
     const face = faces[side];
     return cores.flatMap((core) => {

@@ -309,6 +309,14 @@ export type Plan = z.infer<typeof planSchema>;
 export type FoamPlan = Plan & { readonly block: BlockPlan; readonly material: Material };
 /** A plan that a wire machine cuts. */
 export type WirePlan = FoamPlan & { readonly machine: Machine };
+/** What a program and its simulation need to know beside the wire's path; every `WirePlan` is one. */
+export interface WireSetup {
+  readonly machine: Machine;
+  readonly material: Material;
+  readonly block: Pick<BlockPlan, 'lengthMm' | 'heightMm'>;
+  /** Between the two faces in which the path is given. */
+  readonly panel: Pick<PanelPlan, 'spanMm'>;
+}
 export type PanelPlan = z.infer<typeof panelSchema>;
 export type Feature = z.infer<typeof featureSchema>;
 export type BlockPlan = z.infer<typeof blockSchema>;

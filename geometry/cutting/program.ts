@@ -1,6 +1,6 @@
 import { type Polyline, at } from './arrays.ts';
 import { moveSeconds } from './feed.ts';
-import { type Controller, type WirePlan } from './plan.ts';
+import { type Controller, type WirePlan, type WireSetup } from './plan.ts';
 import { comment, commentText, decimal } from './program-text.ts';
 import { type Bench, benchOf, fromTowers, toTowers } from './towers.ts';
 import { type WirePath } from './wire-path.ts';
@@ -25,6 +25,11 @@ export interface Program {
   readonly totalSeconds: number;
 }
 
+/** On every program. */
+const CAUTIONS = [
+  comment('Caution', 'dry run with a cold wire first, emergency stop in reach'),
+  comment('Caution', 'hot wire and styrene vapour, cut with ventilation'),
+];
 const FEED_DECIMALS = 6;
 const CHECKSUM_DIGITS = 12;
 
@@ -34,19 +39,27 @@ const CHECKSUM_DIGITS = 12;
  * that the program never runs faster than planned.
  */
 export function writeProgram(plan: WirePlan, path: WirePath, identity: ProgramIdentity): Program {
-  const { controller } = plan.machine;
-  const bench = benchOf(plan);
+  return programOf(plan, path, headerOf(plan, identity));
+}
+
+/**
+ * The program of a path behind given comments, by the rules of `writeProgram`.
+ * @param head comment lines in parentheses
+ */
+export function programOf(setup: WireSetup, path: WirePath, head: readonly string[]): Program {
+  const { controller } = setup.machine;
+  const bench = benchOf(setup);
   const towers = roundedTowers(bench, path, controller.decimals);
   const faces = {
     left: fromTowers(bench, towers, bench.leftFaceMm),
     right: fromTowers(bench, towers, bench.rightFaceMm),
   };
-  const lines: string[] = [...headerOf(plan, identity), 'G21 G90', ...controller.header];
+  const lines: string[] = [...head, ...CAUTIONS, 'G21 G90', ...controller.header];
   lines.push(controller.timeMode === 'inverse-time' ? 'G93' : 'G94');
   const lineOfNode = new Int32Array(path.nodes.length);
   const seconds = new Float64Array(path.nodes.length);
   let totalSeconds = 0;
-  const speeds = { feedMmMin: plan.material.feedMmMin, machine: plan.machine };
+  const speeds = { feedMmMin: setup.material.feedMmMin, machine: setup.machine };
   path.nodes.forEach((node, i) => {
     if (node.label !== undefined) lines.push(comment('Part', node.label));
     const way = i > 0 ? wayOf(towers, i) : null;
@@ -73,25 +86,31 @@ export function writeProgram(plan: WirePlan, path: WirePath, identity: ProgramId
 }
 
 function headerOf({ machine, panel, block, cut }: WirePlan, identity: ProgramIdentity): string[] {
-  const { axes } = machine.controller;
   const trailing = machine.trailingEdge === 'origin' ? 'toward the origin' : 'away from the origin';
   return [
     comment('Sheet', `${commentText(identity.sheetName)} v${identity.versionNumber}`),
     comment('Made part', identity.part),
     comment('Checksum', identity.checksum.slice(0, CHECKSUM_DIGITS)),
     comment('Chords', `root ${panel.root.chordMm} mm, tip ${panel.tip.chordMm} mm, span ${panel.spanMm} mm`),
-    comment('Origin', 'both towers at zero, unit mm'),
-    comment(
-      'Block',
-      `front corner at ${machine.blockXMm} / ${machine.blockYMm}, ${block.lengthMm} x ${block.heightMm} mm`,
-    ),
-    comment('Axes', `left tower ${axes.leftX} ${axes.leftY}, right tower ${axes.rightX} ${axes.rightY}`),
+    ...setupComments({ machine, block }),
     comment(
       'Direction',
       `root ${machine.rootFace}, trailing edge ${trailing}, upper surface first, ${cut.order}`,
     ),
-    comment('Caution', 'dry run with a cold wire first, emergency stop in reach'),
-    comment('Caution', 'hot wire and styrene vapour, cut with ventilation'),
+  ];
+}
+
+/** Where the origin, the foam and the axes are. */
+export function setupComments({ machine, block }: Pick<WireSetup, 'machine' | 'block'>): string[] {
+  const { axes } = machine.controller;
+  const { lengthMm, heightMm } = block;
+  return [
+    comment('Origin', 'both towers at zero, unit mm'),
+    comment(
+      'Block',
+      `front corner at ${machine.blockXMm} / ${machine.blockYMm}, ${lengthMm} x ${heightMm} mm`,
+    ),
+    comment('Axes', `left tower ${axes.leftX} ${axes.leftY}, right tower ${axes.rightX} ${axes.rightY}`),
   ];
 }
 

@@ -2,7 +2,7 @@ import { type Polyline, at, polylineOf } from './arrays.ts';
 import { type ExpectedCore } from './expected-core.ts';
 import { type Finding, error, mm } from './findings.ts';
 import { limitBreaches } from './limits.ts';
-import { type WirePlan } from './plan.ts';
+import { type WireSetup } from './plan.ts';
 import { type ReadMove, readProgram } from './read-program.ts';
 import { type PlaneDeviation, deviationAt } from './swept-core.ts';
 import { benchOf, fromTowers } from './towers.ts';
@@ -29,7 +29,7 @@ export interface Simulation {
  * @param text the program, from wherever it comes
  * @param cores what must come out, in the order of the block
  */
-export function simulate(text: string, plan: WirePlan, cores: readonly ExpectedCore[]): Simulation {
+export function simulate(text: string, plan: WireSetup, cores: readonly ExpectedCore[]): Simulation {
   const read = readProgram(text, plan.machine);
   const bench = benchOf(plan);
   const towers = {
@@ -52,7 +52,7 @@ export function simulate(text: string, plan: WirePlan, cores: readonly ExpectedC
   return { totalSeconds: read.totalSeconds, deviations, largestDeviationMm, findings };
 }
 
-function deviationFinding(plan: WirePlan, moves: readonly ReadMove[], of: PlaneDeviation): Finding[] {
+function deviationFinding(plan: WireSetup, moves: readonly ReadMove[], of: PlaneDeviation): Finding[] {
   if (of.deviationMm <= SIMULATION_TOLERANCE_MM) return [];
   const line = moves[of.move]?.line ?? 0;
   const left = at(

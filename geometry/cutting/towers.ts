@@ -1,6 +1,6 @@
 import { type Polyline, between } from './arrays.ts';
 import { type Finding, error, mm } from './findings.ts';
-import { type WirePlan } from './plan.ts';
+import { type WireSetup } from './plan.ts';
 
 /** Where the faces stand between the towers, as distances from the left tower's plane, mm. */
 export interface Bench {
@@ -10,7 +10,7 @@ export interface Bench {
 }
 
 /** Places of the panel's two faces on the machine: the block's left face, and the panel's span to the right of it. */
-export function benchOf(plan: WirePlan): Bench {
+export function benchOf(plan: WireSetup): Bench {
   const leftFaceMm = plan.machine.blockFromLeftMm;
   return {
     leftFaceMm,
@@ -37,15 +37,15 @@ export function fromTowers(bench: Bench, towers: { left: Polyline; right: Polyli
 }
 
 /** Checks that the panel and its block stand between the towers. */
-export function checkBench(plan: WirePlan): Finding[] {
+export function checkBench(plan: WireSetup): Finding[] {
   const { leftFaceMm, rightFaceMm, towerDistanceMm } = benchOf(plan);
   const span = plan.panel.spanMm;
   if (towerDistanceMm < span) {
-    const message = `The towers stand ${mm(towerDistanceMm)} apart, closer than the panel’s span of ${mm(span)}.`;
+    const message = `The towers stand ${mm(towerDistanceMm)} apart, closer than the foam’s span of ${mm(span)}.`;
     return [error('towers-too-close', 'machine.towerDistanceMm', message)];
   }
   if (leftFaceMm < 0 || rightFaceMm > towerDistanceMm) {
-    const message = `The panel reaches from ${mm(leftFaceMm)} to ${mm(rightFaceMm)}, not between the towers at 0 mm and ${mm(towerDistanceMm)}.`;
+    const message = `The foam reaches from ${mm(leftFaceMm)} to ${mm(rightFaceMm)}, not between the towers at 0 mm and ${mm(towerDistanceMm)}.`;
     return [error('outside-towers', 'machine.blockFromLeftMm', message)];
   }
   return [];

@@ -61,7 +61,8 @@ export function buildWirePath(
   return pathOf([...approach(plan, first), ...nodes, ...approach(plan, last).reverse()]);
 }
 
-function pathOf(nodes: readonly WireNode[]): WirePath {
+/** A path through given nodes. */
+export function pathOf(nodes: readonly WireNode[]): WirePath {
   return {
     nodes,
     left: polylineOf(nodes.map(({ left }) => left)),
