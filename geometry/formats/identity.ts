@@ -22,7 +22,7 @@ interface FileScale {
 }
 
 /** Digits of the checksum that are printed: 48 bits tell the versions of a workshop apart and can still be read aloud. */
-const CHECKSUM_DIGITS = 12;
+export const CHECKSUM_DIGITS = 12;
 
 /** The section's name and version, on one line. */
 export function titleOf(identity: FileIdentity): string {
