@@ -29,7 +29,8 @@ interface TitleBlockProps {
   readonly scale: string;
 }
 
-interface Cell {
+/** One field of a title block. */
+export interface TitleCell {
   readonly label: string;
   readonly text: string;
   /** Left edge and width as shares of the block. */
@@ -41,8 +42,19 @@ interface Cell {
 
 /** The title block at the lower right of the sheet. */
 export const TitleBlock = memo(function TitleBlock({ layout, fields, chord, scale }: TitleBlockProps) {
+  const cells = layout.compact ? compactCells(fields, chord, scale) : wideCells(fields, chord, scale);
+  return <TitleGrid layout={layout} cells={cells} />;
+});
+
+/** A title block with any fields, in three rows. */
+export function TitleGrid({
+  layout,
+  cells,
+}: {
+  readonly layout: SheetLayout;
+  readonly cells: readonly TitleCell[];
+}) {
   const { titleBlock: block, compact } = layout;
-  const cells = compact ? compactCells(fields, chord, scale) : wideCells(fields, chord, scale);
   const rows = rowEdges(block, compact);
   return (
     <g role="group" aria-label="Title block">
@@ -59,9 +71,9 @@ export const TitleBlock = memo(function TitleBlock({ layout, fields, chord, scal
       ))}
     </g>
   );
-});
+}
 
-function wideCells(fields: TitleBlockFields, chord: string, scale: string): Cell[] {
+function wideCells(fields: TitleBlockFields, chord: string, scale: string): TitleCell[] {
   return [
     { label: 'Title', text: fields.title, from: 0, width: 0.52, row: 0, size: 16 },
     { label: 'Version', text: fields.version, from: 0.52, width: 0.22, row: 0 },
@@ -76,7 +88,7 @@ function wideCells(fields: TitleBlockFields, chord: string, scale: string): Cell
   ];
 }
 
-function compactCells(fields: TitleBlockFields, chord: string, scale: string): Cell[] {
+function compactCells(fields: TitleBlockFields, chord: string, scale: string): TitleCell[] {
   return [
     { label: 'Title', text: fields.title, from: 0, width: 0.6, row: 0, size: 14 },
     { label: 'Version', text: fields.version, from: 0.6, width: 0.4, row: 0 },
@@ -89,7 +101,7 @@ function compactCells(fields: TitleBlockFields, chord: string, scale: string): C
 }
 
 /** Twelve digits in groups of four, as the exported files carry them. */
-function checksumText(checksum: string | null): string {
+export function checksumText(checksum: string | null): string {
   return checksum === null ? 'not saved' : (checksum.slice(0, 12).match(/.{4}/g) ?? []).join(' ');
 }
 
@@ -98,7 +110,7 @@ function rowEdges(block: Box, compact: boolean): readonly number[] {
   return shares.map((share) => Math.round(block.y + share * block.height));
 }
 
-function rulesOf(cells: readonly Cell[], block: Box, rows: readonly number[]): string {
+function rulesOf(cells: readonly TitleCell[], block: Box, rows: readonly number[]): string {
   const across = rows.slice(1, -1).map((y) => `M${block.x} ${y}H${block.x + block.width}`);
   const down = cells
     .filter((cell) => cell.from > 0)
@@ -111,7 +123,17 @@ function rulesOf(cells: readonly Cell[], block: Box, rows: readonly number[]): s
 
 const PAD = 7;
 
-function CellText({ cell, block, top, bottom }: { cell: Cell; block: Box; top: number; bottom: number }) {
+function CellText({
+  cell,
+  block,
+  top,
+  bottom,
+}: {
+  cell: TitleCell;
+  block: Box;
+  top: number;
+  bottom: number;
+}) {
   const x = block.x + cell.from * block.width + PAD;
   const room = cell.width * block.width - 2 * PAD;
   const { text, size } = fitted(cell.text, room, cell.size ?? 12);
