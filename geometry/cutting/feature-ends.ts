@@ -203,54 +203,6 @@ export function tubeAt(
   };
 }
 
-/** A V from the surface opposite to the hinge. Where it is narrower than the kerf the wire goes in and out by the same slit. */
-export function hingeAt(
-  { core, path, halfKerfMm: h }: CoreEnd,
-  hingeSurface: Surface,
-  x: number,
-  bevelDeg: number,
-  webMm: number,
-): Cutout | Fault {
-  const [cut, way] = [verticalCut(core, x), verticalCut(path, x)];
-  if (!cut || !way) return 'outside';
-  const up = hingeSurface === 'upper';
-  const apex = up ? cut.high - webMm : cut.low + webMm;
-  const depth = up ? apex - cut.low : cut.high - apex;
-  if (depth <= 2 * h) return 'outside';
-  const half = (bevelDeg * Math.PI) / 360;
-  const reach = depth * Math.tan(half);
-  const inside = Math.max(0, reach - h / Math.cos(half));
-  const sides = [x + inside, x - inside].map((side) => ({ x: side, cut: verticalCut(path, side) }));
-  const mouths = sides.map((side): Point => ({
-    x: side.x,
-    y: up ? (side.cut?.low ?? NaN) : (side.cut?.high ?? NaN),
-  }));
-  if (mouths.some(({ y }) => Number.isNaN(y))) return 'outside';
-  const [aft, fore] = mouths;
-  const corner = { x, y: up ? apex - h : apex + h };
-  const surface = up ? cut.low : cut.high;
-  const outline = [
-    { x, y: apex },
-    { x: x - reach, y: surface },
-    { x: x + reach, y: surface },
-  ];
-  return {
-    outline: polylineOf(up ? outline : outline.reverse()),
-    wire: [aft, corner, fore].filter((point) => point !== undefined),
-    mouths: [
-      {
-        surface: up ? 'lower' : 'upper',
-        edges: [
-          { x: x + Math.max(h, reach), y: surface },
-          { x: x - Math.max(h, reach), y: surface },
-        ],
-      },
-    ],
-    walls: [{ x, y: apex }],
-    webMm: Infinity,
-  };
-}
-
 /** The least distance between a shape inside a core and the core's outline; null when some point lies outside. */
 function clearance(core: Polyline, shape: Polyline): number | null {
   let least = Infinity;

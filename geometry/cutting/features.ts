@@ -6,13 +6,13 @@ import {
   type Cutout,
   type Fault,
   entryOf,
-  hingeAt,
   slotAt,
   stripAt,
   tubeAt,
   verticalCut,
 } from './feature-ends.ts';
 import { type Finding, error, mm, stationText } from './findings.ts';
+import { hingeAt } from './hinge.ts';
 import { type Surface } from './placing.ts';
 import { ENDS, type End, type Feature, type Plan } from './plan.ts';
 import { PART } from './row.ts';

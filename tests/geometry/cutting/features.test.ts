@@ -115,17 +115,6 @@ test('the tube’s wire stays half the kerf inside it', () => {
   for (const { x, y } of wire) expect(distanceTo(outline, x, y)).toBeCloseTo(0.4, 2);
 });
 
-test('a hinge leaves its web and opens with its bevel to the other surface', () => {
-  const { core } = planned([HINGE]);
-  const { outline, wire } = core.features[0]!.tip;
-  const box = boxOf(outline);
-  const x = core.core.panel.tip.toPanel({ x: 0.75, y: 0 }).x;
-  const cut = verticalCut(core.core.tip.core, x)!;
-  expect(cut.high - box.maxY).toBeCloseTo(0.5, 9);
-  expect((box.maxX - box.minX) / (2 * (box.maxY - box.minY))).toBeCloseTo(Math.tan((20 * Math.PI) / 180), 9);
-  expect(Math.max(...wire.map(({ y }) => y))).toBeCloseTo(box.maxY - 0.4, 9);
-});
-
 test('slot, strip, tube, hinge and a slot with other stations at the tip: the simulated cut agrees', () => {
   const moved = { ...SLOT, surface: 'lower' as const, rootStation: 0.55, tipStation: 0.6 };
   const { core, findings } = planned(
