@@ -1,6 +1,7 @@
 import { type Contour, extents, scaleContour } from '../../contour/contour.ts';
 import { sampleToTolerance } from '../../contour/sampling.ts';
 import { writeDat } from '../../formats/dat.ts';
+import { DXF_DECIMALS } from '../../formats/dxf-tags.ts';
 import { roundContour, withoutRepeats } from '../../formats/rounding.ts';
 import { type CorePlan } from '../planner.ts';
 import { type End } from '../plan.ts';
@@ -10,8 +11,8 @@ import { downloadNameOf } from './names.ts';
 import { coordinatesTitle } from './words.ts';
 
 const DECIMALS = 6;
-/** Rounding may move a point by as much; it is taken off the tolerance beforehand. */
-const ROUNDING_MM = Math.SQRT1_2 * 10 ** -DECIMALS;
+/** Rounding, here and in a drawing, may move a point by as much; it is taken off the tolerance beforehand. */
+const ROUNDING_MM = Math.SQRT1_2 * (10 ** -DECIMALS + 10 ** -DXF_DECIMALS);
 
 /** The whole section of an end at its chord within the plan's tolerance, in mm, its leading edge at the origin and its chord along x. */
 export function sectionContour({ plan, core }: CorePlan, end: End): Contour {
