@@ -11,6 +11,8 @@ import { beforeAuth } from './account/auth-routes.ts';
 import { authenticator } from './account/session.ts';
 import { signInConfig } from './account/sign-in.ts';
 import { type Config } from './config.ts';
+import { threadedWorks } from './cut-sheets/files/threaded-works.ts';
+import { cutSheetHandlers } from './cut-sheets/routes.ts';
 import { exportHandlers } from './exports/routes.ts';
 import { clientFiles } from './http/client-files.ts';
 import { healthHandlers } from './http/health.ts';
@@ -50,6 +52,7 @@ export function createApp({ config, knex, logger, clientFolder }: AppDependencie
     ...sectionHandlers(knex),
     ...exportHandlers(knex),
     ...shopHandlers(knex),
+    ...cutSheetHandlers({ knex, works: threadedWorks(), publicUrl: config.publicUrl }),
   };
   const document = JSON.stringify(openApiDocument(version));
 

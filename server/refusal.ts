@@ -1,7 +1,7 @@
 import { type ProblemCode } from '#server/contracts/problems.ts';
 
 /** One field at fault: its path in the request, such as `shape.maxThickness`, and a sentence for people. */
-interface FieldIssue {
+export interface FieldIssue {
   readonly path: string;
   readonly message: string;
 }

@@ -1,4 +1,5 @@
 import { accountEndpoints } from './account-endpoints.ts';
+import { cutSheetEndpoints } from './cut-sheet-endpoints.ts';
 import { type Endpoint } from './endpoint.ts';
 import { sectionEndpoints } from './section-endpoints.ts';
 import { shopEndpoints } from './shop-endpoints.ts';
@@ -11,5 +12,6 @@ export const endpoints = {
   ...accountEndpoints,
   ...sectionEndpoints,
   ...shopEndpoints,
+  ...cutSheetEndpoints,
 } as const satisfies Record<string, Endpoint>;
 export type EndpointName = keyof typeof endpoints;

@@ -61,3 +61,8 @@ export function joinScoped(
   };
   return join === 'inner' ? query.join({ [as]: table }, clause) : query.leftJoin({ [as]: table }, clause);
 }
+
+/** A pattern for LIKE that finds text anywhere; the signs that LIKE gives a meaning are taken as they stand. */
+export function containing(text: string): string {
+  return `%${text.replace(/[\\%_]/g, '\\$&')}%`;
+}

@@ -15,6 +15,11 @@ const tables = [
   'machines',
   'materials',
   'kerfs',
+  'cut_sheets',
+  'cut_sheet_versions',
+  'cut_sheet_drafts',
+  'cut_files',
+  'cut_downloads',
 ];
 
 describe('two workshops', () => {
@@ -49,7 +54,7 @@ describe('two workshops', () => {
   it('covers every route that names something', () => {
     const named = Object.values(endpoints).filter(({ path }) => path.includes('/:'));
     expect(naming).toHaveLength(named.length);
-    expect(named.length).toBeGreaterThanOrEqual(20);
+    expect(named.length).toBeGreaterThanOrEqual(33);
   });
 
   it.each(naming)('%s finds nothing of another workshop and changes nothing there', async (name) => {
@@ -98,6 +103,20 @@ describe('two workshops', () => {
     await api.knex('kerfs').where({ workshop_id: fen.id }).delete();
     await api.knex('machines').where({ workshop_id: fen.id }).delete();
     await api.knex('materials').where({ workshop_id: fen.id }).delete();
+  });
+
+  it('lists no cut sheet of the other one, and takes nothing of it into a plan', async () => {
+    expect((await stranger.call('listCutSheets')).reply.items).toEqual([]);
+    expect((await member.call('listCutSheets')).reply.items).not.toEqual([]);
+    const mixed = await stranger.call('createCutSheet', requests.createCutSheet(samples));
+    expect(mixed.status).toBe(422);
+    expect(mixed.problem.errors?.map(({ path }) => path)).toEqual([
+      'plan.panel.root.sectionId',
+      'plan.panel.tip.sectionId',
+      'plan.machineId',
+      'plan.materialId',
+    ]);
+    expect(mixed.text).not.toContain('Marsh');
   });
 
   it('keeps the idempotency keys of workshops apart', async () => {

@@ -2,7 +2,7 @@ import { type Knex } from 'knex';
 import { type Shape } from '#geometry/shapes/shape.ts';
 import { type Section, type SectionListQuery, type VersionStatus } from '#server/contracts/sections.ts';
 import { continueBehind, pageOfRows } from '#server/database/cursor.ts';
-import { joinScoped, scoped } from '#server/database/scoped.ts';
+import { containing, joinScoped, scoped } from '#server/database/scoped.ts';
 import { Refusal } from '#server/refusal.ts';
 import { type Reach } from '../rules.ts';
 import { cursorOf, type Direction, placeOf } from './cursor.ts';
@@ -83,11 +83,6 @@ function columnsOf(view: View, sort: Sort): string[] {
     `s.${view.number} as shown_number`,
     `s.${view.sorts[sort].column} as sort_value`,
   ];
-}
-
-/** Text to be found anywhere; the signs that LIKE gives a meaning are taken as they stand. */
-function containing(text: string): string {
-  return `%${text.replace(/[\\%_]/g, '\\$&')}%`;
 }
 
 type Filter = Pick<SectionListQuery, 'search' | 'status' | 'kind'>;

@@ -10,6 +10,7 @@ import { createItem, machines, materials } from '#server/shop/store.ts';
 import { type TestApi, type TestWorkshop } from './api.ts';
 import { type Input } from './client.ts';
 import { cst, naca4 } from './shapes.ts';
+import { makeSheet, type PlanParts, samplePlan } from './sheets.ts';
 
 /** A section with version 1 released and version 2 a draft, and unsaved work of owner and designer on it. */
 export async function makeSection(
@@ -28,14 +29,12 @@ export async function makeSection(
 }
 
 /** The things that requests name. */
-export interface Samples {
-  readonly sectionId: string;
-  readonly machineId: string;
-  readonly materialId: string;
+export interface Samples extends PlanParts {
+  readonly sheetId: string;
 }
 
 /** A four-axis machine and a foam with a kerf that nobody measured, each of a name that only it has. */
-export async function makeShop(api: TestApi, workshop: TestWorkshop): Promise<Omit<Samples, 'sectionId'>> {
+export async function makeShop(api: TestApi, workshop: TestWorkshop): Promise<Omit<PlanParts, 'sectionId'>> {
   const author = workshop.author('builder', new Date('2026-02-01T09:00:00.000Z'));
   const name = `Marsh ${uuid()}`;
   const machine = await createItem(api.knex, author, machines, { name, settings: wireBench });
@@ -47,11 +46,16 @@ export async function makeShop(api: TestApi, workshop: TestWorkshop): Promise<Om
 }
 
 export async function makeSamples(api: TestApi, workshop: TestWorkshop): Promise<Samples> {
-  return { sectionId: await makeSection(api, workshop), ...(await makeShop(api, workshop)) };
+  const parts = { sectionId: await makeSection(api, workshop), ...(await makeShop(api, workshop)) };
+  return { ...parts, sheetId: await makeSheet(api, workshop, parts) };
 }
 
 const of = ({ sectionId }: Samples, number?: number) => ({
   params: number === undefined ? { sectionId } : { sectionId, number },
+});
+
+const ofSheet = ({ sheetId }: Samples, number?: number) => ({
+  params: number === undefined ? { sheetId } : { sheetId, number },
 });
 
 /** A request that is right in itself for every endpoint, on what {@link makeSamples} makes. */
@@ -92,4 +96,22 @@ export const requests: Readonly<Record<EndpointName, (samples: Samples) => Input
     params: { machineId, materialId },
     body: { kerfMm: 0.85, speedMmMin: 200, measuredOn: '2026-02-01', revision: 1 },
   }),
+  listCutSheets: () => ({ query: { search: 'marsh' } }),
+  createCutSheet: (one) => ({ body: { name: 'Fen panel', plan: samplePlan(one), key: uuid() } }),
+  getCutSheet: (one) => ofSheet(one),
+  changeCutSheet: (one) => ({ ...ofSheet(one), body: { name: 'Renamed' } }),
+  getSheetDraft: (one) => ofSheet(one),
+  keepSheetDraft: (one) => ({ ...ofSheet(one), body: { basedOn: 2, values: { quantity: '' } } }),
+  dropSheetDraft: (one) => ofSheet(one),
+  listSheetVersions: (one) => ofSheet(one),
+  saveSheetVersion: (one) => ({
+    ...ofSheet(one),
+    body: { basedOn: 2, plan: samplePlan(one), note: 'as before', key: uuid() },
+  }),
+  getSheetVersion: (one) => ofSheet(one, 1),
+  releaseSheetVersion: (one) => ({ ...ofSheet(one, 2), body: { reason: 'tried' } }),
+  withdrawSheetVersion: (one) => ({ ...ofSheet(one, 1), body: { reason: 'too thin' } }),
+  listSheetFiles: (one) => ofSheet(one, 1),
+  sheetFile: ({ sheetId }) => ({ params: { sheetId, number: 1, name: 'root.dxf' } }),
+  listSheetDownloads: (one) => ofSheet(one, 1),
 };
