@@ -40,8 +40,9 @@ export function hingeAt(
   });
   if (!aft?.edge || !fore?.edge) return 'outside';
   const slit = { x, y: mouthY };
-  const open = down * (mouthY - meet.y) > 0 && aft.mouth !== null && fore.mouth !== null;
-  const wire = open ? [aft.mouth, meet, corner, meet, fore.mouth] : [slit, slit, corner, slit, slit];
+  const [aftMouth, foreMouth] = [aft.mouth, fore.mouth];
+  const open = down * (mouthY - meet.y) > 0 && aftMouth !== null && foreMouth !== null;
+  const wire = open ? [aftMouth, meet, corner, meet, foreMouth] : [slit, slit, corner, slit, slit];
   const outline = [apex, fore.edge, aft.edge];
   // A flank ends where it leaves the round kerf of the slit.
   const flanks = [aft, fore].flatMap(({ edge, direction }) => {
