@@ -21,10 +21,12 @@ export type SheetPart = z.infer<typeof sheetPartSchema>;
 export const papers = ['A4', 'A3', 'Letter'] as const;
 
 const versionNumberSchema = z.int().min(1).max(1_000_000);
+const chosen = (what: string) => z.uuid({ error: `Choose a ${what}.` });
+const whichVersion = 'Choose a version of the section.';
 const endSchema = (end: 'root' | 'tip') =>
   z.strictObject({
-    sectionId: idSchema,
-    versionNumber: versionNumberSchema,
+    sectionId: chosen('section'),
+    versionNumber: z.int({ error: whichVersion }).min(1, whichVersion).max(1_000_000, whichVersion),
     chordMm: panelSchema.shape[end].shape.chordMm,
   });
 
@@ -38,14 +40,14 @@ export const sheetPlanSchema = planSchema.omit({ panel: true, machine: true, mat
   panel: panelSchema
     .omit({ root: true, tip: true })
     .extend({ root: endSchema('root'), tip: endSchema('tip') }),
-  machineId: idSchema.nullable(),
-  materialId: idSchema.nullable(),
-  ribMachineId: idSchema.nullable(),
-  ribMaterialId: idSchema.nullable(),
+  machineId: chosen('machine').nullable(),
+  materialId: chosen('material').nullable(),
+  ribMachineId: chosen('machine').nullable(),
+  ribMaterialId: chosen('material').nullable(),
   /** Panels wanted; a mirrored pair counts as two. */
   quantity: z.int({ error: quantityRange }).min(1, quantityRange).max(500, quantityRange),
   /** What the templates are printed on. */
-  paper: z.enum(papers),
+  paper: z.enum(papers, { error: `The paper is ${papers.slice(0, -1).join(', ')} or ${papers.at(-1)}.` }),
 });
 export type SheetPlan = z.infer<typeof sheetPlanSchema>;
 
