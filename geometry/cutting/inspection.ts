@@ -19,6 +19,22 @@ export interface InspectionRow {
   readonly toleranceMm: number;
 }
 
+/** A caliper reading beside what is wanted. */
+export interface Compared {
+  /** Measured less nominal, mm. */
+  readonly deviationMm: number;
+  readonly within: boolean;
+}
+
+/** Decimals of a mm that a deviation is compared in: far below what a caliper shows, far above binary rounding. */
+const DEVIATION_DECIMALS = 4;
+
+/** Compares a reading with its row; a deviation of exactly the tolerance is within it. */
+export function compareReading(row: InspectionRow, measuredMm: number): Compared {
+  const deviationMm = Number((measuredMm - row.nominalMm).toFixed(DEVIATION_DECIMALS));
+  return { deviationMm, within: Math.abs(deviationMm) <= row.toleranceMm };
+}
+
 /** Foam thinner than this is none, mm. */
 const LEAST_MM = 1e-6;
 

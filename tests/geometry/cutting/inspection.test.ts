@@ -1,6 +1,6 @@
 import { expect, test } from 'vitest';
 import { buildCore } from '#geometry/cutting/core.ts';
-import { inspectionRows } from '#geometry/cutting/inspection.ts';
+import { compareReading, inspectionRows } from '#geometry/cutting/inspection.ts';
 import { buildPanel } from '#geometry/cutting/panel.ts';
 import { type Plan } from '#geometry/cutting/plan.ts';
 import { planCore } from '#geometry/cutting/planner.ts';
@@ -109,4 +109,11 @@ test.each([
 ])('stations, %s: refused with the field', (_, stations, path) => {
   const { findings } = planCore({ ...PLAN, inspection: { ...PLAN.inspection, stations } }, IDENTITY);
   expect(findings).toMatchObject([{ severity: 'error', code: 'bad-value', path }]);
+});
+
+test('a reading exactly at the tolerance is within, whatever binary rounding says; one beyond is out', () => {
+  const row = { end: 'root', station: 0.3, nominalMm: 24, toleranceMm: 0.3 } as const;
+  expect(compareReading(row, 24.3)).toEqual({ deviationMm: 0.3, within: true });
+  expect(compareReading(row, 23.7)).toEqual({ deviationMm: -0.3, within: true });
+  expect(compareReading(row, 24.301)).toEqual({ deviationMm: 0.301, within: false });
 });
