@@ -1,6 +1,6 @@
 import { thicknessAt } from '../contour/thickness.ts';
 import { error, mm, note, stationText, warning, type Finding } from './findings.ts';
-import { type OffsetLine } from './offset.ts';
+import { type OffsetLine, roundOffset } from './offset.ts';
 import { type Panel } from './panel.ts';
 import { ENDS, type End, type Plan } from './plan.ts';
 import { offsetBoth } from './tail.ts';
@@ -40,9 +40,10 @@ export function buildCore(
 ): { readonly core: Core | null; readonly findings: Finding[] } {
   const keep = plan.features.map(({ rootStation }) => rootStation);
   const half = { root: plan.kerfMm.root / 2, tip: plan.kerfMm.tip / 2 };
-  const [cores, paths] = offsetBoth(panel, [{ root: 0, tip: 0 }, half], keep);
+  const cores = offsetBoth(panel, { root: 0, tip: 0 }, keep);
   const coreEnd = (end: End): CoreEnd | null => {
-    const [core, path] = [cores?.[end], paths?.[end]];
+    const core = cores[end];
+    const path = core && roundOffset(core, half[end]);
     return core && path ? { core, path, halfKerfMm: half[end] } : null;
   };
   const ends = { root: coreEnd('root'), tip: coreEnd('tip') };

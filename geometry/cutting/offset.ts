@@ -6,6 +6,9 @@ import { type Face } from './panel.ts';
 export interface OffsetLine extends Polyline {
   /** Distance from the contour that each point was given, positive outwards, mm. */
   readonly distance: Float64Array;
+  /** The unit normal along which each point was moved. */
+  readonly nx: Float64Array;
+  readonly ny: Float64Array;
   /** 1 where a point lay in a loop and now stands at the loop's crossing. */
   readonly collapsed: Uint8Array;
   /** Where both surfaces cross at the trailing edge and the offset contour ends; null when it reaches its own corners. */
@@ -39,13 +42,29 @@ export function offsetInStep(face: Face, outwards: number, pinned?: Pinned): Off
     x[i] = pinned?.x ?? NaN;
     y[i] = pinned?.y ?? NaN;
   }
-  const cleared = withoutLoops({ x, y }, face);
-  if (!cleared) return null;
-  if (!pinned) return { ...cleared, distance };
+  const loopless = withoutLoops({ x, y }, face);
+  if (!loopless) return null;
+  const cleared = { ...loopless, distance, nx: face.nx, ny: face.ny };
+  if (!pinned) return cleared;
   const { collapsed } = cleared;
   for (const i of pinned.points) collapsed[i] = 1;
   const [upper, lower] = [collapsed.indexOf(0), collapsed.lastIndexOf(0)];
-  return { ...cleared, distance, collapsed, tail: { x: pinned.x, y: pinned.y, upper, lower } };
+  return { ...cleared, tail: { x: pinned.x, y: pinned.y, upper, lower } };
+}
+
+/**
+ * A line round one that was moved already, each point farther along the same normal: the wire's path round the core. Where the core's points
+ * have been collapsed into a sharp edge their normals still turn, so that the path goes round the edge in an arc and touches
+ * it all the way.
+ * @returns null when nothing is left, as in a gap of the core narrower than the kerf
+ */
+export function roundOffset(line: OffsetLine, by: number): OffsetLine | null {
+  if (by === 0) return line;
+  const { nx, ny } = line;
+  const x = line.x.map((value, i) => value + by * at(nx, i));
+  const y = line.y.map((value, i) => value + by * at(ny, i));
+  const cleared = withoutLoops({ x, y }, line);
+  return cleared && { ...cleared, distance: line.distance.map((value) => value + by), nx, ny };
 }
 
 /** Points that are to stand at a known place: the tail, once it is known where the surfaces meet. */

@@ -19,74 +19,50 @@ const ZONE = 4;
 const LEAST_ZONE = 0.02;
 
 /**
- * Moves the contours of both ends in step, by several amounts at once: the core and the wire's path round it. Where two surfaces meet ahead of the
- * trailing edge they do so at different stations of root and tip. So that neither end of the wire stands, the last rulings join
- * points in proportion between the last equal station and the meeting points instead of equal stations; core and path share these rulings.
- * @param outwards mm, before the skin is taken off; each amount not below the one before it
- * @param keep stations that must stay equal, if the core reaches them
+ * Moves the contours of both ends in step. Where two surfaces meet ahead of the trailing edge they do so at different stations of root and tip.
+ * So that neither end of the wire stands, the last rulings join points in proportion between the last equal station and the
+ * meeting points instead of equal stations.
+ * @param outwards mm, before the skin is taken off
+ * @param keep stations that must stay equal, if the moved contour reaches them
  */
 export function offsetBoth(
   panel: Panel,
-  outwards: readonly Both<number>[],
+  outwards: Both<number>,
   keep: readonly number[],
-): Both<OffsetLine | null>[] {
+): Both<OffsetLine | null> {
   const { chain } = panel;
-  const raw = outwards.map((by) => ({
-    root: offsetInStep(chain.root, by.root),
-    tip: offsetInStep(chain.tip, by.tip),
-  }));
-  if (raw.every(({ root, tip }) => !root?.tail && !tip?.tail)) return raw;
+  const raw = {
+    root: offsetInStep(chain.root, outwards.root),
+    tip: offsetInStep(chain.tip, outwards.tip),
+  };
+  if (!raw.root?.tail && !raw.tip?.tail) return raw;
   const last = Math.max(...chain.station);
-  const knots = raw.map((of, k) => {
-    const knot = (end: End): Knot => {
-      const tail = of[end]?.tail;
-      const meet = tail ? meeting(panel[end], chain, chain[end], tail, outwards[k]?.[end] ?? 0) : null;
-      return { meet, stations: meet?.stations ?? { upper: last, lower: last } };
-    };
-    return { root: knot('root'), tip: knot('tip') };
-  });
+  const knot = (end: End): Knot => {
+    const tail = raw[end]?.tail;
+    const meet = tail ? meeting(panel[end], chain, chain[end], tail, outwards[end]) : null;
+    return { meet, stations: meet?.stations ?? { upper: last, lower: last } };
+  };
+  const knots = { root: knot('root'), tip: knot('tip') };
   const from = zoneStart(knots, keep);
-  const shares = sharesOf(knots, from);
-  return raw.map((of, k) => {
-    const line = (end: End) => {
-      if (!of[end]) return null;
-      const path = [...knots.slice(0, k + 1)].map((knot) => knot[end]);
-      return joined(panel, end, outwards[k]?.[end] ?? 0, path, shares, from) ?? of[end];
-    };
-    return { root: line('root'), tip: line('tip') };
-  });
+  const line = (end: End) => raw[end] && (joined(panel, end, outwards[end], knots[end], from) ?? raw[end]);
+  return { root: line('root'), tip: line('tip') };
 }
 
-/** Where one offset ends: at its meeting point, or at the contour's own end. */
+/** Where an offset ends: at its meeting point, or at the contour's own end. */
 interface Knot {
   readonly meet: Meeting | null;
   readonly stations: Readonly<Record<Surface, number>>;
 }
 
-function zoneStart(knots: readonly Both<Knot>[], keep: readonly number[]): number {
-  const stations = knots.flatMap(({ root, tip }) =>
-    [root, tip].flatMap((of) => [of.stations.upper, of.stations.lower]),
-  );
+function zoneStart({ root, tip }: Both<Knot>, keep: readonly number[]): number {
+  const stations = [root, tip].flatMap((of) => [of.stations.upper, of.stations.lower]);
   const first = Math.min(...stations);
   const spread = Math.max(
-    ...knots.flatMap(({ root, tip }) =>
-      (['upper', 'lower'] as const).map((surface) =>
-        Math.abs(root.stations[surface] - tip.stations[surface]),
-      ),
-    ),
+    Math.abs(root.stations.upper - tip.stations.upper),
+    Math.abs(root.stations.lower - tip.stations.lower),
   );
   const wanted = first - Math.max(LEAST_ZONE, ZONE * spread);
   return Math.max(first / 2, wanted, ...keep.filter((station) => station < first));
-}
-
-/** Which share of the zone's rulings ends at each knot: in proportion to the mean of its stations. */
-function sharesOf(knots: readonly Both<Knot>[], from: number): number[] {
-  const means = knots.map(
-    ({ root, tip }) =>
-      (root.stations.upper + root.stations.lower + tip.stations.upper + tip.stations.lower) / 4 - from,
-  );
-  const end = means.at(-1) ?? 1;
-  return means.map((mean, k) => (k === means.length - 1 ? 1 : Math.min(1, Math.max(0.1, mean / end))));
 }
 
 const STEP = 1e-4;
@@ -126,55 +102,58 @@ function meeting(
   return null;
 }
 
-/** The offset with the rulings behind `from` led over the knots to the last of them. */
+/** The offset with the rulings behind `from` led to the end's knot. */
 function joined(
   panel: Panel,
   end: End,
   outwards: number,
-  knots: readonly Knot[],
-  shares: readonly number[],
+  { meet, stations }: Knot,
   from: number,
 ): OffsetLine | null {
   const { station, part } = panel.chain;
   const face = panel.chain[end];
   const [x, y, nx, ny] = [face.x.slice(), face.y.slice(), face.nx.slice(), face.ny.slice()];
   const last = Math.max(...station);
-  const meet = knots.at(-1)?.meet;
-  const ends = shares[knots.length - 1] ?? 1;
   const pinned: number[] = [];
   for (let i = 0; i < station.length; i++) {
     if (part[i] === PART.nose) continue;
     const surface = part[i] === PART.upper ? 'upper' : part[i] === PART.lower ? 'lower' : null;
     const share = surface ? (at(station, i) - from) / (last - from) : 1;
-    if (meet && share >= ends) pinned.push(i);
-    else if (surface && share > 0) {
-      const own = stationOn(knots, shares, surface, from, share);
-      const point = surfacePoint(panel[end], surface, panel[end][surface].parameterAt(own));
-      [x[i], y[i], nx[i], ny[i]] = [point.x, point.y, point.nx, point.ny];
-    }
+    if (meet && share >= 1) pinned.push(i);
+    if (!surface || share <= 0) continue;
+    const own = from + share * (stations[surface] - from);
+    const point = surfacePoint(panel[end], surface, panel[end][surface].parameterAt(own));
+    [x[i], y[i], nx[i], ny[i]] = [point.x, point.y, point.nx, point.ny];
   }
+  if (meet) turnSteadily(nx, ny, pinned);
   const moved = { ...face, x, y, nx, ny };
   return meet
     ? offsetInStep(moved, outwards, { points: pinned, x: meet.x, y: meet.y })
     : offsetInStep(moved, outwards);
 }
 
-/** The end's own station at a share of the zone: straight from knot to knot. */
-function stationOn(
-  knots: readonly Knot[],
-  shares: readonly number[],
-  surface: Surface,
-  from: number,
-  share: number,
-): number {
-  let [lowShare, low] = [0, from];
-  for (let k = 0; k < knots.length; k++) {
-    const [highShare, high] = [shares[k] ?? 1, knots[k]?.stations[surface] ?? 1];
-    if (share <= highShare || k === knots.length - 1) {
-      const part = highShare > lowShare ? (share - lowShare) / (highShare - lowShare) : 1;
-      return low + Math.min(1, part) * (high - low);
-    }
-    [lowShare, low] = [highShare, high];
+/**
+ * Makes the normals of the pinned points turn one way alone, from the lower surface's where it ends round the edge to the upper's, whatever turns
+ * the contour makes behind.
+ */
+function turnSteadily(nx: Float64Array, ny: Float64Array, pinned: readonly number[]): void {
+  // The chain begins in the middle of the tail: what stands before the largest gap between the indices comes after the rest.
+  const gaps = pinned.map((i, k) => (pinned[k + 1] ?? i) - i);
+  const cut = gaps.indexOf(Math.max(...gaps)) + 1;
+  const order = [...pinned.slice(cut), ...pinned.slice(0, cut)];
+  const [first, last] = [order[0], order.at(-1)];
+  if (first === undefined || last === undefined) return;
+  const start = Math.atan2(at(ny, first), at(nx, first));
+  const turned = (i: number) => turnOf(Math.atan2(at(ny, i), at(nx, i)) - start);
+  const most = turned(last);
+  let reached = 0;
+  for (const i of order) {
+    reached = Math.min(most, Math.max(reached, turned(i)));
+    [nx[i], ny[i]] = [Math.cos(start + reached), Math.sin(start + reached)];
   }
-  return low;
+}
+
+/** An angle as one from −90° to 270°: normals never turn back by a quarter. */
+function turnOf(angle: number): number {
+  return angle - 2 * Math.PI * Math.floor((angle + Math.PI / 2) / (2 * Math.PI));
 }

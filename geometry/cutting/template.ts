@@ -43,11 +43,11 @@ export function buildTemplates(
   rules: TemplatePlan,
 ): { readonly templates: Template[]; readonly findings: Finding[] } {
   const by = (end: End) => plan.kerfMm[end] / 2 - rules.wireDiameterMm / 2;
-  const [lines] = offsetBoth(core.panel, [{ root: by('root'), tip: by('tip') }], []);
+  const lines = offsetBoth(core.panel, { root: by('root'), tip: by('tip') }, []);
   const templates: Template[] = [];
   const findings: Finding[] = [];
   for (const end of ENDS) {
-    const line = lines?.[end];
+    const line = lines[end];
     if (!line) {
       const message = `Nothing is left of the template at the ${end}.`;
       findings.push(error('skin-thicker-than-section', 'allowances.upperMm', message, { end }));

@@ -1,6 +1,6 @@
 import { type Polyline } from './arrays.ts';
 import { ENDS, type End } from './plan.ts';
-import { type Row } from './row.ts';
+import { type Row, type RowEnd } from './row.ts';
 
 /** Directions from the last vertex that keep every point passed so far within the tolerance, as angles about the first of them. */
 interface Wedge {
@@ -23,12 +23,12 @@ export function thin(
   longest: number,
   grown: Readonly<Record<End, number>>,
 ): Row[] {
+  const skinned = rows.some(({ root, tip }) => root.skin > 0 || tip.skin > 0);
   const lines = ENDS.flatMap((end) => [
     lineOf(rows, (row) => row[end]),
-    lineOf(rows, ({ [end]: { x, y, nx, ny, skin } }) => ({
-      x: x + (grown[end] - skin) * nx,
-      y: y + (grown[end] - skin) * ny,
-    })),
+    moved(rows, end, ({ skin }) => grown[end] - skin),
+    // Where skins meet, the path turns round the core's edge as quickly as the normals do.
+    ...(skinned && grown[end] > 0 ? [moved(rows, end, () => grown[end])] : []),
   ]);
   const kept: Row[] = [];
   for (let i = 0; i < rows.length; i = reach(rows, lines, i, tolerance, longest)) {
@@ -36,6 +36,10 @@ export function thin(
     if (row) kept.push(row);
   }
   return kept;
+}
+
+function moved(rows: readonly Row[], end: End, by: (of: RowEnd) => number): Polyline {
+  return lineOf(rows, ({ [end]: of }) => ({ x: of.x + by(of) * of.nx, y: of.y + by(of) * of.ny }));
 }
 
 function lineOf(rows: readonly Row[], point: (row: Row) => { x: number; y: number }): Polyline {

@@ -2,7 +2,7 @@ import { EndType, JoinType, inflatePathsD } from 'clipper2-ts';
 import fc from 'fast-check';
 import { expect, test } from 'vitest';
 import { type Polyline, areaOf, at, polylineOf } from '#geometry/cutting/arrays.ts';
-import { offsetInStep, withoutLoops } from '#geometry/cutting/offset.ts';
+import { offsetInStep, roundOffset, withoutLoops } from '#geometry/cutting/offset.ts';
 import { type Face, buildPanel } from '#geometry/cutting/panel.ts';
 import { PART } from '#geometry/cutting/row.ts';
 import { type Point } from '#geometry/point.ts';
@@ -165,6 +165,21 @@ test('a loop inside and a tail outside are collapsed into their crossings', () =
   expect(cleared.x).toHaveLength(9);
   expect(crossingsByHand(cleared)).toBe(0);
   expect(cleared.tail).not.toBeNull();
+});
+
+test('a path round a wedge moved inwards: along both sides, and round its edge in an arc', () => {
+  const shape = prismOf(section('0012'), 200);
+  const core = offsetInStep(buildPanel(planWith({ ...shape, cut: fineCut })).chain.root, -1)!;
+  const path = roundOffset(core, 0.4)!;
+  expect(crossingsByHand(path)).toBe(0);
+  expect(path.collapsed.includes(1)).toBe(false);
+  path.x.forEach((x, i) => {
+    expect(Math.hypot(x - at(core.x, i), at(path.y, i) - at(core.y, i))).toBeCloseTo(0.4, 12);
+    expect(at(path.distance, i)).toBeCloseTo(-0.6, 12);
+    // Nowhere nearer to the core than half the kerf, but for the chords of the arcs.
+    expect(distanceTo(core, x, at(path.y, i))).toBeGreaterThan(0.4 - 0.002);
+  });
+  expect(roundOffset(core, 0)).toBe(core);
 });
 
 test('skins that fill the section leave nothing', () => {

@@ -151,7 +151,8 @@ export function prismOf(shape: Shape, chordMm: number): WirePlan {
   });
 }
 
-const within = (min: number, max: number) => fc.double({ min, max, noNaN: true, noDefaultInfinity: true });
+const within = (min: number, max: number) =>
+  fc.noBias(fc.integer({ min: 0, max: 1_000_000 })).map((n) => min + ((max - min) * n) / 1_000_000);
 
 /** A section that a wing has: a 4-digit form or a smooth free one. */
 const ordinary: fc.Arbitrary<Shape> = fc.oneof(
