@@ -14,7 +14,13 @@ export type WorkshopTable =
   | 'cut_sheet_versions'
   | 'cut_sheet_drafts'
   | 'cut_files'
-  | 'cut_downloads';
+  | 'cut_downloads'
+  | 'cut_logs'
+  | 'cut_progress'
+  | 'inspections'
+  | 'inspection_measurements'
+  | 'photos'
+  | 'kerf_history';
 
 /** A row to be written, without the workshop: that comes from the scope and from nowhere else. */
 type NewRow = Readonly<Record<string, string | number | boolean | Date | Buffer | null>>;
