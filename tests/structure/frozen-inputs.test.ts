@@ -9,6 +9,11 @@ import { type MeasuredShape } from '#geometry/shapes/measured.ts';
 import { similarityOf } from '#geometry/shapes/placement.ts';
 import { outlineOf, shapeSchema } from '#geometry/shapes/shape.ts';
 import { SMALL_DOCUMENT, SMALL_DRAWING } from '#tests/geometry/formats/drawing-example.ts';
+import { exportFile } from '#geometry/formats/export.ts';
+import { readRows } from '#geometry/imports/coordinate-rows.ts';
+import { readDxf } from '#geometry/imports/dxf-entities.ts';
+import { type FoundChains } from '#geometry/imports/imported.ts';
+import { orderLoop } from '#geometry/imports/section-loop.ts';
 import { MARSH } from '#tests/geometry/formats/identity-example.ts';
 import { FREE_FORM, naca4 } from '#tests/geometry/shapes/samples.ts';
 
@@ -37,6 +42,29 @@ const measured = (): MeasuredShape => {
   const closed = [...points, points[0] ?? point()];
   return { kind: 'measured', x: closed.map(({ x }) => x), y: closed.map(({ y }) => y) };
 };
+const sourcePoints = () => contourPoints(contour()).map((at, i) => ({ ...at, line: i + 1 }));
+const listed = () =>
+  measured()
+    .x.map((x, i) => `${x} ${measured().y[i] ?? 0}`)
+    .join('\n');
+const encoded = (text: string) => new TextEncoder().encode(text);
+const foundChains = (): FoundChains => ({
+  name: null,
+  groups: [[sourcePoints()]],
+  unit: { mm: null, hundred: 'mm' },
+  notes: [],
+  divided: new Set(),
+  joint: 1e-9,
+  extras: false,
+  ordered: true,
+});
+const bezier = () => ({
+  degree: 2,
+  knots: [0, 0, 0, 1, 1, 1],
+  control: [point(), { x: 1, y: 1 }, { x: 2, y: 0 }],
+  weights: [1, 1, 1],
+});
+const dxfLine = () => readDxf('0\nSECTION\n2\nENTITIES\n0\nLINE\n10\n0\n20\n0\n11\n1\n21\n1\n').entities[0];
 const arcs = () => arcContour(outline(), 1e-4);
 const line = () => sidesOf(outline()).line;
 const upper = () => outline().upper;
@@ -92,6 +120,28 @@ const calls: Readonly<Record<string, () => readonly unknown[]>> = {
     [0, 0, 1, 1],
   ],
   measuredOutline: () => [measured()],
+  textOf: () => [Uint8Array.of(49, 32, 48)],
+  sizeOf: () => [[sourcePoints()]],
+  apart: () => [point(), { x: 0, y: 0 }],
+  withoutDuplicates: () => [sourcePoints(), 1],
+  withoutReversedPairs: () => [sourcePoints()],
+  joinChains: () => [[sourcePoints()], 1e-9],
+  oneLoop: () => [[{ chain: sourcePoints(), closed: true }], 1, true],
+  orderLoop: () => [sourcePoints()],
+  normalise: () => [orderLoop(sourcePoints()), { mm: null, hundred: 'mm' }],
+  contourOf: () => [foundChains()],
+  blocksOf: () => [readRows('1 0\n0 0')],
+  readCoordinates: () => [encoded(listed()), 'marsh.dat'],
+  dxfNumber: () => [{ code: 10, value: '1', line: 1 }],
+  arcPoints: () => [{ centre: point(), radius: 1, start: 0, sweep: 1 }, 0.1],
+  bulgeArc: () => [point(), { x: 1, y: 0 }, 0.3],
+  nurbsPoint: () => [bezier(), 2, 0.5],
+  nurbsPoints: () => [bezier(), 0.01, 100],
+  definingPoints: () => [dxfLine()],
+  drawnPoints: () => [dxfLine(), 1],
+  readDxfOutline: () => [
+    encoded(exportFile('dxf', naca4('2412'), MARSH, dxfOptionsSchema.parse({ chordMm: 220 })).text),
+  ],
   crossesItself: () => [[point(), { x: 0.4, y: 0 }, { x: 0.3, y: -0.05 }]],
   checkShape: () => [shape()],
   outlineOf: () => [shape()],
@@ -158,6 +208,12 @@ const calls: Readonly<Record<string, () => readonly unknown[]>> = {
 
 /** Given numbers, text or functions only; writeTables adds to the collector of tags that it is given for that. */
 const withoutObjects = [
+  'quoted',
+  'linesOf',
+  'numbersIn',
+  'readRows',
+  'eachDxfGroup',
+  'readDxf',
   'naca4NoseRadius',
   'naca4ThicknessOfNose',
   'parseDesignation',

@@ -82,7 +82,7 @@ describe('the outline of a measured contour', () => {
     expect(found.noseRadius).toBeLessThan(exact.noseRadiusUpper);
     const even = { ...SMOOTH, lower: SMOOTH.upper.map((weight) => -weight) };
     const radius = measure(measuredOutline(pointsOf(cstOutline(even), 80))).noseRadius;
-    expect(Math.abs(radius / exact.noseRadiusUpper - 1)).toBeLessThan(0.01);
+    expect(Math.abs(radius / exact.noseRadiusUpper - 1)).toBeLessThan(0.02);
     expect(Math.abs(found.trailingEdgeAngleDeg - exact.trailingEdgeAngleDeg)).toBeLessThan(0.05);
   });
 
