@@ -28,8 +28,8 @@ function sheetCodes({ checksum, shortCode }: SheetIdentity): string {
 }
 
 function sectionLine({ sectionName, versionNumber, designation, checksum }: EndIdentity): string {
-  const name = singleLine(sectionName) || 'Section';
-  return `Section ${name} v${versionNumber}, ${singleLine(designation)}, checksum ${shortChecksum(checksum)}`;
+  const name = singleLine(`Section ${sectionName}`);
+  return `${name} v${versionNumber}, ${singleLine(designation)}, checksum ${shortChecksum(checksum)}`;
 }
 
 /** ` of EPS 20 on Long bench`, as far as both are known. */

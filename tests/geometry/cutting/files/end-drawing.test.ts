@@ -87,6 +87,21 @@ test('random panels: in step, within 0.005 mm of the plan, no pair lost that a f
   );
 });
 
+test('where one end stands still and the other moves on, the vertex stands twice', () => {
+  const blunt = { kind: 'cst', n1: 0.5, n2: 1, trailingEdgeGap: 0.04 } as const;
+  const shape = { ...blunt, upper: [0.2, 0.2, 0.2], lower: [-0.1, -0.1, -0.1] };
+  const core = planned(planWith({ panel: { tip: { shape, chordMm: 160 } }, features: [] }));
+  const standing = ENDS.map((end) => {
+    const outline = only(readDxf(textOf(core, `${end}.dxf`)).on('CUT'));
+    expect(offPlan(core, end, outline)).toBeLessThanOrEqual(1e-5);
+    const { vertices = [] } = outline;
+    return vertices.map(({ x, y }, i) => x === vertices.at(i - 1)!.x && y === vertices.at(i - 1)!.y);
+  });
+  const [atRoot = [], atTip = []] = standing;
+  expect(atRoot).toContain(true);
+  expect(atRoot.some((stands, i) => stands && atTip[i])).toBe(false);
+});
+
 test('a prism without skin is cut as the section itself', () => {
   const core = planned(prismOf(section('2412'), 200));
   const exact = fine(outlineOf(section('2412')), 200);
