@@ -20,12 +20,12 @@ export function project({ rootAtLeft }: Pick<Scene, 'rootAtLeft'>, x: number, y:
   return { x: rootAtLeft ? -across : across, y: y + (x + z) / 2 };
 }
 
-/** Corners of the block, or of the panel where there is none, and the ends of the towers. */
+/** Corners of the block, or of the panel where there is none, and the towers' rails. */
 export function isometricExtent(scene: Scene) {
   const corners = cornersOf(scene).flat();
   const towers = scene.bench
-    ? [scene.bench.leftAt, scene.bench.rightAt].map((at) =>
-        project(scene, (scene.block?.lengthMm ?? 0) / 2, scene.block?.heightMm ?? 0, at),
+    ? [scene.bench.leftAt, scene.bench.rightAt].flatMap((at) =>
+        [0, scene.block?.lengthMm ?? 0].map((x) => project(scene, x, 0, at)),
       )
     : [];
   const points = [...corners, ...towers];
@@ -68,7 +68,7 @@ export const IsometricView = memo(function IsometricView({ scene, box, place }: 
       {scene.cores.map((core) => (
         <CoreBody key={String(core.mirrored)} scene={scene} core={core} place={place} />
       ))}
-      {scene.bench && <TowerMarks scene={scene} place={place} />}
+      {scene.bench && <TowerRails scene={scene} place={place} />}
     </g>
   );
 });
@@ -164,23 +164,18 @@ function FeatureLine(props: {
   );
 }
 
-function TowerMarks({ scene, place }: { scene: Scene; place: Place }) {
+/** The rails along the bench on which the towers run. */
+function TowerRails({ scene, place }: { scene: Scene; place: Place }) {
   const { bench, block } = scene;
   if (!bench) return null;
-  const x = (block?.lengthMm ?? 0) / 2;
-  const top = block?.heightMm ?? 0;
-  return (
-    <>
-      {[bench.leftAt, bench.rightAt].map((at) => (
-        <path
-          key={at}
-          d={pointsPath([project(scene, x, 0, at), project(scene, x, top, at)], place)}
-          className="fill-none stroke-graphite"
-          strokeWidth={LINE.wide}
-        />
-      ))}
-    </>
-  );
+  return [bench.leftAt, bench.rightAt].map((at) => (
+    <path
+      key={at}
+      d={pointsPath([project(scene, 0, 0, at), project(scene, block?.lengthMm ?? 0, 0, at)], place)}
+      className="fill-none stroke-graphite"
+      strokeWidth={LINE.wide}
+    />
+  ));
 }
 
 interface IsometricWireProps {
@@ -193,15 +188,23 @@ interface IsometricWireProps {
 export function IsometricWire({ scene, place, position }: IsometricWireProps) {
   const { wire, bench } = scene;
   if (!wire || !bench) return null;
-  const end = (line: typeof wire.leftTower, at: number) => {
+  const tower = (line: typeof wire.leftTower, at: number) => {
     const { x, y } = pointAt(line, position);
-    return project(scene, x, y, at);
+    return { carriage: project(scene, x, y, at), foot: project(scene, x, 0, at) };
   };
+  const [left, right] = [tower(wire.leftTower, bench.leftAt), tower(wire.rightTower, bench.rightAt)];
   return (
-    <path
-      d={pointsPath([end(wire.leftTower, bench.leftAt), end(wire.rightTower, bench.rightAt)], place)}
-      className="fill-none stroke-wire"
-      strokeWidth={LINE.wide}
-    />
+    <>
+      <path
+        d={[left, right].map(({ foot, carriage }) => pointsPath([foot, carriage], place)).join('')}
+        className="fill-none stroke-graphite"
+        strokeWidth={LINE.wide}
+      />
+      <path
+        d={pointsPath([left.carriage, right.carriage], place)}
+        className="fill-none stroke-wire"
+        strokeWidth={LINE.wide}
+      />
+    </>
   );
 }

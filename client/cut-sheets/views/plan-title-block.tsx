@@ -14,8 +14,6 @@ export interface PlanIdentity {
   /** Section and version at the ends: "Heron outer v3". */
   readonly root: string;
   readonly tip: string;
-  readonly machine: string | null;
-  readonly material: string | null;
   readonly author: string;
   /** ISO 8601; the date of it is shown. */
   readonly date: string;

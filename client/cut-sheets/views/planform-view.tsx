@@ -223,7 +223,7 @@ function Towers({ bench, scene, toX, top, box }: TowersProps) {
             <path d={`M${x} ${y1}V${y2}`} className="fill-none stroke-graphite" strokeWidth={LINE.wide} />
             <text
               x={atLeft ? x - 4 : x + 4}
-              y={y2 + 14}
+              y={y1 - 5}
               fontSize={11}
               textAnchor={atLeft ? 'start' : 'end'}
               className="fill-graphite"

@@ -80,8 +80,6 @@ export function identityOf(version: SheetVersion, owner: string): PlanIdentity {
     status: version.status,
     root: section(version.root),
     tip: section(version.tip),
-    machine: version.machine?.name ?? null,
-    material: version.material?.name ?? null,
     author: version.author.name,
     date: version.createdAt,
     checksum: version.checksum,

@@ -16,11 +16,11 @@ export type SendResult =
   | { readonly kind: 'refused'; readonly reason: string };
 
 /** What the keeper needs from outside; the tests give it a clock of their own. */
-interface KeeperPorts {
-  send(draft: DraftInput): Promise<SendResult>;
+export interface KeeperPorts<Draft> {
+  send(draft: Draft): Promise<SendResult>;
   /** Sends once more while the page goes away; nobody waits for the answer. */
-  sendLast(draft: DraftInput): void;
-  mirror: { write(draft: DraftInput, at: number): void; clear(): void };
+  sendLast(draft: Draft): void;
+  mirror: { write(draft: Draft, at: number): void; clear(): void };
   now(): number;
   /** Calls back after a time; returns the way to call it off. */
   after(ms: number, action: () => void): () => void;
@@ -34,16 +34,16 @@ const LONGEST_RETRY_MS = 30_000;
  * Keeps unsaved work: at once in the browser's mirror, and on the server a moment after the last change. Tries again
  * with growing pauses until the server has it; the mirror is cleared only then.
  */
-export class DraftKeeper {
-  readonly #ports: KeeperPorts;
+export class DraftKeeper<Draft = DraftInput> {
+  readonly #ports: KeeperPorts<Draft>;
   readonly #listeners = new Set<() => void>();
   #state: KeeperState = { step: 'idle' };
-  #pending: DraftInput | null = null;
-  #inFlight: DraftInput | null = null;
+  #pending: Draft | null = null;
+  #inFlight: Draft | null = null;
   #cancelTimer: () => void = () => undefined;
   #failures = 0;
 
-  constructor(ports: KeeperPorts) {
+  constructor(ports: KeeperPorts<Draft>) {
     this.#ports = ports;
   }
 
@@ -55,7 +55,7 @@ export class DraftKeeper {
   };
 
   /** Takes note of unsaved work; the newest counts. */
-  change(draft: DraftInput): void {
+  change(draft: Draft): void {
     this.#pending = draft;
     this.#failures = 0;
     this.#ports.mirror.write(draft, this.#ports.now());
@@ -98,7 +98,7 @@ export class DraftKeeper {
     });
   }
 
-  async #send(draft: DraftInput): Promise<void> {
+  async #send(draft: Draft): Promise<void> {
     this.#pending = null;
     this.#inFlight = draft;
     this.#become({ step: 'sending' });
@@ -121,7 +121,7 @@ export class DraftKeeper {
     }
   }
 
-  #failed(draft: DraftInput, result: Exclude<SendResult, { kind: 'kept' }>): void {
+  #failed(draft: Draft, result: Exclude<SendResult, { kind: 'kept' }>): void {
     const newer = this.#pending !== null;
     this.#pending ??= draft;
     if (result.kind === 'refused' && !newer) {

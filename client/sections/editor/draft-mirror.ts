@@ -6,20 +6,29 @@ import { sameShape } from './present.ts';
 const mirroredSchema = draftInputSchema.extend({ at: z.number() });
 type MirroredDraft = z.infer<typeof mirroredSchema>;
 
-/** The copy in the browser of work that the server does not have yet, one for each person and section. */
-export interface DraftMirror {
-  read(): MirroredDraft | null;
-  write(draft: DraftInput, at: number): void;
+/** The copy in the browser of work that the server does not have yet, one for each person and thing. */
+export interface Mirror<Draft, Kept> {
+  read(): Kept | null;
+  write(draft: Draft, at: number): void;
   clear(): void;
 }
+export type DraftMirror = Mirror<DraftInput, MirroredDraft>;
 
 type Store = Pick<Storage, 'getItem' | 'setItem' | 'removeItem'>;
 
-/** A full or forbidden store is no reason to stop: the server keeps the draft too. */
+/** The mirror of a person's work on a section. */
 export function draftMirror(store: Store, personId: string, sectionId: string): DraftMirror {
-  const key = `ribwright.draft.${personId}.${sectionId}`;
+  return mirrorIn(store, `ribwright.draft.${personId}.${sectionId}`, mirroredSchema);
+}
+
+/** A full or forbidden store is no reason to stop: the server keeps the draft too. */
+export function mirrorIn<Draft extends object, Kept>(
+  store: Store,
+  key: string,
+  schema: z.ZodType<Kept>,
+): Mirror<Draft, Kept> {
   return {
-    read: () => attempt(() => parse(store.getItem(key))),
+    read: () => attempt(() => parse(store.getItem(key), schema)),
     write: (draft, at) => {
       attempt(() => {
         store.setItem(key, JSON.stringify({ ...draft, at }));
@@ -41,9 +50,9 @@ function attempt<Result>(action: () => Result): Result | null {
   }
 }
 
-function parse(text: string | null): MirroredDraft | null {
+function parse<Kept>(text: string | null, schema: z.ZodType<Kept>): Kept | null {
   if (text === null) return null;
-  const read = mirroredSchema.safeParse(JSON.parse(text));
+  const read = schema.safeParse(JSON.parse(text));
   return read.success ? read.data : null;
 }
 

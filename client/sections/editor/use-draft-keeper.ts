@@ -3,7 +3,7 @@ import { sectionEndpoints } from '#server/contracts/section-endpoints.ts';
 import { OfflineError, ProblemError } from '#client/api/request.ts';
 import { type DraftInput, keepDraft } from '#client/api/sections.ts';
 import { useMe } from '#client/app/session.tsx';
-import { DraftKeeper, type KeeperState, type SendResult } from './draft-keeper.ts';
+import { DraftKeeper, type KeeperPorts, type KeeperState, type SendResult } from './draft-keeper.ts';
 import { type DraftMirror, draftMirror } from './draft-mirror.ts';
 
 /** The mirror of the signed-in person for a section. */
@@ -15,12 +15,30 @@ export function useDraftMirror(sectionId: string): DraftMirror {
 
 /** Keeps the draft of a section for as long as its editor is open. */
 export function useDraftKeeper(sectionId: string, mirror: DraftMirror): readonly [DraftKeeper, KeeperState] {
+  return useKeeper<DraftInput>(mirror, {
+    keep: (draft) => keepDraft(sectionId, draft),
+    address: sectionEndpoints.keepDraft.path.replace(':sectionId', sectionId),
+  });
+}
+
+interface Keeping<Draft> {
+  /** Keeps the draft on the server. */
+  readonly keep: (draft: Draft) => Promise<unknown>;
+  /** Where a draft is put while the page goes away. */
+  readonly address: string;
+}
+
+/** Keeps unsaved work for as long as its screen is open; `mirror` and `keeping` of the first call are used. */
+export function useKeeper<Draft>(
+  mirror: KeeperPorts<Draft>['mirror'],
+  keeping: Keeping<Draft>,
+): readonly [DraftKeeper<Draft>, KeeperState] {
   const [keeper] = useState(
     () =>
-      new DraftKeeper({
-        send: (draft) => send(sectionId, draft),
+      new DraftKeeper<Draft>({
+        send: (draft) => sent(keeping.keep(draft)),
         sendLast: (draft) => {
-          sendLast(sectionId, draft);
+          sendLast(keeping.address, draft);
         },
         mirror,
         now: () => Date.now(),
@@ -58,9 +76,9 @@ export function useDraftKeeper(sectionId: string, mirror: DraftMirror): readonly
   return [keeper, state];
 }
 
-async function send(sectionId: string, draft: DraftInput): Promise<SendResult> {
+async function sent(keeping: Promise<unknown>): Promise<SendResult> {
   try {
-    await keepDraft(sectionId, draft);
+    await keeping;
     return { kind: 'kept' };
   } catch (error) {
     if (error instanceof OfflineError) return { kind: 'failed', offline: true };
@@ -75,11 +93,10 @@ function isFinal(status: number): boolean {
   return status >= 400 && status < 500 && ![401, 408, 429].includes(status);
 }
 
-/** A request that outlives the page (fetch with keepalive carries up to 64 kB; a draft has about 1). */
-function sendLast(sectionId: string, draft: DraftInput): void {
-  const { path, method } = sectionEndpoints.keepDraft;
-  void fetch(path.replace(':sectionId', sectionId), {
-    method,
+/** A request that outlives the page (fetch with keepalive carries up to 64 kB; a draft has a few). */
+function sendLast(address: string, draft: unknown): void {
+  void fetch(address, {
+    method: 'PUT',
     keepalive: true,
     credentials: 'same-origin',
     headers: { 'content-type': 'application/json', accept: 'application/json' },

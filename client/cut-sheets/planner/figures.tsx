@@ -1,0 +1,103 @@
+import { Fragment } from 'react';
+import {
+  formatLength,
+  formatNumber,
+  formatPercent,
+  MM_PER_INCH,
+  type Units,
+  useUnits,
+} from '#client/app/units.ts';
+import { type CutModel, type PlanModel } from '../views/plan-model.ts';
+import { duration } from '../views/view-words.ts';
+import { stepLength } from '#geometry/cutting/feed.ts';
+import { at } from '#geometry/cutting/arrays.ts';
+
+type Row = readonly [name: string, value: string];
+
+/** What the plan comes to. Times and masses are estimates: foam differs from block to block, and machines from their program. */
+export function Figures({ model, stale }: { model: PlanModel | null; stale: boolean }) {
+  const units = useUnits();
+  const rows = model ? rowsOf(model, units) : EMPTY;
+  return (
+    <section aria-label="Figures" aria-busy={stale}>
+      <div className="mb-1 flex items-end justify-between gap-2 border-b border-rule pb-1 text-xs text-graphite">
+        <h2 className="font-semibold tracking-wide uppercase">Figures</h2>
+        <span>estimates</span>
+      </div>
+      <dl className={`grid grid-cols-[minmax(0,1fr)_auto] gap-x-3 gap-y-1 ${stale ? 'opacity-60' : ''}`}>
+        {rows.map(([name, value]) => (
+          <Fragment key={name}>
+            <dt>{name}</dt>
+            <dd className="text-right font-semibold whitespace-nowrap">{value}</dd>
+          </Fragment>
+        ))}
+      </dl>
+    </section>
+  );
+}
+
+const NAMES = {
+  volume: 'Core, volume',
+  mass: 'Core, mass',
+  time: 'Cut time',
+  speed: 'Wire, faster end',
+  melt: 'Faster to slower end',
+  root: 'Foam left at the root',
+  tip: 'Foam left at the tip',
+  check: 'Program off the plan',
+  points: 'Points in step',
+} as const;
+const EMPTY: readonly Row[] = Object.values(NAMES).map((name) => [name, '–'] as const);
+
+function rowsOf({ foam, cut, fit, ribs, root }: PlanModel, units: Units): Row[] {
+  const length = (mm: number, decimals = 1) => formatLength(mm, units, decimals);
+  return [
+    [NAMES.volume, foam ? volume(foam.coreVolumeMm3, units) : '–'],
+    [NAMES.mass, foam ? mass(foam.coreMassG, units) : '–'],
+    [NAMES.time, cut ? duration(cut.totalSeconds) : '–'],
+    [NAMES.speed, cut ? speed(fastest(cut), units) : '–'],
+    [NAMES.melt, cut ? `${cut.melt.ratio.toFixed(2)}, ${cut.melt.slowerEnd} slower` : '–'],
+    [NAMES.root, fit ? length(fit.marginMm.root) : '–'],
+    [NAMES.tip, fit ? length(fit.marginMm.tip) : '–'],
+    [NAMES.check, cut ? length(cut.largestDeviationMm, 3) : '–'],
+    [NAMES.points, `${root.core.x.length} + ${root.core.x.length}`],
+    ...(ribs
+      ? [
+          ['Ribs', `${ribs.stationsMm.length} on ${sheets(ribs.layout.sheets)}`] as const,
+          ['Yield of the sheets', formatPercent(ribs.layout.yield, 0)] as const,
+        ]
+      : []),
+  ];
+}
+
+function sheets(count: number): string {
+  return count === 1 ? '1 sheet' : `${count} sheets`;
+}
+
+/** The highest wire speed in the plane of either face while it cuts, mm/min. */
+function fastest({ kinds, left, right, arrives, leaves }: CutModel): number {
+  let highest = 0;
+  for (let i = 1; i < kinds.length; i++) {
+    const seconds = at(arrives, i) - at(leaves, i - 1);
+    if (kinds[i] === 'travel' || seconds <= 0) continue;
+    highest = Math.max(highest, (60 * Math.max(stepLength(left, i), stepLength(right, i))) / seconds);
+  }
+  return highest;
+}
+
+function volume(mm3: number, units: Units): string {
+  return units === 'mm'
+    ? `${formatNumber(mm3 / 1000, 0)} cm³`
+    : `${formatNumber(mm3 / MM_PER_INCH ** 3, 1)} in³`;
+}
+
+const G_PER_OUNCE = 28.349523125;
+function mass(grams: number, units: Units): string {
+  return units === 'mm' ? `${formatNumber(grams, 1)} g` : `${formatNumber(grams / G_PER_OUNCE, 2)} oz`;
+}
+
+function speed(mmMin: number, units: Units): string {
+  return units === 'mm'
+    ? `${formatNumber(mmMin, 0)} mm/min`
+    : `${formatNumber(mmMin / MM_PER_INCH, 1)} in/min`;
+}
