@@ -81,8 +81,7 @@ function versionHandlers({ knex, works, publicUrl }: Surroundings): VersionHandl
       releaseSheetVersion(knex, works, authorOf(call), {
         ...call.params,
         reason: call.body.reason,
-        authorName: call.person.name,
-        publicUrl,
+        names: { person: call.person.name, workshop: call.person.workshopName, publicUrl },
       }),
     withdrawSheetVersion: (call) => withdrawSheetVersion(knex, authorOf(call), call.params, call.body.reason),
   };
@@ -93,24 +92,17 @@ function fileHandlers({ knex, works, publicUrl }: Surroundings): FileHandlers {
   return {
     listSheetFiles: async (call) => {
       const version = await versionOf(knex, call);
-      return { items: await files.list(call.person.workshopId, version) };
+      return { items: await files.list(call.person, version) };
     },
     sheetFile: async (call) => {
-      const { workshopId, role } = call.person;
+      const { person, params } = call;
       const version = await versionOf(knex, call);
-      const sheet = await sheetState(knex, workshopId, version.sheetId);
-      checkDownload(role, version, sheet.releasedNumber, 'cut sheet');
-      const {
-        name,
-        downloadName: fileName,
-        mediaType,
-        bytes,
-      } = await files.find(workshopId, version, call.params.name);
-      const { sheetId, number } = version;
+      const sheet = await sheetState(knex, person.workshopId, version.sheetId);
+      checkDownload(person.role, version, sheet.releasedNumber, 'cut sheet');
+      const { downloadName: fileName, mediaType, bytes } = await files.find(person, version, params.name);
       return {
         file: { fileName, mediaType, bytes },
-        record: (checksum) =>
-          recordSheetDownload(knex, authorOf(call), { sheetId, number, name, fileName, checksum }),
+        record: (checksum) => recordSheetDownload(knex, authorOf(call), { ...params, fileName, checksum }),
       };
     },
     listSheetDownloads: async (call) => {

@@ -1,6 +1,6 @@
 import { type Finding } from '#geometry/cutting/findings.ts';
 import { may, type Role } from '#server/contracts/permissions.ts';
-import { type SheetSource } from '#server/contracts/cut-sheets.ts';
+import { type SheetPart, type SheetSource } from '#server/contracts/cut-sheets.ts';
 import { Refusal, refuseField } from '#server/refusal.ts';
 import { archived, checkBase, type Reach } from '#server/sections/rules.ts';
 import { isSameDocument, type SheetDocument } from './document.ts';
@@ -63,13 +63,23 @@ export function checkSources(...sources: readonly SheetSource[]): void {
   });
 }
 
+/** The field of a plan as people make it that stands for a field of the pinned one. */
+function fieldOf(path: string): string {
+  if (path === '') return 'plan';
+  if (/^(machine|material)(\.|$)/.test(path)) return `plan.${path.replace(/\..*/, '')}Id`;
+  return `plan.${path.replace(/^(panel\.(?:root|tip))\.shape.*/, '$1.sectionId')}`;
+}
+
 /**
  * Whether a plan can be cut.
- * @throws Refusal `invalid` with every finding that is an error, each at its field of the plan
+ * @throws Refusal `invalid` with every finding that is an error, each at its field of the plan, or because there is nothing to cut
  */
-export function checkFindings(findings: readonly Finding[]): void {
+export function checkFindings(findings: readonly Finding[], parts: readonly SheetPart[]): void {
   const errors = findings
     .filter(({ severity }) => severity === 'error')
-    .map(({ path, message }) => ({ path: path === '' ? 'plan' : `plan.${path}`, message }));
+    .map(({ path, message }) => ({ path: fieldOf(path), message }));
   if (errors.length > 0) throw new Refusal('invalid', { errors });
+  if (parts.length === 0) {
+    throw refuseField('plan.block', 'The plan makes nothing: it has no block, no ribs and no templates.');
+  }
 }

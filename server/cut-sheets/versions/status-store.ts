@@ -5,7 +5,7 @@ import { scoped } from '#server/database/scoped.ts';
 import { inTransaction } from '#server/database/transaction.ts';
 import { Refusal } from '#server/refusal.ts';
 import { archived, type Author, checkTransition } from '#server/sections/rules.ts';
-import { identityOf } from '../files/identity.ts';
+import { orderOf, type SheetNames } from '../files/order.ts';
 import { type MadeFile } from '../files/make.ts';
 import { storeFiles } from '../files/store.ts';
 import { type SheetWorks } from '../files/works.ts';
@@ -54,9 +54,7 @@ async function holdSources(db: Knex, workshopId: string, { plan }: SheetVersion)
 
 interface ReleaseInput extends VersionKey {
   readonly reason: string;
-  /** Name of the author, as the files say it. */
-  readonly authorName: string;
-  readonly publicUrl: string;
+  readonly names: SheetNames;
 }
 
 /**
@@ -68,7 +66,7 @@ export async function releaseSheetVersion(
   db: Knex,
   works: SheetWorks,
   author: Author,
-  { sheetId, number, reason, authorName, publicUrl }: ReleaseInput,
+  { sheetId, number, reason, names }: ReleaseInput,
 ): Promise<SheetVersion> {
   const { workshopId } = author;
   const checked = async (on: Knex, lock: boolean) => {
@@ -80,9 +78,8 @@ export async function releaseSheetVersion(
     return { sheet, version };
   };
   const { version } = await checked(db, false);
-  const identity = identityOf(version, publicUrl, { by: authorName, at: author.at });
-  const made = await works.make({ plan: version.pinned, identity, paper: version.plan.paper });
-  checkFindings(made.findings);
+  const made = await works.make(orderOf(version, names, author.at));
+  checkFindings(made.findings, version.parts);
   await inTransaction(db, async (transaction) => {
     await holdSources(transaction, workshopId, version);
     const { sheet, version: now } = await checked(transaction, true);

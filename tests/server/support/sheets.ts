@@ -44,6 +44,13 @@ export const cheapWorks: SheetWorks = {
   archive: async () => Buffer.from('an archive'),
 };
 
+/** What the files say of those who made them. */
+export const sampleNames = {
+  person: 'builder of marsh',
+  workshop: 'marsh',
+  publicUrl: 'http://127.0.0.1',
+};
+
 /** A cut sheet with version 1 released and version 2 a draft, and unsaved work of everybody who may plan. */
 export async function makeSheet(
   { knex }: TestApi,
@@ -59,8 +66,7 @@ export async function makeSheet(
     plan,
     note: '',
   });
-  const signed = { authorName: 'builder of marsh', publicUrl: 'http://127.0.0.1', reason: '' };
-  await releaseSheetVersion(knex, works, author, { sheetId: id, number: 1, ...signed });
+  await releaseSheetVersion(knex, works, author, { sheetId: id, number: 1, reason: '', names: sampleNames });
   await saveSheetVersion(knex, works, author, id, { basedOn: 1, plan: { ...plan, quantity: 4 }, note: '' });
   for (const role of ['owner', 'designer', 'builder'] as const) {
     await keepSheetDraft(knex, workshop.author(role), id, { basedOn: 2, values: { quantity: 'six' } });
