@@ -29,7 +29,7 @@ export interface Simulation {
  *
  * Between the ends a straight wire can't touch a twisted core along a whole ruling: where the surface normals of both ends differ by the angle δ, it
  * runs about h (1 − cos δ/2) too near for half a kerf of h, a little more where the kerf changes. That shows in the deviations and is no
- * fault of the program: with 5° of washout and 1.6 mm of kerf it is below 0.006 mm, above 0.02 mm only beyond some 9° with a wide kerf.
+ * fault of the program: with 5° of washout and 1.6 mm of kerf it is below 0.006 mm, above 0.02 mm only beyond some 10° with a wide kerf.
  * @param text the program, from wherever it comes
  * @param cores what must come out, in the order of the block
  */

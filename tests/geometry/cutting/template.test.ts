@@ -58,17 +58,13 @@ test('ramps are in proportion to the chords; the reference is level at both ends
   }
 });
 
-test('a pin without room and a thin ramp are findings', () => {
+test('a pin without room is a finding', () => {
   const plan = planWith({ template: { ...TEMPLATE, pinStations: [0.25, 0.98] } });
-  const findings = planCore(plan, IDENTITY).findings.map(({ code, path, severity }) => ({
-    code,
-    path,
-    severity,
-  }));
-  expect(findings).toContainEqual({
-    severity: 'error',
-    code: 'pin-outside-template',
-    path: 'template.pinStations.1',
-  });
-  expect(findings).toContainEqual({ severity: 'note', code: 'thin-ramp', path: 'template.rampFraction' });
+  expect(planCore(plan, IDENTITY).findings).toContainEqual(
+    expect.objectContaining({
+      severity: 'error',
+      code: 'pin-outside-template',
+      path: 'template.pinStations.1',
+    }),
+  );
 });
