@@ -1,5 +1,5 @@
-import { type Mark, type Rect } from './page.ts';
 import { corners } from './marks.ts';
+import { type Mark, type Rect } from './page.ts';
 
 /** Clear modules on each side (ISO/IEC 18004). */
 export const QUIET_MODULES = 4;

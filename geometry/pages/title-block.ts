@@ -1,8 +1,8 @@
-import { checksumText, dayOf, sectionLine } from './words.ts';
 import { type SheetIdentity } from '../cutting/files/identity.ts';
 import { LETTER, fittedText } from './lettering.ts';
 import { WIDTH, outlined, segment, text } from './marks.ts';
 import { type Mark, type Rect, type Weight } from './page.ts';
+import { checksumText, dayOf, sectionLine } from './words.ts';
 
 /** Size of the title block (ISO 7200 asks for a width of 180 mm), mm. */
 export const TITLE_BLOCK = { width: 180, height: 42 } as const;

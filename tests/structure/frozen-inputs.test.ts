@@ -15,6 +15,7 @@ import { readDxf } from '#geometry/imports/dxf-entities.ts';
 import { type FoundChains } from '#geometry/imports/imported.ts';
 import { orderLoop } from '#geometry/imports/section-loop.ts';
 import { MARSH } from '#tests/geometry/formats/identity-example.ts';
+import { pageCalls, pageCallsWithoutObjects } from '#tests/geometry/pages/frozen-calls.ts';
 import { FREE_FORM, naca4 } from '#tests/geometry/shapes/samples.ts';
 
 type AnyFunction = (...args: readonly unknown[]) => unknown;
@@ -204,6 +205,7 @@ const calls: Readonly<Record<string, () => readonly unknown[]>> = {
   exportFile: () => ['dxf', shape(), structuredClone(MARSH), dxfOptionsSchema.parse({ chordMm: 220 })],
   roundContour: () => [contour(), 4],
   withoutRepeats: () => [written()],
+  ...pageCalls,
 };
 
 /** Given numbers, text or functions only; writeTables adds to the collector of tags that it is given for that. */
@@ -234,6 +236,7 @@ const withoutObjects = [
   'fixed',
   'roundTo',
   'writeTables',
+  ...pageCallsWithoutObjects,
 ];
 
 /** Freezes a value with all that is in it; the numbers of typed arrays cannot be frozen and are compared instead. */

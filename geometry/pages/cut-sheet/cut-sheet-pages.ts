@@ -1,8 +1,8 @@
-import { cleanIdentity, statusLine } from '../words.ts';
 import { type SheetIdentity } from '../../cutting/files/identity.ts';
 import { type Finding } from '../../cutting/findings.ts';
-import { type CorePlan } from '../../cutting/planner.ts';
 import { ENDS, type End } from '../../cutting/plan.ts';
+import { type CorePlan } from '../../cutting/planner.ts';
+import { singleLine } from '../../formats/text.ts';
 import { type Block, setBlocks } from '../blocks.ts';
 import { LETTER, fittedText, wrappedText } from '../lettering.ts';
 import { text } from '../marks.ts';
@@ -11,6 +11,7 @@ import { qrMarks } from '../qr.ts';
 import { SHEETS, type SheetSize, frameOf, sheetFrame } from '../sheet-frame.ts';
 import { TITLE_BLOCK, titleBlock } from '../title-block.ts';
 import { scaleFor, scaleText } from '../view.ts';
+import { cleanIdentity, statusLine } from '../words.ts';
 import { FACE_INSET, faceExtent, faceMarks } from './face.ts';
 import { PLANFORM_INSET, planformExtent, planformMarks } from './planform.ts';
 import { settingsTable } from './settings-table.ts';
@@ -56,7 +57,7 @@ export function cutSheetPages(
   ];
   return bodies.map(({ marks, scale }, i) =>
     sheetPage(size, marks, clean, {
-      owner: details.owner,
+      owner: singleLine(details.owner),
       documentType: 'Cut sheet',
       scale,
       paper: size,

@@ -1,9 +1,9 @@
-import { fixed } from '../../formats/text.ts';
 import { type Box, type Polyline, at, boxOf } from '../../cutting/arrays.ts';
 import { type BlockPlace, toBlock } from '../../cutting/block.ts';
 import { type PlacedFeature } from '../../cutting/features.ts';
-import { type CorePlan } from '../../cutting/planner.ts';
 import { type End } from '../../cutting/plan.ts';
+import { type CorePlan } from '../../cutting/planner.ts';
+import { fixed } from '../../formats/text.ts';
 import { type Point } from '../../point.ts';
 import { dimension } from '../dimension.ts';
 import { LETTER, textBox } from '../lettering.ts';

@@ -1,8 +1,8 @@
-import { fixed } from '../../formats/text.ts';
 import { type Box, boxOf } from '../../cutting/arrays.ts';
 import { type PlacedFeature } from '../../cutting/features.ts';
-import { type CorePlan } from '../../cutting/planner.ts';
 import { ENDS, type End } from '../../cutting/plan.ts';
+import { type CorePlan } from '../../cutting/planner.ts';
+import { fixed } from '../../formats/text.ts';
 import { type Point } from '../../point.ts';
 import { dimension } from '../dimension.ts';
 import { LETTER, textBox } from '../lettering.ts';

@@ -1,11 +1,11 @@
-import { plainText } from '../words.ts';
-import { fixed } from '../../formats/text.ts';
 import { boxOf } from '../../cutting/arrays.ts';
 import { type Finding, stationText } from '../../cutting/findings.ts';
-import { type CorePlan } from '../../cutting/planner.ts';
 import { type Feature } from '../../cutting/plan.ts';
+import { type CorePlan } from '../../cutting/planner.ts';
+import { fixed } from '../../formats/text.ts';
 import { type Table, type Notes, tableColumn } from '../blocks.ts';
 import { CAUTIONS } from '../cautions.ts';
+import { plainText } from '../words.ts';
 
 function sentences(title: string, of: readonly (readonly [string, string])[]): Notes {
   return { kind: 'notes', title, sentences: of.map(([before, words]) => ({ before, words })) };

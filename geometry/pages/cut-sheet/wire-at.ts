@@ -1,6 +1,6 @@
 import { type Polyline, polylineOf } from '../../cutting/arrays.ts';
-import { type CorePlan } from '../../cutting/planner.ts';
 import { type End } from '../../cutting/plan.ts';
+import { type CorePlan } from '../../cutting/planner.ts';
 import { type Point } from '../../point.ts';
 
 /** The wire's way round one core in the plane of a face of the block. */

@@ -1,4 +1,3 @@
-import { checksumText } from '../words.ts';
 import { type Point } from '../../point.ts';
 import { CAUTIONS } from '../cautions.ts';
 import { LETTER, fittedText, wrappedText } from '../lettering.ts';
@@ -6,6 +5,7 @@ import { WIDTH, area, corners, line, outlined, text } from '../marks.ts';
 import { type Mark, type Rect, type Weight, type PageDetails } from '../page.ts';
 import { qrMarks } from '../qr.ts';
 import { scaleBar } from '../scale-bar.ts';
+import { checksumText } from '../words.ts';
 import { type Tile, type Tiling } from './tiles.ts';
 
 /** What the foot of a template's page says. */

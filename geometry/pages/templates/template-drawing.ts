@@ -20,7 +20,8 @@ export interface TemplateDrawing {
 /** Room around the template for the numbers that do not fit inside, mm. */
 const SURROUND_MM = { x: 6, y: 9 } as const;
 
-const CROSS_MM = 4;
+/** Half of a cross with its name above it must stand within half of the overlap. */
+const CROSS_MM = 3.6;
 
 /** The tiles on which there is something of the template. */
 export function usedTiles(template: Template, tiles: readonly Tile[]): Tile[] {
@@ -138,7 +139,7 @@ function joinMarks({ tiles, joins }: Tiling, room: Occupied): { lines: Mark[]; t
       segment(x, y - CROSS_MM, x, y + CROSS_MM),
     );
     room.take({ x: x - CROSS_MM, y: y - CROSS_MM, width: 2 * CROSS_MM, height: 2 * CROSS_MM });
-    const mark = text({ x, y: y - CROSS_MM - 0.6 }, words, LETTER.least, {
+    const mark = text({ x, y: y - CROSS_MM - 0.7 }, words, LETTER.least, {
       ink: 'graphite',
       anchor: 'middle',
     });

@@ -1,8 +1,7 @@
-import { cleanIdentity, plainText, sectionLine, statusLine } from '../words.ts';
-import { fixed } from '../../formats/text.ts';
 import { type SheetIdentity } from '../../cutting/files/identity.ts';
 import { type CorePlan } from '../../cutting/planner.ts';
 import { type Template } from '../../cutting/template.ts';
+import { fixed } from '../../formats/text.ts';
 import { type Point } from '../../point.ts';
 import { clippedLine } from '../clip.ts';
 import { textBox } from '../lettering.ts';
@@ -10,6 +9,7 @@ import { WIDTH, line, outlined } from '../marks.ts';
 import { isWithin } from '../occupied.ts';
 import { type Mark, type Page, type Rect, type PageDetails } from '../page.ts';
 import { scaleBar } from '../scale-bar.ts';
+import { cleanIdentity, plainText, sectionLine, statusLine } from '../words.ts';
 import { BAND_MM, templateBand } from './template-band.ts';
 import { type TemplateDrawing, contentOf, drawTemplate, usedTiles } from './template-drawing.ts';
 import { type Tile, rowLetters, tilingOf } from './tiles.ts';
