@@ -1,5 +1,5 @@
 /** What can be said about a file before it is opened; lengths in mm. */
-export type CutFileFacts =
+type CutFileFacts =
   | {
       /** The outline at one end of the core. */
       readonly kind: 'outline';

@@ -13,7 +13,7 @@ import { ribSheets } from './rib-drawing.ts';
 import { sectionContour, sectionFile } from './section-file.ts';
 
 /** How the files are written. */
-export interface CutFileOptions {
+interface CutFileOptions {
   /** Release of the DXF files; `r12` for old controllers. */
   readonly release?: DxfRelease;
 }

@@ -11,7 +11,7 @@ import { RIB_LAYERS } from './layers.ts';
 import { ribLines, ribStationLines } from './words.ts';
 
 /** A sheet of ribs, as they lie on it, its lower left corner at the origin. */
-export interface RibSheet {
+interface RibSheet {
   readonly document: DxfDocument;
   readonly numbers: readonly number[];
 }

@@ -131,6 +131,27 @@ test('SLOT has every feature at its place, in step, and the tube’s entry slit 
   expect(counts(root)).toEqual(counts(tip));
 });
 
+test('strips and hinges are on SLOT with the plan’s own vertices, in step even where a hinge is a plain slit', () => {
+  const stations = (at: number) => ({ rootStation: at, tipStation: at });
+  const strip = { kind: 'strip', name: 'Web', ...stations(0.3), widthMm: 3 } as const;
+  const hinge = { kind: 'hinge', name: '', hingeSurface: 'upper', webMm: 0.5, ...stations(0.7) } as const;
+  for (const bevelDeg of [0, 30]) {
+    const core = planned(planWith({ features: [strip, { ...hinge, bevelDeg }] }));
+    expect(core.features).toHaveLength(2);
+    for (const end of ENDS) {
+      const slots = readDxf(textOf(core, `${end}.dxf`)).on('SLOT');
+      expect(slots).toHaveLength(2);
+      slots.forEach(({ vertices, shape }, k) => {
+        const { outline } = core.features[k]![end];
+        expect(shape).toBe(true);
+        expect(vertices).toHaveLength(outline.x.length);
+        const off = vertices!.map(({ x, y }, i) => Math.hypot(x - at(outline.x, i), y - at(outline.y, i)));
+        expect(Math.max(...off)).toBeLessThanOrEqual(1e-5);
+      });
+    }
+  }
+});
+
 test('REFERENCE has the whole section in its place, its chord line, and the block about the core', () => {
   for (const end of ENDS) {
     const [contour, chord, block] = both[end].on('REFERENCE');
