@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { expect, test } from 'vitest';
-import { ENDS, PLAN_LIMITS } from '#geometry/cutting/plan.ts';
+import { ENDS } from '#geometry/cutting/plan.ts';
 import { planCore } from '#geometry/cutting/planner.ts';
 import { shapes } from '#tests/geometry/shapes/samples.ts';
 import { crossingsByHand } from './measuring.ts';
@@ -84,100 +84,6 @@ test('any accepted shapes and sizes end in finite numbers or findings, never in 
     { numRuns: 40, seed: 33 },
   );
 }, 120_000);
-
-const bad: [string, unknown, string][] = [
-  [
-    'a chord of 1 mm',
-    { panel: { ...PLAN.panel, root: { ...PLAN.panel.root, chordMm: 1 } } },
-    'panel.root.chordMm',
-  ],
-  [
-    'a chord of 5000 mm',
-    { panel: { ...PLAN.panel, tip: { ...PLAN.panel.tip, chordMm: 5000 } } },
-    'panel.tip.chordMm',
-  ],
-  ['no span', { panel: { ...PLAN.panel, spanMm: 0 } }, 'panel.spanMm'],
-  ['a span that is not a number', { panel: { ...PLAN.panel, spanMm: NaN } }, 'panel.spanMm'],
-  ['a text for a kerf', { kerfMm: { root: '0.8', tip: 0.8 } }, 'kerfMm.root'],
-  ['a skin thicker than the section', { allowances: { upperMm: 15, lowerMm: 15 } }, 'allowances.upperMm'],
-  [
-    'a slot outside the contour',
-    { features: [{ ...PLAN.features[1], rootStation: 1, tipStation: 1 }] },
-    'features.0.rootStation',
-  ],
-  [
-    'a tip larger than the block',
-    { panel: { ...PLAN.panel, tip: { ...PLAN.panel.tip, chordMm: 400 } } },
-    'block.lengthMm',
-  ],
-  [
-    'towers closer than the panel',
-    { machine: { ...PLAN.machine, towerDistanceMm: 300 } },
-    'machine.towerDistanceMm',
-  ],
-  [
-    'two axes of one letter',
-    {
-      machine: {
-        ...PLAN.machine,
-        controller: {
-          ...PLAN.machine.controller,
-          axes: { leftX: 'X', leftY: 'Y', rightX: 'X', rightY: 'V' },
-        },
-      },
-    },
-    'machine.controller.axes',
-  ],
-  [
-    'a header line that is no code',
-    { machine: { ...PLAN.machine, controller: { ...PLAN.machine.controller, header: ['M3\nG28'] } } },
-    'machine.controller.header.0',
-  ],
-  [
-    'a shape that crosses itself',
-    {
-      panel: {
-        ...PLAN.panel,
-        root: { ...PLAN.panel.root, shape: { ...PLAN.panel.root.shape, maxThickness: 9 } },
-      },
-    },
-    'panel.root.shape.maxThickness',
-  ],
-  ['a field it does not know', { surprise: 1 }, 'surprise'],
-  [
-    'stocks that leave nothing',
-    { stock: { leadingEdgeStation: 0.6, trailingEdgeStation: 0.5 } },
-    'stock.trailingEdgeStation',
-  ],
-];
-
-test.each(bad)('%s is an error with its field and a sentence', (_, changes, path) => {
-  const { findings } = planCore({ ...PLAN, ...(changes as object) }, IDENTITY);
-  const found = findings.filter((finding) => finding.severity === 'error' && finding.path === path);
-  expect(found.length).toBeGreaterThan(0);
-  for (const { message } of found) expect(message).toMatch(/^[A-Z][^\n]*\.$/);
-});
-
-test.each([[null], [undefined], [42], ['plan'], [[]], [{}]])(
-  '%j instead of a plan is refused, not thrown',
-  (values) => {
-    const { core, findings } = planCore(values, IDENTITY);
-    expect(core).toBeNull();
-    expect(findings.length).toBeGreaterThan(0);
-  },
-);
-
-test('the limits of the schema are those it states', () => {
-  const { min, max } = PLAN_LIMITS.chordMm;
-  const of = (chordMm: number) =>
-    planCore(
-      { ...PLAN, panel: { ...PLAN.panel, root: { ...PLAN.panel.root, chordMm } } },
-      IDENTITY,
-    ).findings.filter(({ code }) => code === 'bad-value');
-  expect(of(min)).toEqual([]);
-  expect(of(max)).toEqual([]);
-  expect(of(min - 0.001)).toHaveLength(1);
-});
 
 test('bare foam that runs out to less than the least trailing edge is warned of', () => {
   const { findings } = planCore(planWith({ allowances: { upperMm: 0, lowerMm: 0 } }), IDENTITY);
