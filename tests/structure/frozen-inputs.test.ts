@@ -1,6 +1,8 @@
 import { expect, test } from 'vitest';
 import { type Contour, contourPoints } from '#geometry/contour/contour.ts';
 import { sidesOf } from '#geometry/contour/chord-line.ts';
+import { loopOf, trueChordOf } from '#geometry/contour/loop.ts';
+import { SHEET_CHORD, pointsOnChord, residualsOf } from '#geometry/contour/point-residuals.ts';
 import { arcContour } from '#geometry/contour/arcs.ts';
 import { sampleCosine } from '#geometry/contour/sampling.ts';
 import { datOptionsSchema, dxfOptionsSchema } from '#geometry/formats/options.ts';
@@ -43,6 +45,8 @@ const measured = (): MeasuredShape => {
   const closed = [...points, points[0] ?? point()];
   return { kind: 'measured', x: closed.map(({ x }) => x), y: closed.map(({ y }) => y) };
 };
+const residuals = () =>
+  residualsOf(outline(), pointsOnChord(measured(), SHEET_CHORD), () => point(), new Set());
 const sourcePoints = () => contourPoints(contour()).map((at, i) => ({ ...at, line: i + 1 }));
 const listed = () =>
   measured()
@@ -143,6 +147,23 @@ const calls: Readonly<Record<string, () => readonly unknown[]>> = {
   readDxfOutline: () => [
     encoded(exportFile('dxf', naca4('2412'), MARSH, dxfOptionsSchema.parse({ chordMm: 220 })).text),
   ],
+  loopOf: () => [outline()],
+  trueChordOf: () => [outline()],
+  onChord: () => [trueChordOf(outline()), point()],
+  nearestOn: () => [loopOf(outline()), point(), 0.3],
+  outwardNormal: () => [loopOf(outline()), 0.3],
+  deviationWords: () => [{ deviation: 0.001, surface: 'upper', station: 0.3 }],
+  toleranceVerdict: () => [
+    { deviation: 0.001, surface: 'upper', station: 0.3 },
+    { counted: 9, outside: 1, excluded: 0 },
+  ],
+  longestChordOf: () => [measured()],
+  pointsOnChord: () => [measured(), trueChordOf(outline())],
+  residualsOf: () => [outline(), pointsOnChord(measured(), SHEET_CHORD), () => point(), new Set([3])],
+  largestOf: () => [residuals(), 'size'],
+  shareOf: () => [residuals()],
+  fitPoints: () => [measured(), { order: { upper: 4, lower: 4 }, excluded: [3] }],
+  matchFourDigits: () => [measured(), [3]],
   crossesItself: () => [[point(), { x: 0.4, y: 0 }, { x: 0.3, y: -0.05 }]],
   checkShape: () => [shape()],
   outlineOf: () => [shape()],
@@ -210,6 +231,7 @@ const calls: Readonly<Record<string, () => readonly unknown[]>> = {
 
 /** Given numbers, text or functions only; writeTables adds to the collector of tags that it is given for that. */
 const withoutObjects = [
+  'modelTolerance',
   'quoted',
   'linesOf',
   'numbersIn',
