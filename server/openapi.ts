@@ -4,6 +4,7 @@ import { type Endpoint } from './contracts/endpoint.ts';
 import { type EndpointName, endpoints } from './contracts/endpoints.ts';
 import { permissions } from './contracts/permissions.ts';
 import { problems, type ProblemCode } from './contracts/problems.ts';
+import { sheetConflictSchema } from './contracts/cut-sheets.ts';
 import { versionConflictSchema } from './contracts/sections.ts';
 
 type Json = Record<string, unknown>;
@@ -49,11 +50,17 @@ function refusalsOf(endpoint: Endpoint): number[] {
   return [...new Set(statuses)].sort((a, b) => a - b);
 }
 
+/** What a save answers when another version came in between. */
+const conflicts: Partial<Record<EndpointName, string>> = {
+  saveVersion: 'VersionConflict',
+  saveSheetVersion: 'SheetVersionConflict',
+};
+
 function problemResponse(name: EndpointName, status: number): Json {
   const titles = Object.values(problems).filter((problem) => problem.status === status);
   const reference = { $ref: '#/components/schemas/Problem' };
-  const conflict = { $ref: '#/components/schemas/VersionConflict' };
-  const schema = name === 'saveVersion' && status === 409 ? { anyOf: [reference, conflict] } : reference;
+  const conflict = status === 409 ? conflicts[name] : undefined;
+  const schema = conflict ? { anyOf: [reference, { $ref: `#/components/schemas/${conflict}` }] } : reference;
   return {
     description: titles.map(({ title }) => title).join('; '),
     content: { 'application/problem+json': { schema } },
@@ -111,6 +118,7 @@ export function openApiDocument(version: string): Json {
       schemas: {
         Problem: jsonSchema(problemSchema, 'output'),
         VersionConflict: jsonSchema(problemSchema.extend(versionConflictSchema.shape), 'output'),
+        SheetVersionConflict: jsonSchema(problemSchema.extend(sheetConflictSchema.shape), 'output'),
       },
       securitySchemes: {
         session: {

@@ -118,11 +118,11 @@ function columnsOf(reach: Reach, sort: Sort): string[] {
   ];
 }
 
-/** Whether a section version behind the shown version of `s` is no longer released. */
-function staleVersions(db: Knex, workshopId: string, reach: Reach): Knex.QueryBuilder {
+/** How many section versions behind the shown version of `s` are not released: as a number, which leaves the order of the list alone. */
+function staleEnds(db: Knex, workshopId: string, reach: Reach): Knex.QueryBuilder {
   const versions = scoped(db, workshopId)
     .table('cut_sheet_versions', { as: 'v' })
-    .select(db.raw('1'))
+    .count()
     .whereRaw('?? = ??', ['v.sheet_id', 's.id'])
     .whereRaw('?? = ??', ['v.number', `s.${views[reach].number}`]);
   for (const end of ['root', 'tip']) {
@@ -150,7 +150,7 @@ function narrow(
     query.where('s.latest_status', status);
     if (reach === 'released') query.whereRaw('1 = 0');
   }
-  if (status === 'stale') query.whereExists(staleVersions(db, workshopId, reach));
+  if (status === 'stale') query.whereRaw('0 < ?', [staleEnds(db, workshopId, reach)]);
   if (search) {
     const pattern = containing(search);
     query.where((either) => either.where('s.name', 'like', pattern).orWhere('s.purpose', 'like', pattern));
