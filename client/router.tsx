@@ -1,4 +1,5 @@
 import { type QueryClient } from '@tanstack/react-query';
+import { type ComponentType } from 'react';
 import { createBrowserRouter, type LoaderFunctionArgs, redirect, type RouteObject } from 'react-router';
 import { meQuery } from './api/me.ts';
 import { ProblemError } from './api/request.ts';
@@ -7,7 +8,27 @@ import { RouteError } from './app/route-error.tsx';
 import { startOf } from './app/session.tsx';
 import { ShellSkeleton } from './app/shell-skeleton.tsx';
 
-/** The screens. Each is a chunk of its own, loaded with its route. */
+function screen(path: string, lazy: () => Promise<{ Component: ComponentType }>): RouteObject {
+  return { path, lazy, ErrorBoundary: RouteError };
+}
+
+/** What stands in the frame of a signed-in person. Each screen is a chunk of its own, loaded with its route. */
+const SCREENS: RouteObject[] = [
+  screen('/sections', () => import('./sections/library/library-page.tsx')),
+  screen('/sections/:sectionId', () => import('./sections/editor/editor-page.tsx')),
+  screen('/sections/:sectionId/versions/:number', () => import('./versions/version-page.tsx')),
+  screen('/cut-sheets', () => import('./cut-sheets/list/list-page.tsx')),
+  screen('/cut-sheets/:sheetId', () => import('./cut-sheets/sheet-page.tsx')),
+  screen('/cut-sheets/:sheetId/versions/:number', () => import('./cut-sheets/versions/version-page.tsx')),
+  screen('/cutting-list', () => import('./cutting-list/cutting-list-page.tsx')),
+  screen('/cutting-list/inspect/:sheetId/:number', () => import('./inspections/measure-page.tsx')),
+  screen('/inspections', () => import('./inspections/inspections-page.tsx')),
+  screen('/inspections/:inspectionId', () => import('./inspections/inspection-page.tsx')),
+  screen('/shop', () => import('./shop/shop-page.tsx')),
+  screen('/account', () => import('./account/account-page.tsx')),
+];
+
+/** The routes: signing in, and behind it the screens. */
 export function routesOf(client: QueryClient): RouteObject[] {
   const requireSession = async ({ request }: LoaderFunctionArgs) => {
     try {
@@ -19,7 +40,10 @@ export function routesOf(client: QueryClient): RouteObject[] {
       throw redirect(to === '/' ? '/sign-in' : `/sign-in?to=${encodeURIComponent(to)}`);
     }
   };
-  const toStart = async (args: LoaderFunctionArgs) => redirect(startOf(await requireSession(args)));
+  const deskOrList = async (args: LoaderFunctionArgs) => {
+    const start = startOf(await requireSession(args));
+    return start === '/' ? null : redirect(start);
+  };
 
   return [
     {
@@ -38,24 +62,8 @@ export function routesOf(client: QueryClient): RouteObject[] {
         {
           ErrorBoundary: RouteError,
           children: [
-            { path: '/', loader: toStart, Component: Nothing },
-            {
-              path: '/sections',
-              lazy: () => import('./sections/library/library-page.tsx'),
-              ErrorBoundary: RouteError,
-            },
-            {
-              path: '/sections/:sectionId',
-              lazy: () => import('./sections/editor/editor-page.tsx'),
-              ErrorBoundary: RouteError,
-            },
-            {
-              path: '/sections/:sectionId/versions/:number',
-              lazy: () => import('./versions/version-page.tsx'),
-              ErrorBoundary: RouteError,
-            },
-            { path: '/shop', lazy: () => import('./shop/shop-page.tsx'), ErrorBoundary: RouteError },
-            { path: '/account', lazy: () => import('./account/account-page.tsx'), ErrorBoundary: RouteError },
+            { ...screen('/', () => import('./desk/desk-page.tsx')), loader: deskOrList },
+            ...SCREENS,
             { path: '*', Component: NotFound },
           ],
         },

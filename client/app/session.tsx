@@ -15,9 +15,9 @@ export function useMay(permission: Permission): boolean {
   return may(useMe().role, permission);
 }
 
-/** Where each role's work begins. */
+/** Where each role's work begins: at the machines, or at the desk. */
 export function startOf(me: Me): string {
-  return me.role === 'technician' ? '/sections?status=released' : '/sections';
+  return me.role === 'technician' ? '/cutting-list' : '/';
 }
 
 /** The address to return to after signing in: a path of this site only, never another site's. */

@@ -17,11 +17,17 @@ export function TopBar({ onShowKeys }: { onShowKeys: () => void }) {
         <Mark />
         <span className="max-sm:sr-only">ribwright</span>
       </Link>
-      <nav aria-label="Main" className="flex items-stretch gap-4">
+      <nav
+        aria-label="Main"
+        className="flex min-w-0 flex-1 items-stretch gap-4 overflow-x-auto whitespace-nowrap [scrollbar-width:none]"
+      >
+        {me.role !== 'technician' && <Place to="/">Desk</Place>}
         <Place to="/sections">Sections</Place>
+        <Place to="/cut-sheets">Cut sheets</Place>
+        <Place to="/cutting-list">Cutting list</Place>
         {readsShop && <Place to="/shop">Shop</Place>}
       </nav>
-      <div className="ml-auto flex min-w-0 items-center gap-4">
+      <div className="ml-auto flex min-w-0 shrink-0 items-center gap-4">
         <span className="truncate text-graphite max-md:hidden">{me.workshop.name}</span>
         <PersonMenu me={me} onShowKeys={onShowKeys} />
       </div>

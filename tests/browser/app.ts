@@ -127,8 +127,7 @@ async function visit(
   };
   const first = await tab();
   if (as && session) {
-    await first.page.goto('/');
-    await first.page.waitForURL(/\/sections(\?|$)/);
+    await openLibrary(first.page, as);
   } else if (as) {
     await signIn(first.page, as);
     sessions.set(as, await context.storageState());
@@ -136,11 +135,17 @@ async function visit(
   return first;
 }
 
-/** Signs in by the sign-in screen and waits for the library. */
+/** The library as the role sees it. */
+async function openLibrary(page: Page, role: DemoRole): Promise<void> {
+  await page.goto(role === 'technician' ? '/sections?status=released' : '/sections');
+}
+
+/** Signs in by the sign-in screen, waits for the role's own start, and opens the library. */
 export async function signIn(page: Page, role: DemoRole): Promise<void> {
   await page.goto('/sign-in');
   await page.getByLabel('E-mail').fill(demoEmail(role));
   await page.getByLabel('Password', { exact: true }).fill(password);
   await page.getByRole('button', { name: 'Sign in' }).click();
-  await page.waitForURL(/\/sections(\?|$)/);
+  await page.waitForURL((url) => url.pathname === (role === 'technician' ? '/cutting-list' : '/'));
+  await openLibrary(page, role);
 }

@@ -12,6 +12,15 @@ const designer = {
   'GET /api/sections': () => json({ items: [], nextCursor: null }),
 };
 
+const emptyDesk = {
+  drafts: [],
+  recentSections: [],
+  outOfTolerance: [],
+  unplanned: [],
+  sheetsInWork: [],
+  staleSheets: [],
+};
+
 describe('routes', () => {
   it('lead to the sign-in page with the way back when nobody is signed in', async () => {
     fakeServer({ 'GET /api/me': () => problem(401) });
@@ -20,12 +29,12 @@ describe('routes', () => {
     expect(view.address()).toBe(`/sign-in?to=${encodeURIComponent('/sections?search=a%20b&sort=name')}`);
   });
 
-  it('begin at the library of a designer', async () => {
-    fakeServer(designer);
+  it('begin at the desk of a designer', async () => {
+    fakeServer({ ...designer, 'GET /api/desk': () => json(emptyDesk) });
     const view = openAt('/');
-    await screen.findByRole('heading', { name: 'Sections' });
-    expect(view.address()).toBe('/sections');
-    expect(screen.getByRole('link', { name: 'Sections' }).getAttribute('aria-current')).toBe('page');
+    await screen.findByText('Every measured part is within tolerance or decided.');
+    expect(view.address()).toBe('/');
+    expect(screen.getByRole('link', { name: 'Desk' }).getAttribute('aria-current')).toBe('page');
   });
 
   it('say that nothing is at an unknown address, inside the shell', async () => {

@@ -15,7 +15,7 @@ describe('returnPath', () => {
   });
 });
 
-it('starts technicians at what is released, everybody else at the library', () => {
-  expect(startOf(personOf('technician'))).toBe('/sections?status=released');
-  expect(startOf(personOf('designer'))).toBe('/sections');
+it('starts technicians at the cutting list, everybody else at the desk', () => {
+  expect(startOf(personOf('technician'))).toBe('/cutting-list');
+  expect(startOf(personOf('designer'))).toBe('/');
 });

@@ -12,6 +12,7 @@ import { personOf } from './samples.ts';
 import '#client/account/account-page.tsx';
 import '#client/account/sign-in-page.tsx';
 import '#client/app/shell.tsx';
+import '#client/desk/desk-page.tsx';
 import '#client/sections/library/library-page.tsx';
 import '#client/sections/library/new-section-dialog.tsx';
 
