@@ -10,8 +10,12 @@ import { versionConflictSchema } from './contracts/sections.ts';
 type Json = Record<string, unknown>;
 
 function jsonSchema(schema: z.ZodType, io: 'input' | 'output'): Json {
-  const { $schema: _dialect, ...rest } = z.toJSONSchema(schema, { io, unrepresentable: 'any' }) as Json;
-  return rest;
+  const whole = z.toJSONSchema(schema, { io, unrepresentable: 'any' }) as Json;
+  const { $schema: _dialect, $defs: _recursive, ...rest } = whole;
+  // Only “any JSON value” refers to itself, which an empty schema says as well.
+  return JSON.parse(JSON.stringify(rest), (_, value: unknown) =>
+    typeof value === 'object' && value !== null && '$ref' in value ? {} : value,
+  ) as Json;
 }
 
 /** The members of an object schema as parameters of a request. */
