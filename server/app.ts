@@ -13,6 +13,8 @@ import { signInConfig } from './account/sign-in.ts';
 import { type Config } from './config.ts';
 import { threadedWorks } from './cut-sheets/files/threaded-works.ts';
 import { cutSheetHandlers } from './cut-sheets/routes.ts';
+import { cuttingListHandlers } from './cutting-list/routes.ts';
+import { deskHandlers } from './desk/routes.ts';
 import { exportHandlers } from './exports/routes.ts';
 import { clientFiles } from './http/client-files.ts';
 import { healthHandlers } from './http/health.ts';
@@ -21,6 +23,7 @@ import { problemHandler } from './http/problem.ts';
 import { apiRoutes } from './http/register.ts';
 import { sameSiteOnly } from './http/same-site.ts';
 import { believeProxiesOnlyIf, securityHeaders } from './http/security.ts';
+import { inspectionHandlers } from './inspections/routes.ts';
 import { openApiDocument } from './openapi.ts';
 import { Refusal } from './refusal.ts';
 import { sectionHandlers } from './sections/routes.ts';
@@ -52,6 +55,9 @@ export function createApp({ config, knex, logger, clientFolder }: AppDependencie
     ...sectionHandlers(knex),
     ...exportHandlers(knex),
     ...shopHandlers(knex),
+    ...cuttingListHandlers(knex),
+    ...inspectionHandlers(knex),
+    ...deskHandlers(knex),
     ...cutSheetHandlers({ knex, works: threadedWorks(), publicUrl: config.publicUrl }),
   };
   const document = JSON.stringify(openApiDocument(version));

@@ -1,5 +1,6 @@
 import { accountEndpoints } from './account-endpoints.ts';
 import { cutSheetEndpoints } from './cut-sheet-endpoints.ts';
+import { cuttingListEndpoints } from './cutting-list-endpoints.ts';
 import { type Endpoint } from './endpoint.ts';
 import { sectionEndpoints } from './section-endpoints.ts';
 import { shopEndpoints } from './shop-endpoints.ts';
@@ -13,5 +14,6 @@ export const endpoints = {
   ...sectionEndpoints,
   ...shopEndpoints,
   ...cutSheetEndpoints,
+  ...cuttingListEndpoints,
 } as const satisfies Record<string, Endpoint>;
 export type EndpointName = keyof typeof endpoints;

@@ -7,6 +7,8 @@ export interface Input {
   readonly params?: Readonly<Record<string, string | number>>;
   readonly query?: Readonly<Record<string, string | number | boolean | undefined>>;
   readonly body?: unknown;
+  /** Sent as the one file of a form. */
+  readonly file?: Uint8Array | undefined;
   readonly headers?: Readonly<Record<string, string>>;
 }
 
@@ -30,6 +32,16 @@ function pathOf(name: EndpointName, { params = {}, query = {} }: Input = {}): st
   const given = Object.entries(query).filter(([, value]) => value !== undefined);
   const search = new URLSearchParams(given.map(([key, value]) => [key, String(value)]));
   return given.length > 0 ? `${path}?${search}` : path;
+}
+
+function bodyOf({ body, file, headers }: Input): RequestInit {
+  if (file) {
+    const form = new FormData();
+    form.append('file', new Blob([new Uint8Array(file)]), 'photograph.jpg');
+    return { body: form, ...(headers && { headers }) };
+  }
+  if (body === undefined) return { ...(headers && { headers }) };
+  return { body: JSON.stringify(body), headers: { 'content-type': 'application/json', ...headers } };
 }
 
 /** Somebody at a browser: keeps cookies, and checks every answer against its contract. */
@@ -79,11 +91,7 @@ export class Client {
     const endpoint: Endpoint = endpoints[name];
     const response = await this.fetch(pathOf(name, input), {
       method: endpoint.method,
-      headers: {
-        ...(input.body === undefined ? {} : { 'content-type': 'application/json' }),
-        ...input.headers,
-      },
-      ...(input.body === undefined ? {} : { body: JSON.stringify(input.body) }),
+      ...bodyOf(input),
     });
     const text = await response.text();
     return {

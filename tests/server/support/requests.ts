@@ -9,6 +9,7 @@ import { putKerf } from '#server/shop/kerfs/store.ts';
 import { createItem, machines, materials } from '#server/shop/store.ts';
 import { type TestApi, type TestWorkshop } from './api.ts';
 import { type Input } from './client.ts';
+import { makeInspection, photo } from './floor.ts';
 import { cst, naca4 } from './shapes.ts';
 import { makeSheet, type PlanParts, samplePlan } from './sheets.ts';
 
@@ -31,6 +32,8 @@ export async function makeSection(
 /** The things that requests name. */
 export interface Samples extends PlanParts {
   readonly sheetId: string;
+  readonly inspectionId: string;
+  readonly photoId: string;
 }
 
 /** A four-axis machine and a foam with a kerf that nobody measured, each of a name that only it has. */
@@ -47,7 +50,8 @@ export async function makeShop(api: TestApi, workshop: TestWorkshop): Promise<Om
 
 export async function makeSamples(api: TestApi, workshop: TestWorkshop): Promise<Samples> {
   const parts = { sectionId: await makeSection(api, workshop), ...(await makeShop(api, workshop)) };
-  return { ...parts, sheetId: await makeSheet(api, workshop, parts) };
+  const made = { ...parts, sheetId: await makeSheet(api, workshop, parts) };
+  return { ...made, ...(await makeInspection(api, workshop, made)) };
 }
 
 const of = ({ sectionId }: Samples, number?: number) => ({
@@ -57,6 +61,8 @@ const of = ({ sectionId }: Samples, number?: number) => ({
 const ofSheet = ({ sheetId }: Samples, number?: number) => ({
   params: number === undefined ? { sheetId } : { sheetId, number },
 });
+
+const past = '2026-02-03T10:00:00.000Z';
 
 /** A request that is right in itself for every endpoint, on what {@link makeSamples} makes. */
 export const requests: Readonly<Record<EndpointName, (samples: Samples) => Input>> = {
@@ -114,4 +120,29 @@ export const requests: Readonly<Record<EndpointName, (samples: Samples) => Input
   listSheetFiles: (one) => ofSheet(one, 1),
   sheetFile: ({ sheetId }) => ({ params: { sheetId, number: 1, name: 'root.dxf' } }),
   listSheetDownloads: (one) => ofSheet(one, 1),
+  cuttingList: () => ({}),
+  checkFile: () => ({ query: { code: '7k3m q9xd' } }),
+  listCutLogs: ({ sheetId }) => ({ query: { sheetId } }),
+  logCut: ({ sheetId, machineId }) => ({
+    body: { sheetId, versionNumber: 1, part: 'core', action: 'started', machineId, at: past, key: uuid() },
+  }),
+  listInspections: ({ sheetId }) => ({ query: { sheetId, outcome: 'unanswered' } }),
+  addInspection: ({ sheetId }) => ({
+    body: {
+      sheetId,
+      versionNumber: 1,
+      measurements: [{ end: 'tip', station: 0.5, measuredMm: 14.2 }],
+      at: past,
+      key: uuid(),
+    },
+  }),
+  getInspection: ({ inspectionId }) => ({ params: { inspectionId } }),
+  answerInspection: ({ inspectionId }) => ({
+    params: { inspectionId },
+    body: { decision: 'rejected', note: 'Cut it again.' },
+  }),
+  addPhoto: ({ inspectionId }) => ({ params: { inspectionId }, file: photo }),
+  photo: ({ photoId }) => ({ params: { photoId } }),
+  inspectionStatistics: () => ({}),
+  desk: () => ({}),
 };
