@@ -2,7 +2,6 @@ import { expect, test } from 'vitest';
 import { expectedCores } from '#geometry/cutting/expected-core.ts';
 import { type WirePlan } from '#geometry/cutting/plan.ts';
 import { planCore } from '#geometry/cutting/planner.ts';
-import { readProgram } from '#geometry/cutting/read-program.ts';
 import { simulate } from '#geometry/cutting/simulate.ts';
 import { PLAN, planWith } from './plans.ts';
 
@@ -78,34 +77,4 @@ test('many breaches of a kind are counted, not listed', () => {
   const found = simulate(TEXT, slow, EXPECTED).findings.filter(({ code }) => code === 'wire-too-fast');
   expect(found).toHaveLength(13);
   expect(found.at(-1)!.message).toMatch(/^\d+ further lines/);
-});
-
-test.each([
-  ['inches', 'G20 G90\nG1 X1 F10', 'unclear-move', 2],
-  ['increments', 'G21 G91\nG1 X1 F10', 'unclear-move', 2],
-  ['units never stated', 'G1 X1 F10', 'unclear-move', 1],
-  ['arcs', 'G21 G90\nG2 X1 Y1 F10', 'unsupported-code', 2],
-  ['a shifted origin', 'G21 G90\nG92 X0', 'unsupported-code', 2],
-  ['a letter that is no axis', 'G21 G90\nG1 Q1 F10', 'unclear-move', 2],
-  ['no F under G93', 'G21 G90\nG93\nG1 X1', 'unclear-move', 3],
-  ['no feed', 'G21 G90\nG1 X1', 'unclear-move', 2],
-  ['no motion mode', 'G21 G90\nX1', 'unclear-move', 2],
-  ['rubbish', 'G21 G90\nhello?', 'unreadable-line', 2],
-])('a program with %s is a finding with its line', (_, text, code, line) => {
-  const { findings } = readProgram(text, PLAN.machine);
-  expect(findings).toEqual([expect.objectContaining({ severity: 'error', code, at: { line } })]);
-});
-
-test('the reader keeps modes, skips comments and blanks, and adds waits', () => {
-  const text = 'g21 g90 (mm)\n\nG94 ; per minute\nG1 X60 Y0 U60 V0 F60\nX60 Y60 U60 V60\nG4 P2.5\nG0 X0\n';
-  const { moves, totalSeconds, findings } = readProgram(text, PLAN.machine);
-  expect(findings).toEqual([]);
-  expect(moves.map(({ line, leftX, leftY }) => [line, leftX, leftY])).toEqual([
-    [0, 0, 0],
-    [4, 60, 0],
-    [5, 60, 60],
-    [7, 0, 60],
-  ]);
-  // All axes: √2 · 60 mm at 60 mm/min twice, 2.5 s, and 60 mm at 1200 mm/min.
-  expect(totalSeconds).toBeCloseTo(2 * 60 * Math.SQRT2 + 2.5 + 3, 9);
 });
