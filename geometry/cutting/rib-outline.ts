@@ -109,7 +109,7 @@ function clipped({ x, y }: Polyline, edge: number, side: 1 | -1): Polyline {
 }
 
 /** The outline without points that follow one another at the same place. */
-export function withoutRepeats({ x, y }: Polyline): Polyline {
+export function withoutDoubles({ x, y }: Polyline): Polyline {
   const kept = Array.from(x.keys()).filter((i) => {
     const k = (i + x.length - 1) % x.length;
     return Math.hypot(at(x, i) - at(x, k), at(y, i) - at(y, k)) > 1e-6;

@@ -9,7 +9,7 @@ import { faceAt } from './panel.ts';
 import { offsetInStep } from './offset.ts';
 import { type Plan, type RibsPlan } from './plan.ts';
 import { strokeText, strokeWidth } from './strokes.ts';
-import { type Change, notchOf, splitByStrips, tabOf, withChanges, withoutRepeats } from './rib-outline.ts';
+import { type Change, notchOf, splitByStrips, tabOf, withChanges, withoutDoubles } from './rib-outline.ts';
 
 /** One rib, in the panel's frame at its station: chord of the root level, so that all ribs stand alike on a flat board. */
 export interface Rib {
@@ -96,7 +96,7 @@ function ribStations(plan: Plan, rules: RibsPlan, findings: Finding[]): number[]
 
 function bodyAt(plan: Plan, core: Core, spanMm: number): Polyline | null {
   const body = offsetInStep(faceAt(core.panel, spanMm / plan.panel.spanMm), 0);
-  return body && withoutRepeats(body);
+  return body && withoutDoubles(body);
 }
 
 interface Setting {

@@ -17,16 +17,17 @@ import { readDxf } from '#geometry/imports/dxf-entities.ts';
 import { type FoundChains } from '#geometry/imports/imported.ts';
 import { orderLoop } from '#geometry/imports/section-loop.ts';
 import { MARSH } from '#tests/geometry/formats/identity-example.ts';
+import { cuttingCalls, cuttingCallsWithoutObjects } from '#tests/geometry/cutting/frozen-calls.ts';
 import { pageCalls, pageCallsWithoutObjects } from '#tests/geometry/pages/frozen-calls.ts';
 import { FREE_FORM, naca4 } from '#tests/geometry/shapes/samples.ts';
 
 type AnyFunction = (...args: readonly unknown[]) => unknown;
 
 const modules: Readonly<Record<string, Readonly<Record<string, unknown>>>> = import.meta.glob(
-  ['../../geometry/**/*.ts', '!../../geometry/cutting/**'],
+  '../../geometry/**/*.ts',
   { eager: true },
 );
-/** Every function that geometry/ (without cutting/, which is in work) gives out, by its name. */
+/** Every function that geometry/ gives out, by its name. */
 const functions = new Map(
   Object.values(modules)
     .flatMap((module) => Object.entries(module))
@@ -226,6 +227,7 @@ const calls: Readonly<Record<string, () => readonly unknown[]>> = {
   exportFile: () => ['dxf', shape(), structuredClone(MARSH), dxfOptionsSchema.parse({ chordMm: 220 })],
   roundContour: () => [contour(), 4],
   withoutRepeats: () => [written()],
+  ...cuttingCalls,
   ...pageCalls,
 };
 
@@ -258,6 +260,7 @@ const withoutObjects = [
   'fixed',
   'roundTo',
   'writeTables',
+  ...cuttingCallsWithoutObjects,
   ...pageCallsWithoutObjects,
 ];
 

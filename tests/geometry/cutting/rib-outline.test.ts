@@ -1,6 +1,6 @@
 import { expect, test } from 'vitest';
 import { areaOf, boxOf, polylineOf } from '#geometry/cutting/arrays.ts';
-import { splitByStrips, tabOf, withChanges, withoutRepeats } from '#geometry/cutting/rib-outline.ts';
+import { splitByStrips, tabOf, withChanges, withoutDoubles } from '#geometry/cutting/rib-outline.ts';
 import { crossingsByHand } from './measuring.ts';
 
 /** A lens from the trailing edge at (100, 0) over the top to the nose and back below. */
@@ -55,5 +55,5 @@ test('points that stand twice are dropped, the last on the first as well', () =>
     { x: 0, y: 1 },
     { x: 0, y: 0 },
   ]);
-  expect(withoutRepeats(doubled).x).toHaveLength(3);
+  expect(withoutDoubles(doubled).x).toHaveLength(3);
 });
