@@ -50,7 +50,7 @@ function refusalsOf(endpoint: Endpoint): number[] {
   if (endpoint.params) statuses.push(404);
   if (endpoint.query) statuses.push(422);
   if (endpoint.body || endpoint.upload) statuses.push(400, 409, 413, 415, 422);
-  if (endpoint.file) statuses.push(409);
+  if (endpoint.file) statuses.push(409, 422);
   return [...new Set(statuses)].sort((a, b) => a - b);
 }
 

@@ -99,4 +99,17 @@ export const shopEndpoints = {
     body: kerfInputSchema,
     reply: kerfSchema,
   },
+  kerfStripFile: {
+    method: 'GET',
+    path: '/api/machines/:machineId/kerfs/:materialId/strip/:name',
+    summary: 'Test strip for the kerf: strip.nc for a wire machine, strip.dxf for a laser or router',
+    permission: 'files.download',
+    params: z.object({
+      machineId: idSchema,
+      materialId: idSchema,
+      name: z.enum(['strip.nc', 'strip.dxf']),
+    }),
+    reply: z.string(),
+    file: 'application/octet-stream',
+  },
 } as const satisfies Record<string, Endpoint>;

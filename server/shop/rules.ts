@@ -36,6 +36,16 @@ export function nameTaken(name: string): Refusal {
   return refuseField('name', `“${name}” is there already; it may stand in the archive.`);
 }
 
+/** @throws Refusal `archived` naming what is put away: nobody cuts with it or from it */
+export function checkInUse(
+  ...things: readonly { readonly name: string; readonly archived: boolean }[]
+): void {
+  const away = things.find(({ archived }) => archived);
+  if (away) {
+    throw new Refusal('archived', { detail: `“${away.name}” is in the archive; take it back first.` });
+  }
+}
+
 export interface KerfPair {
   readonly machineKind: MachineKind;
   readonly materialKind: MaterialKind;

@@ -4,7 +4,7 @@ import { joinScoped, scoped } from '#server/database/scoped.ts';
 import { inTransaction } from '#server/database/transaction.ts';
 import { Refusal } from '#server/refusal.ts';
 import { type Author } from '#server/sections/rules.ts';
-import { checkKerf, checkRevision } from '../rules.ts';
+import { checkInUse, checkKerf, checkRevision } from '../rules.ts';
 import { findItem, machines, materials } from '../store.ts';
 
 /** Of which machine in which material. */
@@ -56,7 +56,8 @@ export async function listKerfs(db: Knex, workshopId: string): Promise<{ items: 
   return { items: rows.map(kerfOf), nextCursor: null };
 }
 
-async function findKerf(db: Knex, workshopId: string, place: KerfPlace): Promise<Kerf | null> {
+/** The kerf of a pair; null when there is none. */
+export async function findKerf(db: Knex, workshopId: string, place: KerfPlace): Promise<Kerf | null> {
   const row: Row | undefined = await kerfRows(db, workshopId)
     .where({ 'k.machine_id': place.machineId, 'k.material_id': place.materialId })
     .first();
@@ -64,8 +65,8 @@ async function findKerf(db: Knex, workshopId: string, place: KerfPlace): Promise
 }
 
 /**
- * Sets the kerf of a machine in a material, the first or in the place of the one before.
- * @throws Refusal `not-found`; `revision-conflict` when another set it in between; `invalid` with the field at fault
+ * Sets the kerf of a machine in a material, the first or in the place of the one before, which goes into the history.
+ * @throws Refusal `not-found`; `archived` when machine or material is put away; `revision-conflict` when another set it in between; `invalid` with the field at fault
  */
 export async function putKerf(db: Knex, author: Author, place: KerfPlace, input: KerfInput): Promise<Kerf> {
   const { workshopId } = author;
@@ -75,6 +76,7 @@ export async function putKerf(db: Knex, author: Author, place: KerfPlace, input:
     await scope.table('machines').where({ id: place.machineId }).forUpdate().first('id');
     const machine = await findItem(transaction, workshopId, machines, place.machineId);
     const material = await findItem(transaction, workshopId, materials, place.materialId);
+    checkInUse(machine, material);
     const keys = {
       machine_id: machine.id,
       machine_kind: machine.settings.kind,
@@ -85,16 +87,34 @@ export async function putKerf(db: Knex, author: Author, place: KerfPlace, input:
     const before = await findKerf(transaction, workshopId, place);
     checkRevision(input.revision, before);
     const columns = columnsOf(author, input);
-    if (before)
+    if (before) {
+      await keepEarlier(transaction, author, before);
+      const revision = before.revision + 1;
       await scope
         .table('kerfs')
         .where(keys)
-        .update({ ...columns, revision: before.revision + 1 });
-    else await scope.insert('kerfs', { ...keys, ...columns });
+        .update({ ...columns, revision });
+    } else await scope.insert('kerfs', { ...keys, ...columns });
     return findKerf(transaction, workshopId, place);
   });
   if (!written) throw new Refusal('not-found');
   return written;
+}
+
+/** What the kerf was, who had set it and when, and who replaced it. */
+async function keepEarlier(db: Knex, author: Author, before: Kerf): Promise<void> {
+  await scoped(db, author.workshopId).insert('kerf_history', {
+    machine_id: before.machineId,
+    material_id: before.materialId,
+    revision: before.revision,
+    kerf_mm: before.kerfMm,
+    speed_mm_min: before.speedMmMin,
+    measured_on: before.measuredOn,
+    person_id: before.by.id,
+    set_at: new Date(before.updatedAt),
+    replaced_by: author.personId,
+    replaced_at: author.at,
+  });
 }
 
 function columnsOf(author: Author, input: KerfInput) {

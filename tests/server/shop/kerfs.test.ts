@@ -55,6 +55,43 @@ describe('kerfs', () => {
     });
   });
 
+  it('leave what they were in the history, with who had set it and who replaced it', async () => {
+    const params = await place();
+    await owner.call('putKerf', { params, body: measured });
+    await builder.call('putKerf', { params, body: { ...measured, kerfMm: 0.9, revision: 2 } });
+    await builder.call('putKerf', { params, body: { ...measured, kerfMm: 3, revision: 1 } });
+    const history = () => api.knex('kerf_history').where({ machine_id: params.machineId });
+    const rows: unknown[] = await history()
+      .orderBy('revision')
+      .select(
+        'revision',
+        'kerf_mm',
+        'person_id',
+        'replaced_by',
+        api.knex.raw("date_format(measured_on, '%Y-%m-%d') as measured_on"),
+      );
+    const { builder: byBuilder, owner: byOwner } = marsh.people;
+    expect(rows).toEqual([
+      { revision: 1, kerf_mm: 0.8, person_id: byBuilder, replaced_by: byOwner, measured_on: null },
+      { revision: 2, kerf_mm: 0.94, person_id: byOwner, replaced_by: byBuilder, measured_on: '2026-02-03' },
+    ]);
+    await expect(history().update({ kerf_mm: 1 })).rejects.toThrow(/neither changed nor deleted/);
+    await expect(history().delete()).rejects.toThrow(/neither changed nor deleted/);
+  });
+
+  it.each(['changeMachine', 'changeMaterial'] as const)(
+    'are not set once %s has put it away',
+    async (name) => {
+      const params = await place();
+      await builder.call(name, { params, body: { revision: 1, archived: true } });
+      const away = await builder.call('putKerf', { params, body: measured });
+      expect([away.status, away.problem.code]).toEqual([409, 'archived']);
+      expect(await rowOf(params.machineId)).toMatchObject([{ kerf_mm: 0.8, revision: 1 }]);
+      await builder.call(name, { params, body: { revision: 2, archived: false } });
+      expect((await builder.call('putKerf', { params, body: measured })).status).toBe(200);
+    },
+  );
+
   it.each([1, 3, null])('are not overwritten on revision %s when it is 2', async (revision) => {
     const params = await place();
     const now = await builder.call('putKerf', { params, body: measured });

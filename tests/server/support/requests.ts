@@ -102,6 +102,7 @@ export const requests: Readonly<Record<EndpointName, (samples: Samples) => Input
     params: { machineId, materialId },
     body: { kerfMm: 0.85, speedMmMin: 200, measuredOn: '2026-02-01', revision: 1 },
   }),
+  kerfStripFile: ({ machineId, materialId }) => ({ params: { machineId, materialId, name: 'strip.nc' } }),
   listCutSheets: () => ({ query: { search: 'marsh' } }),
   createCutSheet: (one) => ({ body: { name: 'Fen panel', plan: samplePlan(one), key: uuid() } }),
   getCutSheet: (one) => ofSheet(one),
