@@ -1,11 +1,11 @@
-import { useQuery } from '@tanstack/react-query';
+import { keepPreviousData, useQuery } from '@tanstack/react-query';
 import { lazy, Suspense } from 'react';
 import { Navigate, useParams } from 'react-router';
 import { type CutSheet } from '#server/contracts/cut-sheets.ts';
 import { cutSheetQuery, sheetDraftQuery, sheetVersionQuery } from '#client/api/cut-sheets.ts';
 import { useMay } from '#client/app/session.tsx';
 import { ErrorState } from '#client/ui/error-state.tsx';
-import { SheetSkeleton } from './sheet-skeleton.tsx';
+import { PlannerSkeleton } from './planner/planner-skeleton.tsx';
 import { sheetVersionPath } from './paths.ts';
 
 const Planner = lazy(async () => ({ default: (await import('./planner/planner.tsx')).Planner }));
@@ -29,18 +29,23 @@ function SheetScreen({ sheetId }: { readonly sheetId: string }) {
       </div>
     );
   }
-  return <SheetSkeleton />;
+  return <PlannerSkeleton />;
 }
 
 /** Fetches the person's unsaved plan once; what happens to it afterwards is the planner's own. */
 function OpenedSheet({ sheet }: { readonly sheet: CutSheet }) {
   const draft = useQuery({ ...sheetDraftQuery(sheet.id), staleTime: Infinity, gcTime: 0 });
   const number = draft.data?.basedOn ?? sheet.latest.number;
-  const version = useQuery({ ...sheetVersionQuery(sheet.id, number), enabled: draft.data !== undefined });
+  // While another version is looked up, as after a save, the planner stays.
+  const version = useQuery({
+    ...sheetVersionQuery(sheet.id, number),
+    enabled: draft.data !== undefined,
+    placeholderData: keepPreviousData,
+  });
   const error = draft.error ?? version.error;
   if (draft.data !== undefined && version.data) {
     return (
-      <Suspense fallback={<SheetSkeleton />}>
+      <Suspense fallback={<PlannerSkeleton />}>
         <Planner sheet={sheet} version={version.data} draft={draft.data} mayWrite={!sheet.archived} />
       </Suspense>
     );
@@ -53,5 +58,5 @@ function OpenedSheet({ sheet }: { readonly sheet: CutSheet }) {
       </div>
     );
   }
-  return <SheetSkeleton />;
+  return <PlannerSkeleton />;
 }

@@ -6,9 +6,8 @@ export function Cautions({ machine }: { machine: MachineKind | null }) {
   if (machine !== 'wire' && machine !== 'bow') return null;
   return (
     <Caution className="print:hidden">
-      Hot wire burns, and hot foam gives off fumes: ventilate, keep an extinguisher at hand.
-      {machine === 'wire' &&
-        ' Run the program once with a cold wire, with the emergency stop in reach; check units and origin.'}
+      Hot wire burns and its fumes harm: ventilate, keep an extinguisher at hand.
+      {machine === 'wire' && ' First run it with a cold wire, the emergency stop in reach.'}
     </Caution>
   );
 }

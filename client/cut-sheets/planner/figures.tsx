@@ -36,15 +36,16 @@ export function Figures({ model, stale }: { model: PlanModel | null; stale: bool
   );
 }
 
+/** Wire speed at the faster end; melt ratio of the slower end; foam left around the cut; the simulated program against the plan. */
 const NAMES = {
-  volume: 'Core, volume',
-  mass: 'Core, mass',
+  volume: 'Core volume',
+  mass: 'Core mass',
   time: 'Cut time',
-  speed: 'Wire, faster end',
-  melt: 'Faster to slower end',
-  root: 'Foam left at the root',
-  tip: 'Foam left at the tip',
-  check: 'Program off the plan',
+  speed: 'Wire speed',
+  melt: 'Melt ratio',
+  root: 'Left at root',
+  tip: 'Left at tip',
+  check: 'Off the plan',
   points: 'Points in step',
 } as const;
 const EMPTY: readonly Row[] = Object.values(NAMES).map((name) => [name, '–'] as const);
@@ -56,7 +57,7 @@ function rowsOf({ foam, cut, fit, ribs, root }: PlanModel, units: Units): Row[] 
     [NAMES.mass, foam ? mass(foam.coreMassG, units) : '–'],
     [NAMES.time, cut ? duration(cut.totalSeconds) : '–'],
     [NAMES.speed, cut ? speed(fastest(cut), units) : '–'],
-    [NAMES.melt, cut ? `${cut.melt.ratio.toFixed(2)}, ${cut.melt.slowerEnd} slower` : '–'],
+    [NAMES.melt, cut ? `${cut.melt.ratio.toFixed(2)} at the ${cut.melt.slowerEnd}` : '–'],
     [NAMES.root, fit ? length(fit.marginMm.root) : '–'],
     [NAMES.tip, fit ? length(fit.marginMm.tip) : '–'],
     [NAMES.check, cut ? length(cut.largestDeviationMm, 3) : '–'],
@@ -64,7 +65,7 @@ function rowsOf({ foam, cut, fit, ribs, root }: PlanModel, units: Units): Row[] 
     ...(ribs
       ? [
           ['Ribs', `${ribs.stationsMm.length} on ${sheets(ribs.layout.sheets)}`] as const,
-          ['Yield of the sheets', formatPercent(ribs.layout.yield, 0)] as const,
+          ['Sheet yield', formatPercent(ribs.layout.yield, 0)] as const,
         ]
       : []),
   ];
@@ -74,13 +75,17 @@ function sheets(count: number): string {
   return count === 1 ? '1 sheet' : `${count} sheets`;
 }
 
+const SHORTEST_MM = 0.2;
+
 /** The highest wire speed in the plane of either face while it cuts, mm/min. */
 function fastest({ kinds, left, right, arrives, leaves }: CutModel): number {
   let highest = 0;
   for (let i = 1; i < kinds.length; i++) {
     const seconds = at(arrives, i) - at(leaves, i - 1);
-    if (kinds[i] === 'travel' || seconds <= 0) continue;
-    highest = Math.max(highest, (60 * Math.max(stepLength(left, i), stepLength(right, i))) / seconds);
+    const way = Math.max(stepLength(left, i), stepLength(right, i));
+    // The rounding of the program's coordinates tells on shorter moves.
+    if (kinds[i] === 'travel' || seconds <= 0 || way < SHORTEST_MM) continue;
+    highest = Math.max(highest, (60 * way) / seconds);
   }
   return highest;
 }

@@ -20,7 +20,7 @@ export function PlannerFrame({ title, header, form, stage, side, children }: Pla
     <div className="flex flex-1 flex-col xl:h-[calc(100dvh-2.75rem)] xl:min-h-180 xl:flex-none print:block print:h-auto print:min-h-0">
       <title>{`${title} · Ribwright`}</title>
       <div className="border-b border-rule px-4 py-2 print:hidden">{header}</div>
-      <div className="grid min-h-0 flex-1 lg:grid-cols-[20rem_minmax(0,1fr)] xl:grid-cols-[19.5rem_minmax(0,1fr)_17.5rem] xl:grid-rows-[minmax(0,1fr)] print:hidden">
+      <div className="grid min-h-0 flex-1 lg:grid-cols-[20rem_minmax(0,1fr)] lg:grid-rows-[auto_1fr] xl:grid-cols-[19.5rem_minmax(0,1fr)_17.5rem] xl:grid-rows-[minmax(0,1fr)] print:hidden">
         <div className="flex min-h-0 min-w-0 flex-col gap-2 p-3 lg:col-start-2 lg:row-start-1">{stage}</div>
         <aside
           aria-label="Findings and figures"

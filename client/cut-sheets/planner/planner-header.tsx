@@ -24,7 +24,7 @@ export function PlannerHeader(props: PlannerHeaderProps) {
   const { sheetId, name, basedOn, dirty, nextNumber, keeper, mayWrite } = props;
   return (
     <header className="flex flex-wrap items-center justify-between gap-x-4 gap-y-2">
-      <div className="min-w-0 flex-1 basis-72">
+      <div className="min-w-0 flex-1 basis-72 xl:flex xl:items-baseline xl:gap-4">
         <h1 className="truncate text-xl font-extrabold" title={name}>
           {name}
         </h1>

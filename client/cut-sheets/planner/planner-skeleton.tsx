@@ -10,7 +10,7 @@ export function PlannerSkeleton() {
         <div
           role="status"
           aria-label="Loading the cut sheet"
-          className="flex h-12 items-center justify-between gap-4"
+          className="flex h-12 items-center xl:h-8 justify-between gap-4"
         >
           <Skeleton className="h-6 w-64" />
           <Skeleton className="hidden h-8 w-96 sm:block" />
@@ -27,7 +27,7 @@ export function PlannerSkeleton() {
         <>
           <Skeleton className="h-7 w-full pointer-coarse:h-11" />
           <div data-place="sheet" className={SHEET_PLACE} />
-          <Skeleton className="h-21 w-full" />
+          <Skeleton className="h-24 w-full" />
         </>
       }
       side={

@@ -74,7 +74,7 @@ function OpenedPlanner({ sheet, base, opened, mirror, mayWrite }: OpenedPlannerP
         <>
           <FindingsList
             findings={findings}
-            pending={worked.output === null && planForm.read.plan !== null}
+            pending={worked.output === null}
             stale={worked.stale}
             selected={selection.selected}
             onSelect={selection.select}

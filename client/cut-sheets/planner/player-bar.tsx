@@ -21,7 +21,7 @@ export function PlayerBar({ cut, control }: PlayerBarProps) {
       {cut && control.position ? (
         <Run cut={cut} control={control} position={control.position} units={units} />
       ) : (
-        <p className="flex min-h-21 items-center text-graphite">
+        <p className="flex min-h-14 items-center text-graphite">
           No wire runs: choose a foam, a block and a wire machine that holds the panel between its towers.
         </p>
       )}
@@ -41,12 +41,12 @@ function Run({ cut, control, position, units }: RunProps) {
   return (
     <>
       <div className="flex items-center gap-3">
-        <Button onClick={toggle} title="Space" className="w-36">
+        <Button onClick={toggle} title="Space" className="w-34">
           <Glyph playing={player.playing} />
           {calm ? 'next part' : player.playing ? 'stop the wire' : 'run the wire'}
         </Button>
         <TimeSlider cut={cut} control={control} position={position} />
-        <span className="w-44 shrink-0 text-right max-sm:hidden">
+        <span className="w-50 shrink-0 text-right whitespace-nowrap max-sm:hidden">
           {`${duration(player.seconds)} of ${duration(player.totalSeconds)}`}
         </span>
         {!calm && (
@@ -115,6 +115,7 @@ function ProgramLine({ cut, position, units }: Pick<RunProps, 'cut' | 'position'
   return (
     <div className="grid grid-cols-[minmax(0,1fr)_auto] items-baseline gap-x-4 text-xs max-sm:grid-cols-1">
       <p className="truncate">
+        {`${waits ? `${part}, the wire warms up` : part} `}
         <span className="text-graphite">{`line ${line} of ${cut.lines.length} `}</span>
         <code className="font-semibold">{text}</code>
       </p>
@@ -124,7 +125,6 @@ function ProgramLine({ cut, position, units }: Pick<RunProps, 'cut' | 'position'
         <span className="text-graphite"> right </span>
         {feedText(rightFeed, units)}
       </p>
-      <p className="truncate text-graphite">{waits ? `${part}: the wire stands and warms up` : part}</p>
     </div>
   );
 }

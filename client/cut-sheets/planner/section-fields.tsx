@@ -34,8 +34,10 @@ function EndFields({ end, source, sections }: EndFieldsProps) {
   const isLoose = source.status !== null && source.status !== 'released';
   return (
     <div>
-      <div className="grid grid-cols-[2.5rem_minmax(0,1fr)_6.75rem] items-center gap-x-1.5">
-        <span aria-hidden="true">{word}</span>
+      <div className="grid grid-cols-[3rem_minmax(0,1fr)] items-center gap-x-1.5 gap-y-1">
+        <span aria-hidden="true" className="row-span-2 self-start pt-1.5">
+          {word}
+        </span>
         <SelectField
           label={`Section at the ${end}`}
           hideLabel
@@ -56,7 +58,7 @@ function EndFields({ end, source, sections }: EndFieldsProps) {
         />
       </div>
       {isLoose && (
-        <p className="mt-1 flex items-baseline gap-1.5 text-xs text-amber">
+        <p className="mt-1 ml-13.5 flex items-baseline gap-1.5 text-xs text-amber">
           <StatusGlyph status={source.status ?? 'draft'} />
           {`This version is ${source.status === 'draft' ? 'not released' : source.status}: the sheet cannot be released from it.`}
         </p>
@@ -92,7 +94,7 @@ function VersionField({ source, label, name, disabled, onChange }: VersionFieldP
   const versions = query.data?.pages.flatMap(({ items }) => items) ?? [];
   const option = (number: number, of: VersionStatus | null) => ({
     value: String(number),
-    label: of === null ? `v${number}` : `v${number} ${of}`,
+    label: of === null ? `version ${number}` : `version ${number}, ${of}`,
   });
   const known = versions.some(({ number }) => number === versionNumber);
   return (

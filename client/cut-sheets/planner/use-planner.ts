@@ -1,7 +1,7 @@
 import { useEffect, useMemo, useRef, useState } from 'react';
 import { type Finding } from '#geometry/cutting/findings.ts';
 import { cutSheetEndpoints } from '#server/contracts/cut-sheet-endpoints.ts';
-import { type CutSheet, type SheetVersion } from '#server/contracts/cut-sheets.ts';
+import { type CutSheet, type SheetPlan, type SheetVersion } from '#server/contracts/cut-sheets.ts';
 import { keepSheetDraft, type SheetDraftInput } from '#client/api/cut-sheets.ts';
 import { useMe } from '#client/app/session.tsx';
 import { type DraftKeeper } from '#client/sections/editor/draft-keeper.ts';
@@ -11,7 +11,7 @@ import { useWorked } from '../views/use-worked.ts';
 import { secondsOfLine } from '../views/wire-position.ts';
 import { focusPath } from './focus-path.ts';
 import { type OpenedPlan, type PlanMirror } from './open-plan.ts';
-import { type PlanValues, sameValues } from './plan-values.ts';
+import { type PlanErrors, type PlanValues, sameValues } from './plan-values.ts';
 import { fieldsOf, usePlanForm } from './use-plan-form.ts';
 import { usePlanInput } from './use-plan-input.ts';
 import { type PlanSources, usePlanSources } from './use-plan-sources.ts';
@@ -38,9 +38,9 @@ export function usePlanner({ sheet, base, opened, mirror, mayWrite, formElement 
   const [version, setVersion] = useState(base);
   const [basedOn, setBasedOn] = useState(opened.basedOn);
   const sources = usePlanSources(present, version);
-  const input = usePlanInput(read.plan, sources, sheet.name, basedOn);
+  const input = usePlanInput(useLastGood(read.plan, base.plan), sources, sheet.name, basedOn);
   const worked = useWorked(input);
-  const findings = worked.output?.findings ?? NO_FINDINGS;
+  const findings = useFindings(worked.output?.findings ?? NO_FINDINGS, read.errors);
   const run = usePlayer(worked.output?.model?.cut ?? null);
   const selection = useSelection(findings, formElement, (line) => {
     const cut = worked.output?.model?.cut;
@@ -92,6 +92,29 @@ export function usePlanner({ sheet, base, opened, mirror, mayWrite, formElement 
 function refusedWords(errors: number): string | null {
   if (errors === 0) return null;
   return `${errors === 1 ? 'One value is' : `${errors} values are`} not usable: the drawing shows the last plan that was.`;
+}
+
+/** The last plan that the schema took; at first that of the version. */
+function useLastGood(plan: SheetPlan | null, first: SheetPlan): SheetPlan {
+  const [last, setLast] = useState(plan ?? first);
+  if (plan && plan !== last) setLast(plan);
+  return plan ?? last;
+}
+
+/** What the schema refuses are findings too, and stand before those of the last plan that it took. */
+function useFindings(worked: readonly Finding[], errors: PlanErrors): readonly Finding[] {
+  return useMemo(
+    () => [
+      ...[...errors].map(([path, message]): Finding => ({
+        severity: 'error',
+        code: 'bad-value',
+        path,
+        message,
+      })),
+      ...worked,
+    ],
+    [worked, errors],
+  );
 }
 
 /** The finding that is selected, as long as it stands: it is shown on the sheet, and its field gets the focus. */

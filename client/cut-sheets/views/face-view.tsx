@@ -4,6 +4,7 @@ import { DASH, LINE } from '#client/drawing/line-types.ts';
 import { type Box } from '#client/drawing/sheet-layout.ts';
 import { boxOf } from '#geometry/cutting/arrays.ts';
 import { type End } from '#geometry/cutting/plan.ts';
+import { type Point } from '#geometry/point.ts';
 import { linePath, wayPieces } from './line-paths.ts';
 import { type Place } from './plan-layout.ts';
 import { type PlanModel } from './plan-model.ts';
@@ -32,12 +33,7 @@ export const FaceView = memo(function FaceView(props: FaceViewProps) {
     : place.toY(Math.max(...faces.map((face) => boxOf(face.contour).maxY)));
   return (
     <g>
-      <ViewTitle
-        x={left}
-        y={top - 8}
-        text={faceWords(model, end, units)}
-        room={box.x + box.width - left - 8}
-      />
+      <ViewTitle x={left} y={top - 8} text={faceWords(model, end, units)} room={box.width - 30} />
       {block && <BlockOutline {...block} place={place} />}
       {faces.map((face, i) => (
         <FaceLines
@@ -183,7 +179,17 @@ export function FaceWire({ model, scene, end, place, position }: FaceWireProps) 
         strokeWidth={LINE.wide}
         strokeLinejoin="round"
       />
-      <circle cx={x} cy={y} r={4.5} className="fill-wire stroke-sheet" strokeWidth={1.2} />
+      {isNear(scene, now) && (
+        <circle cx={x} cy={y} r={4.5} className="fill-wire stroke-sheet" strokeWidth={1.2} />
+      )}
     </>
   );
+}
+
+/** Farther than this from the block the wire is not shown in the view of a face, mm. */
+const REACH = 20;
+
+function isNear({ block }: Scene, { x, y }: Point): boolean {
+  if (!block) return false;
+  return x > -REACH && x < block.lengthMm + REACH && y > -REACH && y < block.heightMm + REACH;
 }

@@ -4,7 +4,7 @@ import { type Box } from '#client/drawing/sheet-layout.ts';
 import { type Point } from '#geometry/point.ts';
 import { hullOf, pointsOf, pointsPath } from './line-paths.ts';
 import { type Place } from './plan-layout.ts';
-import { type Scene, type SceneCore } from './scene.ts';
+import { type Scene, type SceneCore, shownAt } from './scene.ts';
 import { ViewTitle } from './view-title.tsx';
 import { pointAt, type WirePosition } from './wire-position.ts';
 
@@ -12,12 +12,18 @@ const COS30 = Math.sqrt(3) / 2;
 
 /**
  * A point of the block's frame in the isometric view (ISO 5456-3): all three axes shortened alike, seen from above before the leading edge
- * at the root. x aft, y up, z from the root along the span, mm.
+ * at the root. x aft, y up, then from the root along the span, mm.
  */
-export function project({ rootAtLeft }: Pick<Scene, 'rootAtLeft'>, x: number, y: number, z: number): Point {
+export function project(
+  scene: Pick<Scene, 'rootAtLeft' | 'stretches'>,
+  x: number,
+  y: number,
+  alongSpan: number,
+): Point {
+  const z = shownAt(scene, alongSpan);
   const across = (z - x) * COS30;
   // The mirrored panel is seen as its mirror image.
-  return { x: rootAtLeft ? -across : across, y: y + (x + z) / 2 };
+  return { x: scene.rootAtLeft ? -across : across, y: y + (x + z) / 2 };
 }
 
 /** Corners of the block, or of the panel where there is none, and the towers' rails. */
@@ -63,7 +69,12 @@ interface IsometricViewProps {
 export const IsometricView = memo(function IsometricView({ scene, box, place }: IsometricViewProps) {
   return (
     <g>
-      <ViewTitle x={box.x + 10} y={box.y + 16} text="Isometric view" room={box.width - 20} />
+      <ViewTitle
+        x={place.corner.x + 10}
+        y={place.corner.y + 16}
+        text="Isometric view"
+        room={box.width - 20}
+      />
       {scene.block && <BlockEdges scene={scene} place={place} />}
       {scene.cores.map((core) => (
         <CoreBody key={String(core.mirrored)} scene={scene} core={core} place={place} />
@@ -192,6 +203,11 @@ export function IsometricWire({ scene, place, position }: IsometricWireProps) {
     const { x, y } = pointAt(line, position);
     return { carriage: project(scene, x, y, at), foot: project(scene, x, 0, at) };
   };
+  const [root, tip] = [pointAt(wire.root, position), pointAt(wire.tip, position)];
+  const along = (at: number) => {
+    const share = at / scene.spanMm;
+    return project(scene, root.x + share * (tip.x - root.x), root.y + share * (tip.y - root.y), at);
+  };
   const [left, right] = [tower(wire.leftTower, bench.leftAt), tower(wire.rightTower, bench.rightAt)];
   return (
     <>
@@ -200,11 +216,14 @@ export function IsometricWire({ scene, place, position }: IsometricWireProps) {
         className="fill-none stroke-graphite"
         strokeWidth={LINE.wide}
       />
-      <path
-        d={pointsPath([left.carriage, right.carriage], place)}
-        className="fill-none stroke-wire"
-        strokeWidth={LINE.wide}
-      />
+      {scene.stretches.map(({ from, to }) => (
+        <path
+          key={from}
+          d={pointsPath([from, to].map(along), place)}
+          className="fill-none stroke-wire"
+          strokeWidth={LINE.wide}
+        />
+      ))}
     </>
   );
 }

@@ -12,23 +12,29 @@ interface LinearDimensionProps {
   readonly level: number;
   readonly direction: 'level' | 'upright';
   readonly text: string;
+  /** Where the text of a level dimension goes when there is no room between its arrows. */
+  readonly textSide?: 'before' | 'after';
 }
 
 /**
  * A linear dimension after ISO 129-1: extension lines, a dimension line with closed arrowheads, the text over it, to be read from below or
  * from the right. Where the arrows have no room inside they stand outside.
  */
-export function LinearDimension({ from, to, level, direction, text }: LinearDimensionProps) {
+export function LinearDimension({
+  from,
+  to,
+  level,
+  direction,
+  text,
+  textSide = 'after',
+}: LinearDimensionProps) {
   const isLevel = direction === 'level';
   const [a, b] = isLevel ? sorted(from.x, to.x) : sorted(from.y, to.y);
   const width = textWidth(text, TEXT);
   const inside = b - a >= 2 * ARROW.length + 4;
   const roomy = b - a >= width + 2 * ARROW.length + 6;
-  const middle = roomy
-    ? (a + b) / 2
-    : isLevel
-      ? b + ARROW.length * 2 + width / 2 + 2
-      : a - ARROW.length * 2 - width / 2 - 2;
+  const beside = ARROW.length * 2 + width / 2 + 2;
+  const middle = roomy || !isLevel ? (a + b) / 2 : textSide === 'after' ? b + beside : a - beside;
   const at = (along: number, across: number) =>
     isLevel ? `${r(along)} ${r(across)}` : `${r(across)} ${r(along)}`;
   const tail = inside ? 0 : ARROW.length * 2;
@@ -40,7 +46,8 @@ export function LinearDimension({ from, to, level, direction, text }: LinearDime
   const lines = roomy
     ? `M${at(a, level)}L${at(middle - width / 2 - 3, level)}M${at(middle + width / 2 + 3, level)}L${at(b, level)}`
     : `M${at(a - tail, level)}L${at(b + tail, level)}`;
-  const [x, y] = isLevel ? [middle, level] : [level, middle];
+  const aside = (Math.sign(level - from.x) || 1) * (width / 2 + 6);
+  const [x, y] = isLevel ? [middle, level] : [roomy ? level : level + aside, middle];
   return (
     <g aria-hidden="true">
       <path
@@ -58,7 +65,7 @@ export function LinearDimension({ from, to, level, direction, text }: LinearDime
         dy={TEXT * 0.35}
         fontSize={TEXT}
         textAnchor="middle"
-        transform={isLevel ? undefined : `rotate(-90 ${r(x)} ${r(y)})`}
+        transform={isLevel || !roomy ? undefined : `rotate(-90 ${r(x)} ${r(y)})`}
         paintOrder="stroke"
         strokeWidth={4}
         strokeLinejoin="round"

@@ -94,7 +94,7 @@ const Views = memo(function Views({ model, scene, layout, places, units }: Views
 function remarksOf(units: Units, { plan }: PlanModel): string[] {
   return [
     `Dimensions in ${units === 'mm' ? 'mm' : 'inches'}.`,
-    ...(plan.block ? ['Dashed: block, and margin in it.'] : []),
+    ...(plan.block ? ['Dashed: block and margin.'] : []),
     ...(plan.machine ? [`Machine: ${plan.machine.name}.`] : []),
     ...(plan.material ? [`Foam: ${plan.material.name}.`] : []),
   ];

@@ -14,7 +14,7 @@ export function planLayout(size: Size): PlanLayout {
   return { ...sheet, views: sheet.compact ? stacked(sheet.drawing) : composed(sheet.drawing) };
 }
 
-const PLANFORM = 0.43;
+const PLANFORM = 0.47;
 const FACES = 0.62;
 
 function composed({ x, y, width, height }: Box): PlanLayout['views'] {
@@ -69,6 +69,8 @@ export interface Place {
   readonly toY: (y: number) => number;
   /** Pixels per mm. */
   readonly scale: number;
+  /** Where the upper left corner of the view's room is now. */
+  readonly corner: { readonly x: number; readonly y: number };
 }
 
 interface Extent {
@@ -111,6 +113,7 @@ export function placeIn(
   const { factor, dx, dy } = zoom;
   return {
     scale: scale * factor,
+    corner: { x: factor * box.x + dx, y: factor * box.y + dy },
     toX: (x) => factor * (x0 + scale * x) + dx,
     toY: (y) => factor * (y0 - scale * y) + dy,
   };

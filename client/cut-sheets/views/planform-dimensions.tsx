@@ -26,7 +26,7 @@ export function PlanformDimensions(props: PlanformDimensionsProps) {
   const [[, rootNose], [, tipNose], [, tipRear], [, rootRear]] = outline;
   const { spanMm } = scene;
   const point = (z: number, x: number) => ({ x: toX(z), y: toY(x) });
-  const top = Math.min(toY(rootNose), toY(tipNose), block ? toY(0) : Infinity) - 16;
+  const top = Math.min(toY(rootNose), toY(tipNose), block ? toY(0) : Infinity) - 13;
   const outwards = toX(0) < toX(spanMm) ? -1 : 1;
   const text = (mm: number) => dimensionText(Math.abs(mm), units);
   const sweep = tipNose - rootNose;
@@ -78,7 +78,8 @@ function TowerDimension({ scene, outline, toX, toY, units }: PlanformDimensionsP
       direction="level"
       from={{ x: toX(bench.leftAt), y: start }}
       to={{ x: toX(face), y: start }}
-      level={start + 18}
+      level={start + 9}
+      textSide={toX(bench.leftAt) > toX(face) ? 'before' : 'after'}
       text={dimensionText(Math.abs(face - bench.leftAt), units)}
     />
   );

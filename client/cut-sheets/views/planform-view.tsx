@@ -6,7 +6,7 @@ import { boxOf } from '#geometry/cutting/arrays.ts';
 import { type Place } from './plan-layout.ts';
 import { type PlanModel } from './plan-model.ts';
 import { PlanformDimensions, type PlanformOutline } from './planform-dimensions.tsx';
-import { type Scene, type SceneCore } from './scene.ts';
+import { type Scene, type SceneCore, shownAt } from './scene.ts';
 import { ViewTitle } from './view-title.tsx';
 import { pointAt, type WirePosition } from './wire-position.ts';
 
@@ -32,8 +32,9 @@ export function planformExtent(scene: Scene) {
 }
 
 /** A distance from the root face along the span as a place across the page. */
-export function pageAt({ rootAtLeft }: Pick<Scene, 'rootAtLeft'>, alongSpan: number): number {
-  return rootAtLeft ? alongSpan : -alongSpan;
+export function pageAt(scene: Pick<Scene, 'rootAtLeft' | 'stretches'>, alongSpan: number): number {
+  const shown = shownAt(scene, alongSpan);
+  return scene.rootAtLeft ? shown : -shown;
 }
 
 interface PlanformViewProps {
@@ -62,20 +63,13 @@ export const PlanformView = memo(function PlanformView({
     points.map(([z, x], i) => `${i === 0 ? 'M' : 'L'}${toX(z).toFixed(2)} ${toY(x).toFixed(2)}`).join('');
   return (
     <g>
-      <ViewTitle x={box.x + 14} y={box.y + 20} text="Planform, seen from above" room={box.width - 28} />
-      {block && (
-        <path
-          d={`${path([
-            [block.from, 0],
-            [block.to, 0],
-            [block.to, block.lengthMm],
-            [block.from, block.lengthMm],
-          ])}Z`}
-          className="fill-none stroke-graphite"
-          strokeWidth={LINE.narrow}
-          strokeDasharray="7 3.5"
-        />
-      )}
+      <ViewTitle
+        x={place.corner.x + 14}
+        y={place.corner.y + 20}
+        text="Planform, seen from above"
+        room={box.width - 28}
+      />
+      {block && <BlockRectangle block={block} path={path} />}
       <path
         d={`${path(outline)}Z`}
         className="fill-foam stroke-ink"
@@ -95,11 +89,29 @@ export const PlanformView = memo(function PlanformView({
       {model.features.map((feature, i) => (
         <FeatureBand key={feature.index} core={core} at={i} path={path} spanMm={scene.spanMm} />
       ))}
+      <Breaks scene={scene} toX={toX} place={place} />
       {bench && <Towers bench={bench} toX={toX} box={box} top={place} scene={scene} />}
       <PlanformDimensions {...{ model, scene, outline, toX, toY, units }} />
     </g>
   );
 });
+
+function BlockRectangle({ block, path }: { block: NonNullable<Scene['block']>; path: PathOf }) {
+  const { from, to, lengthMm } = block;
+  return (
+    <path
+      d={`${path([
+        [from, 0],
+        [to, 0],
+        [to, lengthMm],
+        [from, lengthMm],
+      ])}Z`}
+      className="fill-none stroke-graphite"
+      strokeWidth={LINE.narrow}
+      strokeDasharray="7 3.5"
+    />
+  );
+}
 
 type PathOf = (points: readonly (readonly [number, number])[]) => string;
 function outlineOf(core: SceneCore, spanMm: number): PlanformOutline {
@@ -197,6 +209,29 @@ function FeatureBand({
   );
 }
 
+/** Lines with a zigzag where the view is interrupted. */
+function Breaks({ scene, toX, place }: { scene: Scene; toX: (alongSpan: number) => number; place: Place }) {
+  const { minY, maxY } = planformExtent(scene);
+  const [top, bottom] = [place.toY(maxY) - 4, place.toY(minY) + 4];
+  const middle = (top + bottom) / 2;
+  const inner = scene.stretches.find(({ shift }) => shift === 0);
+  const edges = scene.stretches.flatMap(({ from, to, shift }) => {
+    if (shift === 0 || !inner) return [];
+    return from < inner.from ? [to, inner.from] : [inner.to, from];
+  });
+  return edges.map((edge) => {
+    const x = toX(edge);
+    return (
+      <path
+        key={edge}
+        d={`M${x} ${top}V${middle - 6}L${x + 4} ${middle - 3}L${x - 4} ${middle + 3}L${x} ${middle + 6}V${bottom}`}
+        className="fill-none stroke-graphite"
+        strokeWidth={LINE.hair}
+      />
+    );
+  });
+}
+
 interface TowersProps {
   readonly bench: NonNullable<Scene['bench']>;
   readonly scene: Scene;
@@ -223,7 +258,7 @@ function Towers({ bench, scene, toX, top, box }: TowersProps) {
             <path d={`M${x} ${y1}V${y2}`} className="fill-none stroke-graphite" strokeWidth={LINE.wide} />
             <text
               x={atLeft ? x - 4 : x + 4}
-              y={y1 - 5}
+              y={y2 + 12}
               fontSize={11}
               textAnchor={atLeft ? 'start' : 'end'}
               className="fill-graphite"
@@ -245,22 +280,30 @@ interface PlanformWireProps {
 
 /** The wire from tower to tower, as it lies at a moment. */
 export function PlanformWire({ scene, place, position }: PlanformWireProps) {
-  const { wire, bench } = scene;
+  const { wire, bench, spanMm, stretches } = scene;
   if (!wire || !bench) return null;
-  const end = (at: number, line: typeof wire.leftTower) => ({
+  const [root, tip] = [pointAt(wire.root, position).x, pointAt(wire.tip, position).x];
+  const pixel = (at: number) => ({
     x: place.toX(pageAt(scene, at)),
-    y: place.toY(-pointAt(line, position).x),
+    y: place.toY(-(root + (at / spanMm) * (tip - root))),
   });
-  const [left, right] = [end(bench.leftAt, wire.leftTower), end(bench.rightAt, wire.rightTower)];
   return (
     <>
-      <path
-        d={`M${left.x} ${left.y}L${right.x} ${right.y}`}
-        className="fill-none stroke-wire"
-        strokeWidth={LINE.wide}
-      />
-      <circle cx={left.x} cy={left.y} r={3} className="fill-wire" />
-      <circle cx={right.x} cy={right.y} r={3} className="fill-wire" />
+      {stretches.map(({ from, to }) => {
+        const [a, b] = [pixel(from), pixel(to)];
+        return (
+          <path
+            key={from}
+            d={`M${a.x} ${a.y}L${b.x} ${b.y}`}
+            className="fill-none stroke-wire"
+            strokeWidth={LINE.wide}
+          />
+        );
+      })}
+      {[bench.leftAt, bench.rightAt].map((at) => {
+        const { x, y } = pixel(at);
+        return <circle key={at} cx={x} cy={y} r={3} className="fill-wire" />;
+      })}
     </>
   );
 }

@@ -46,9 +46,18 @@ export interface SceneBench {
   readonly reachY: number;
 }
 
+/** A piece of the way from tower to tower that is drawn: true distances from the root face, and how far it is moved together. */
+export interface Stretch {
+  readonly from: number;
+  readonly to: number;
+  readonly shift: number;
+}
+
 /** Everything of a plan in one frame, to be drawn from any side. */
 export interface Scene {
   readonly spanMm: number;
+  /** One, or with interrupted views (ISO 128-3) up to three: a tower that stands far off is drawn nearer. */
+  readonly stretches: readonly Stretch[];
   readonly block: SceneBlock | null;
   readonly cores: readonly SceneCore[];
   readonly bench: SceneBench | null;
@@ -63,20 +72,53 @@ export function sceneOf(model: PlanModel): Scene {
   const { plan, fit, cut } = model;
   const { machine } = plan;
   const { spanMm } = plan.panel;
+  const block = plan.block && {
+    lengthMm: plan.block.lengthMm,
+    heightMm: plan.block.heightMm,
+    marginMm: plan.block.marginMm,
+    ...blockSpan(plan, plan.block.spanMm),
+  };
+  const bench = machine && benchOf(machine, plan);
   return {
     spanMm,
-    block: plan.block && {
-      lengthMm: plan.block.lengthMm,
-      heightMm: plan.block.heightMm,
-      marginMm: plan.block.marginMm,
-      ...blockSpan(plan, plan.block.spanMm),
-    },
+    stretches: stretchesOf(spanMm, block, bench),
+    block,
+    bench,
     cores: (fit?.places ?? [ALONE]).map((place) => coreOf(model, place)),
-    bench: machine && benchOf(machine, plan),
     wire: cut && machine && plan.block ? wireOf(cut, machine, plan.block.lengthMm) : null,
     // x aft, y up and z from root to tip are right-handed; a machine may cut the mirrored panel.
     rootAtLeft: !machine || (machine.rootFace === 'left') === (machine.trailingEdge === 'origin'),
   };
+}
+
+/** Shares of the panel's length: what is drawn beside it, the piece at a tower, and the gap between both. */
+const BESIDE = 0.24;
+const AT_TOWER = 0.05;
+const GAP = 0.03;
+
+function stretchesOf(spanMm: number, block: SceneBlock | null, bench: SceneBench | null): Stretch[] {
+  const [low, high] = [Math.min(0, block?.from ?? 0), Math.max(spanMm, block?.to ?? 0)];
+  if (!bench) return [{ from: low, to: high, shift: 0 }];
+  const [first, last] = [Math.min(bench.leftAt, bench.rightAt), Math.max(bench.leftAt, bench.rightAt)];
+  const length = high - low;
+  const [beside, piece, gap] = [BESIDE * length, AT_TOWER * length, GAP * length];
+  const isFar = (distance: number) => distance > beside + piece + 2 * gap;
+  const [from, to] = [isFar(low - first) ? low - beside : first, isFar(last - high) ? high + beside : last];
+  return [
+    ...(from > first ? [{ from: first, to: first + piece, shift: from - gap - (first + piece) }] : []),
+    { from, to, shift: 0 },
+    ...(to < last ? [{ from: last - piece, to: last, shift: to + gap - (last - piece) }] : []),
+  ];
+}
+
+/** Where a distance from the root face along the span is drawn. */
+export function shownAt({ stretches }: Pick<Scene, 'stretches'>, alongSpan: number): number {
+  const nearest = stretches.reduce((best, of) => (away(of, alongSpan) < away(best, alongSpan) ? of : best));
+  return alongSpan + nearest.shift;
+}
+
+function away({ from, to }: Stretch, at: number): number {
+  return Math.max(0, from - at, at - to);
 }
 
 /** The block begins at the panel's left face; what it is longer than the panel stands out at the right. */

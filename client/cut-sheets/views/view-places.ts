@@ -10,8 +10,8 @@ const LEAD = 14;
 export function viewPlaces(scene: Scene, layout: PlanLayout, zoom: Zoom): Readonly<Record<ViewId, Place>> {
   const { views, compact } = layout;
   const side = compact ? 14 : 22;
-  const planformRoom = { left: compact ? 40 : 56, right: compact ? 40 : 56, top: 54, bottom: 40 };
-  const faceRoom = { left: side, right: side, top: 28, bottom: 18 };
+  const planformRoom = { left: compact ? 40 : 56, right: compact ? 40 : 56, top: 46, bottom: 30 };
+  const faceRoom = { left: side, right: side, top: 24, bottom: 8 };
   const extent = faceExtent(scene);
   const scale = Math.min(
     fittingScale(views.root, extent, faceRoom),
