@@ -44,10 +44,10 @@ interface Piece {
 }
 
 const TITLE_MM = 7;
-const HEAD_MM = 5;
-const ROW_MM = 4.6;
-const HAND_ROW_MM = 8;
-const LINE_MM = 3;
+const HEAD_MM = 6;
+const ROW_MM = 5.6;
+const HAND_ROW_MM = 9;
+const LINE_MM = 3.9;
 const SPACE_MM = 5;
 const PAD = 1;
 /** A heading is not left alone at the foot of a column. */
@@ -144,8 +144,8 @@ function cells({ columns, byHand }: Table, row: readonly string[], rect: Rect, h
   let x = rect.x;
   columns.forEach(({ share, align }, i) => {
     const width = share * rect.width;
-    const fit = fittedText(row[i] ?? '', width - 2 * PAD, LETTER.small);
-    const at = { x: align === 'start' ? x + PAD : x + width - PAD, y: bottom - (byHand && !head ? 3 : 1.4) };
+    const fit = fittedText(row[i] ?? '', width - 2 * PAD, LETTER.plain);
+    const at = { x: align === 'start' ? x + PAD : x + width - PAD, y: bottom - (byHand && !head ? 3 : 1.6) };
     if (fit.text !== '') {
       const ink = head ? 'graphite' : 'ink';
       marks.push(text(at, fit.text, fit.heightMm, { anchor: align, ink }));
@@ -157,13 +157,13 @@ function cells({ columns, byHand }: Table, row: readonly string[], rect: Rect, h
 }
 
 function sentence({ before, words }: Notes['sentences'][number], width: number): Piece {
-  const indent = before === '' ? 0 : textWidth(`${before} `, LETTER.small) + PAD;
-  const lines = wrappedText(words, width - indent, LETTER.small);
+  const indent = before === '' ? 0 : textWidth(`${before} `, LETTER.plain) + PAD;
+  const lines = wrappedText(words, width - indent, LETTER.plain);
   return {
     heightMm: lines.length * LINE_MM + 1.2,
     draw: (x, y) => [
-      ...(before === '' ? [] : [text({ x, y: y + 2.2 }, before, LETTER.small, { weight: 800 })]),
-      ...lines.map((of, i) => text({ x: x + indent, y: y + 2.2 + i * LINE_MM }, of, LETTER.small)),
+      ...(before === '' ? [] : [text({ x, y: y + 2.9 }, before, LETTER.plain, { weight: 800 })]),
+      ...lines.map((of, i) => text({ x: x + indent, y: y + 2.9 + i * LINE_MM }, of, LETTER.plain)),
     ],
   };
 }

@@ -74,7 +74,7 @@ function cellsOf(identity: SheetIdentity, of: SheetWords): Cell[] {
 
 function cellMarks(cell: Cell, block: Rect, top: number, bottom: number): Mark[] {
   const x = block.x + cell.from * block.width + PAD;
-  const room = cell.width * block.width - 2 * PAD;
+  const room = cell.width * block.width - 2.5 * PAD;
   const fit = fittedText(cell.words, room, cell.heightMm ?? LETTER.plain);
   return [
     text({ x, y: top + LETTER.least + 1.1 }, cell.label, LETTER.least, { ink: 'graphite' }),

@@ -135,8 +135,16 @@ const LINE_MM = 2.9;
 /** Cautions stand on the first sheet too where the foot is as wide as this, mm. */
 const WIDE_FOOT_MM = 120;
 
-const LEGEND =
-  'Dimensions in mm; chords are true lengths of the finished section. Do not measure the drawing. Thin line: finished section. Dash-double-dot: finished outline, block. Orange: middle of the wire.';
+/** What the lines of the views mean. */
+function legendOf({ plan, cut }: CorePlan): string {
+  const { upperMm, lowerMm } = plan.allowances;
+  return [
+    'Dimensions in mm; chords are true lengths of the finished section. Do not measure the drawing.',
+    ...(upperMm + lowerMm > 0 ? ['Thin line: finished section.'] : []),
+    ...(plan.block ? ['Dash-double-dot: finished outline, block.'] : []),
+    ...(cut ? ['Orange: middle of the wire.'] : []),
+  ].join(' ');
+}
 
 /** Beside the title block: the QR code and what it says, and what has to be known to read the drawing. */
 function footMarks(plan: CorePlan, identity: SheetIdentity, details: PageDetails, frame: Rect): Mark[] {
@@ -145,10 +153,10 @@ function footMarks(plan: CorePlan, identity: SheetIdentity, details: PageDetails
   const width = frame.width - TITLE_BLOCK.width - QR_MM - 4;
   const released = identity.status === 'released';
   const state = fittedText(statusLine(identity), width, LETTER.large);
-  const start = top + (released ? 5 : 12);
+  const start = top + (released ? 5 : 13);
   const cautions = width < WIDE_FOOT_MM ? [] : cautionNotes(plan).sentences.map(({ words }) => words);
   const room = Math.floor((TITLE_BLOCK.height - (start - top) - 1) / LINE_MM);
-  const lines = [...cautions, LEGEND].flatMap((of) => wrappedText(of, width, LETTER.small));
+  const lines = [...cautions, legendOf(plan)].flatMap((of) => wrappedText(of, width, LETTER.small));
   const address = wrappedText(identity.address, width, LETTER.least);
   return [
     ...qrMarks(details.qr, {

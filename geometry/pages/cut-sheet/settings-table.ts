@@ -38,7 +38,9 @@ function panelRows({ plan, core }: CorePlan): Rows {
       `${plainText(panel.washoutDeg)}° about ${stationText(panel.washoutStation)}, ${plainText(panel.verticalOffsetMm)} mm`,
     ],
     ['Skin, upper and lower', `${plainText(allowances.upperMm)} and ${plainText(allowances.lowerMm)} mm`],
-    ['Kerf, root and tip', `${plainText(kerfMm.root)} and ${plainText(kerfMm.tip)} mm`],
+    ...(plan.block
+      ? [['Kerf, root and tip', `${plainText(kerfMm.root)} and ${plainText(kerfMm.tip)} mm`] as const]
+      : []),
     [
       'Tolerance, points in step',
       `${plainText(plan.cut.toleranceMm)} mm, ${core.panel.chain.station.length} at each end`,

@@ -48,13 +48,13 @@ export function featureTable({ features, core }: CorePlan): Table | null {
     byHand: false,
     columns: [
       tableColumn('No.', 0.06, 'end'),
-      tableColumn('Kind', 0.1),
-      tableColumn('Name', 0.17),
+      tableColumn('Kind', 0.09),
+      tableColumn('Name', 0.16),
       tableColumn('From', 0.09),
-      tableColumn('Size', 0.14),
-      tableColumn('Root', 0.16),
-      tableColumn('Tip', 0.16),
-      tableColumn('Web', 0.12, 'end'),
+      tableColumn('Size', 0.16),
+      tableColumn('Root', 0.17),
+      tableColumn('Tip', 0.17),
+      tableColumn('Web', 0.1, 'end'),
     ],
     rows: features.map(({ index, feature, surface, root, tip }) => {
       const place = (end: 'root' | 'tip') => {
@@ -133,7 +133,8 @@ export function ribTable({ ribs }: CorePlan): Table | null {
 
 /** What the caliper must show, with blanks to fill in by hand. */
 export function inspectionTable({ plan, core, inspection }: CorePlan): Table {
-  const measured = plan.inspection.measured === 'core' ? 'the bare core' : 'with skin';
+  const bare = plan.block === null ? 'ribs without sheeting' : 'the bare core';
+  const measured = plan.inspection.measured === 'core' ? bare : 'the part with its skins';
   return {
     kind: 'table',
     title: `Inspection, thickness of ${measured}, mm`,

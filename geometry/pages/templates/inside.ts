@@ -36,3 +36,10 @@ export function isInside(point: Point, outline: readonly Point[]): boolean {
   }
   return inside;
 }
+
+/** Is a corner, a side or the middle of a box inside of the template? */
+export function touches(box: Rect, outline: readonly Point[]): boolean {
+  const xs = [box.x, box.x + box.width / 2, box.x + box.width];
+  const ys = [box.y, box.y + box.height / 2, box.y + box.height];
+  return xs.some((x) => ys.some((y) => isInside({ x, y }, outline)));
+}

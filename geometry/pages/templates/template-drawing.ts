@@ -5,8 +5,8 @@ import { clippedLine } from '../clip.ts';
 import { LETTER, textBox } from '../lettering.ts';
 import { WIDTH, circle, segment, text } from '../marks.ts';
 import { type Occupied, occupied } from '../occupied.ts';
-import { type Mark, type TextMark } from '../page.ts';
-import { fits, isInside } from './inside.ts';
+import { type Anchor, type Mark, type TextMark } from '../page.ts';
+import { fits, isInside, touches } from './inside.ts';
 import { down, tickMarks } from './tick-marks.ts';
 import { type Tile, type Tiling, OVERLAP_MM } from './tiles.ts';
 
@@ -20,7 +20,7 @@ export interface TemplateDrawing {
 /** Room around the template for the numbers that do not fit inside, mm. */
 const SURROUND_MM = { x: 6, y: 9 } as const;
 
-/** Half of a cross with its name above it must stand within half of the overlap. */
+/** Half of a cross with the names beside it must stand within half of the overlap. */
 const CROSS_MM = 3.6;
 
 /** The tiles on which there is something of the template. */
@@ -103,12 +103,14 @@ function axisMarks(
     takeAlong(nose, tail, room);
   }
   const word = text({ x: 0, y: 0 }, same ? 'level = chord' : 'level', LETTER.small, { ink: 'graphite' });
-  const places = Array.from({ length: 12 }, (_, k) => from.x + (0.3 + k * 0.05) * (to.x - from.x));
-  const x = places.find((place) =>
-    fits({ ...word, at: { x: place, y: from.y - LEVEL_CLEAR_MM } }, outline, room),
-  );
-  if (x === undefined) return { lines, texts: [] };
-  const placed = { ...word, at: { x, y: from.y - LEVEL_CLEAR_MM } };
+  const inside = Array.from({ length: 12 }, (_, k) => ({
+    ...word,
+    at: { x: from.x + (0.3 + k * 0.05) * (to.x - from.x), y: from.y - LEVEL_CLEAR_MM },
+  })).find((of) => fits(of, outline, room));
+  // Behind the line's end where the template has no room for it.
+  const placed = inside ?? { ...word, at: { x: to.x + 1, y: to.y + LETTER.small / 2 } };
+  if (!inside && (touches(textBox(placed), outline) || !room.isFree(textBox(placed))))
+    return { lines, texts: [] };
   room.take(textBox(placed));
   return { lines, texts: [placed] };
 }
@@ -132,34 +134,44 @@ function takeAlong(from: Point, to: Point, room: Occupied): void {
 function joinMarks({ tiles, joins }: Tiling, room: Occupied): { lines: Mark[]; texts: TextMark[] } {
   const lines: Mark[] = [];
   const texts: TextMark[] = [];
-  const cross = (x: number, y: number, words: string) => {
+  const cross = (x: number, y: number, names: readonly TextMark[]) => {
     lines.push(
       circle({ x, y }, CROSS_MM / 2, { ink: 'graphite' }),
       segment(x - CROSS_MM, y, x + CROSS_MM, y),
       segment(x, y - CROSS_MM, x, y + CROSS_MM),
     );
     room.take({ x: x - CROSS_MM, y: y - CROSS_MM, width: 2 * CROSS_MM, height: 2 * CROSS_MM });
-    const mark = text({ x, y: y - CROSS_MM - 0.7 }, words, LETTER.least, {
-      ink: 'graphite',
-      anchor: 'middle',
-    });
-    room.take(textBox(mark));
-    texts.push(mark);
+    for (const name of names) room.take(textBox(name));
+    texts.push(...names);
   };
+  const name = (x: number, y: number, words: string, anchor: Anchor) =>
+    text({ x, y }, words, LETTER.least, { ink: 'graphite', anchor });
   for (const tile of tiles) {
     const right = tiles.find(({ row, column }) => row === tile.row && column === tile.column + 1);
     const below = tiles.find(({ row, column }) => row === tile.row + 1 && column === tile.column);
     const [joinX, joinY] = [joins.x[tile.column], joins.y[joins.y.length - 1 - tile.row]];
     if (right && joinX !== undefined) {
-      lines.push(segment(joinX, -tile.maxY, joinX, -tile.minY, { type: 'dashed', widthMm: WIDTH.hair }));
+      const [top, bottom] = [joins.y[joins.y.length - tile.row] ?? tile.maxY, joinY ?? tile.minY];
+      lines.push(segment(joinX, -top, joinX, -bottom, { type: 'dashed', widthMm: WIDTH.hair }));
       for (const share of CROSSES) {
-        cross(joinX, -tile.minY - share * (tile.maxY - tile.minY), `${tile.name}·${right.name}`);
+        const y = -tile.minY - share * (tile.maxY - tile.minY);
+        const above = y - CROSS_MM - 0.7;
+        cross(joinX, y, [
+          name(joinX - 0.8, above, tile.name, 'end'),
+          name(joinX + 0.8, above, right.name, 'start'),
+        ]);
       }
     }
     if (below && joinY !== undefined) {
-      lines.push(segment(tile.minX, -joinY, tile.maxX, -joinY, { type: 'dashed', widthMm: WIDTH.hair }));
+      const [left, end] = [joins.x[tile.column - 1] ?? tile.minX, joinX ?? tile.maxX];
+      lines.push(segment(left, -joinY, end, -joinY, { type: 'dashed', widthMm: WIDTH.hair }));
       for (const share of CROSSES) {
-        cross(tile.minX + share * (tile.maxX - tile.minX), -joinY, `${tile.name}·${below.name}`);
+        const x = tile.minX + share * (tile.maxX - tile.minX);
+        const beside = x + CROSS_MM + 0.8;
+        cross(x, -joinY, [
+          name(beside, -joinY - 0.9, tile.name, 'start'),
+          name(beside, -joinY + 0.9 + LETTER.least, below.name, 'start'),
+        ]);
       }
     }
   }

@@ -3,8 +3,8 @@ import { type Point } from '../../point.ts';
 import { LETTER, textBox, textWidth } from '../lettering.ts';
 import { segment, text } from '../marks.ts';
 import { type Occupied } from '../occupied.ts';
-import { type Mark, type Rect, type TextMark } from '../page.ts';
-import { fits, isInside } from './inside.ts';
+import { type Mark, type TextMark } from '../page.ts';
+import { fits, isInside, touches } from './inside.ts';
 
 const TICK = { plain: 2, long: 3.5, every: 5, outside: 1.2 } as const;
 
@@ -22,12 +22,11 @@ export function tickMarks(ticks: readonly Tick[], outline: readonly Point[], roo
   for (const tick of [...ticks.filter(isMain), ...ticks.filter((of) => !isMain(of))]) {
     const foot = down(tick.at);
     const inwards = down(tick.inwards);
-    const length = isMain(tick) ? TICK.long : TICK.plain;
     const along = (by: number): Point => ({ x: foot.x + by * inwards.x, y: foot.y + by * inwards.y });
-    const label = crowded && !isMain(tick) ? null : numberAt(tick, along, length, outline, room);
-    const begin = along(label && label.by < 0 ? label.by : 0);
-    const inside = longestInside(along, length, outline);
-    const end = along(inside);
+    const lengths = isMain(tick) ? [TICK.long, TICK.plain] : [TICK.plain];
+    const label = crowded && !isMain(tick) ? null : numberAt(tick, along, lengths, outline, room);
+    const begin = along(label?.from ?? 0);
+    const end = along(longestInside(along, label?.length ?? TICK.plain, outline));
     lines.push(segment(begin.x, begin.y, end.x, end.y));
     if (!label) continue;
     room.take(textBox(label.mark));
@@ -52,14 +51,20 @@ function longestInside(along: (by: number) => Point, length: number, outline: re
   return 0.4;
 }
 
-/** The number of a tick with the place where its tick begins: 0 at the edge, less outside. */
+/** The number of a tick with the place where its tick begins, 0 at the edge, less outside, and how far it goes in. */
+interface Placed {
+  readonly mark: TextMark;
+  readonly from: number;
+  readonly length: number;
+}
+
 function numberAt(
   { number }: Tick,
   along: (by: number) => Point,
-  length: number,
+  lengths: readonly number[],
   outline: readonly Point[],
   room: Occupied,
-): { readonly mark: TextMark; readonly by: number } | null {
+): Placed | null {
   const mark = text({ x: 0, y: 0 }, String(number), LETTER.small, { anchor: 'middle' });
   const { width, height } = textBox(mark);
   const half = Math.hypot(width, height) / 2;
@@ -67,18 +72,17 @@ function numberAt(
     const { x, y } = along(by);
     return { ...mark, at: { x, y: y + LETTER.small / 2 } };
   };
-  const inner = centred(length + half + 0.3);
-  if (fits(inner, outline, room)) return { mark: inner, by: 0 };
+  for (const length of lengths) {
+    const by = length + half + 0.3;
+    // On the tick's own side of the middle, so that it is not taken for one of the other surface.
+    const own = isInside(along(2 * by), outline);
+    if (own && fits(centred(by), outline, room)) return { mark: centred(by), from: 0, length };
+  }
   for (const out of [TICK.outside, TICK.outside + 2.6]) {
     const outer = centred(-out - half - 0.3);
     const box = textBox(outer);
-    if (room.isFree(box) && !touches(box, outline)) return { mark: outer, by: -out };
+    if (room.isFree(box) && !touches(box, outline))
+      return { mark: outer, from: -out, length: lengths[0] ?? TICK.plain };
   }
   return null;
-}
-
-function touches(box: Rect, outline: readonly Point[]): boolean {
-  const xs = [box.x, box.x + box.width / 2, box.x + box.width];
-  const ys = [box.y, box.y + box.height / 2, box.y + box.height];
-  return xs.some((x) => ys.some((y) => isInside({ x, y }, outline)));
 }

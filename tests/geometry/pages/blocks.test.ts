@@ -34,7 +34,7 @@ test('each group begins in a column of its own, and a heading keeps two rows', (
   const [page] = setBlocks([[table(2, 'One')], [table(2, 'Two')]], COLUMNS);
   const heading = (title: string) => textsOf(page!).find(({ text }) => text === title)?.at.x;
   expect([heading('One'), heading('Two')]).toEqual([10, 110]);
-  // 12 mm of heads and 14 rows of 4.6 mm leave 100 − 76.4 − 5 mm, in which a heading with two rows of 8 mm has no room.
+  // 13 mm of heads and 14 rows of 5.6 mm leave less than 9 mm below the gap: no room for a heading with two rows.
   const crowded = setBlocks([[table(14, 'One'), table(3, 'Two', true)]], COLUMNS)[0]!;
   expect(textsOf(crowded).find(({ text }) => text === 'Two')?.at.x).toBe(110);
 });

@@ -85,6 +85,7 @@ export const pageCalls: Readonly<Record<string, () => readonly unknown[]>> = {
   tickMarks: () => [template().ticks.map((of) => ({ ...of })), points().map(down), { ...occupied() }],
   tilingOf: () => [box(), rect()],
   titleBlock: () => [sheet(), sheetWords(), rect()],
+  touches: () => [rect(), points()],
   usedTiles: () => [template(), tiling().tiles],
   viewOf: () => [box(), rect(), 2],
   wireAt: () => [plan(), 'root', 0],

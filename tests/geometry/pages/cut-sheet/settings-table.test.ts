@@ -21,7 +21,7 @@ test('what the machine is set to', () => {
 test('only what belongs to the plan', () => {
   const ribs = settings('ribs alone');
   expect(ribs.get('Rib material')).toBe('Balsa 3 mm, 3 mm thick');
-  for (const label of ['Material', 'Machine', 'Feed, limit of the material'])
+  for (const label of ['Kerf, root and tip', 'Material', 'Machine', 'Feed, limit of the material'])
     expect(ribs.has(label)).toBe(false);
   expect(settings('by hand').get('Machine')).toBe('none: cut by hand along the templates');
   expect(settings('pair in two passes').get('Cores in the block')).toBe('2');

@@ -45,6 +45,7 @@ test('the inspection leaves blanks beside what the caliper must show', () => {
     expect(Number(row[5]) - Number(row[4])).toBeCloseTo(2 * toleranceMm, 1);
     expect(row.slice(6)).toEqual(['', '']);
   });
+  expect(inspectionTable(planOf('ribs alone')).title).toContain('ribs without sheeting');
   expect(SIGNATURES.rows.map(([work]) => work)).toEqual(['Cut', 'Measured']);
 });
 

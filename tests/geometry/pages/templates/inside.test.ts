@@ -1,7 +1,7 @@
 import { expect, test } from 'vitest';
 import { text } from '#geometry/pages/marks.ts';
 import { occupied } from '#geometry/pages/occupied.ts';
-import { fits, isInside } from '#geometry/pages/templates/inside.ts';
+import { fits, isInside, touches } from '#geometry/pages/templates/inside.ts';
 
 /** An L: 40 wide and 20 high, its upper right part missing. */
 const CORNER = [
@@ -28,4 +28,9 @@ test('a text fits where all of it is inside and nothing stands yet', () => {
   expect(fits({ ...words, at: { x: 30, y: 18 } }, CORNER, room)).toBe(false);
   room.take({ x: 15, y: 15, width: 2, height: 2 });
   expect(fits(words, CORNER, room)).toBe(false);
+});
+
+test('a box touches where any part of its grid is inside', () => {
+  expect(touches({ x: 12, y: 2, width: 20, height: 8 }, CORNER)).toBe(false);
+  expect(touches({ x: 12, y: 2, width: 20, height: 12 }, CORNER)).toBe(true);
 });

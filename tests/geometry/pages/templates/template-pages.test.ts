@@ -6,7 +6,7 @@ import { type Page } from '#geometry/pages/page.ts';
 import { PAPERS, templatePages } from '#geometry/pages/templates/template-pages.ts';
 import { type Point } from '#geometry/point.ts';
 import { TEMPLATE, plans } from '#tests/geometry/cutting/plans.ts';
-import { faultsOf, wordsOf } from '../checking.ts';
+import { faultsOf, textsOf, wordsOf } from '../checking.ts';
 import { DETAILS, PLANS, SHEET, namedSheet, names, planned } from '../samples.ts';
 
 const EDGE_WIDTH = 0.35;
@@ -18,16 +18,17 @@ function edgesOn({ marks }: Page): (readonly Point[])[] {
   );
 }
 
-/** The crosses on a page by the tiles that they join, as "A1·A2" stands above them; two of each name. */
+/** The crosses on a page by the tiles that they join, whose names stand beside them; two of each pair. */
 function crossesOn({ marks }: Page): Map<string, Point[]> {
   const crosses = new Map<string, Point[]>();
   for (const mark of marks) {
     if (mark.kind !== 'circle' || mark.ink !== 'graphite') continue;
     const { x, y } = mark.centre;
-    const name = marks.find(
-      (of) => of.kind === 'text' && of.text.includes('·') && Math.hypot(of.at.x - x, of.at.y - y) < 5,
-    );
-    if (name?.kind === 'text') crosses.set(name.text, [...(crosses.get(name.text) ?? []), mark.centre]);
+    const names = textsOf(marks)
+      .filter((of) => /^[A-Z]\d$/.test(of.text) && Math.hypot(of.at.x - x, of.at.y - y) < 6)
+      .map(({ text }) => text);
+    expect(names).toHaveLength(2);
+    crosses.set(names.join(), [...(crosses.get(names.join()) ?? []), mark.centre]);
   }
   for (const pair of crosses.values()) pair.sort((a, b) => a.x + a.y - b.x - b.y);
   return crosses;

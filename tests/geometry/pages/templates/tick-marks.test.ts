@@ -64,3 +64,13 @@ test('crowded ticks show the first, the last and every fifth number, none over a
 test('the drawing has y down', () => {
   expect(down({ x: 1, y: 2 })).toEqual({ x: 1, y: -2 });
 });
+
+test('no number stands beyond the middle, where it would seem to belong to the other surface', () => {
+  for (const heightMm of [4, 5, 6, 7, 8, 10]) {
+    const { outline, ticks } = bar(heightMm, 10);
+    for (const mark of tickMarks(ticks, outline, occupied()).texts) {
+      const { y, height } = textBox(mark);
+      expect(y + height / 2).toBeLessThan(heightMm / 2 + 0.6);
+    }
+  }
+});
