@@ -1,5 +1,5 @@
 import type { Knex } from 'knex';
-import { readSettings, type Settings } from '../config.ts';
+import { addressOf, defaultPort, readSettings, type Settings } from '../config.ts';
 import { alignDemoPassword, demoAddresses, hasDemoAccounts } from './demo-accounts.ts';
 import type { Holder } from './hold.mjs';
 import { startOwnDatabase } from './own-database.ts';
@@ -30,11 +30,16 @@ interface Prepared {
   announce(address: string): void;
 }
 
+/** Where people will reach the program, as far as it is known before it listens. */
+function expectedUrl({ publicUrl, host, port }: Settings): string {
+  return publicUrl ?? addressOf(host, port ?? defaultPort);
+}
+
 /** Fills an empty database. Returns whether the demo workshop is there now. */
-async function fill(knex: Knex, password: string): Promise<boolean> {
+async function fill(knex: Knex, password: string, publicUrl: string): Promise<boolean> {
   const { isEmpty, seedDemo } = await import('./demo/seed.ts');
   if (await isEmpty(knex)) {
-    await step('Filling in the demo workshop', () => seedDemo(knex, password));
+    await step('Filling in the demo workshop', () => seedDemo(knex, password, new Date(), publicUrl));
     return true;
   }
   if (!(await hasDemoAccounts(knex))) {
@@ -69,7 +74,7 @@ export async function prepare({ root, environment }: Launch, stops: Stops): Prom
   });
   stops.add(() => knex.destroy());
   const wanted = settings.demo ? (settings.demoPassword ?? kept('demo-password', readablePassword)) : null;
-  const demoPassword = wanted !== null && (await fill(knex, wanted)) ? wanted : null;
+  const demoPassword = wanted !== null && (await fill(knex, wanted, expectedUrl(settings))) ? wanted : null;
   own?.server.keep();
   return {
     settings,

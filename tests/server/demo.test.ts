@@ -8,9 +8,12 @@ import { camberAt, thicknessAt } from '#geometry/contour/thickness.ts';
 import { checkShape, outlineOf } from '#geometry/shapes/shape.ts';
 import { personByEmail } from '#server/account/store.ts';
 import { isPassword } from '#server/account/passwords.ts';
+import { isStale } from '#server/contracts/cut-sheets.ts';
 import { versionStatuses } from '#server/contracts/sections.ts';
+import { listCutSheets } from '#server/cut-sheets/list/store.ts';
 import { demoEmail, demoPeople, demoWorkshop } from '#server/start/demo/people.ts';
 import { demoSections } from '#server/start/demo/sections.ts';
+import { demoSheets } from '#server/start/demo/sheets.ts';
 import { freeForms } from '#server/start/demo/shapes.ts';
 import { isEmpty, seedDemo } from '#server/start/demo/seed.ts';
 import { createTestDatabase, type TestDatabase } from '#tests/database.ts';
@@ -47,7 +50,24 @@ async function contents({ knex }: TestDatabase) {
     .join('sections as s', 's.id', 'd.section_id')
     .select('s.name', 'd.version_number', 'd.file_name', 'd.checksum', 'd.downloaded_at')
     .orderBy(['s.name', 'd.downloaded_at']);
-  return { versions, sections, downloads };
+  const sheets: unknown[] = await knex('cut_sheet_versions as v')
+    .join('cut_sheets as s', 's.id', 'v.sheet_id')
+    .select(
+      's.name',
+      'v.number',
+      'v.status',
+      'v.errors',
+      'v.warnings',
+      'v.parts',
+      'v.note',
+      'v.created_at',
+      'v.status_at',
+    )
+    .orderBy(['s.name', 'v.number']);
+  const taken: unknown[] = await knex('cut_downloads')
+    .select('file_name', 'downloaded_at')
+    .orderBy('file_name');
+  return { versions, sections, downloads, sheets, taken };
 }
 
 describe('the demo workshop', () => {
@@ -87,13 +107,13 @@ describe('the demo workshop', () => {
   });
 
   it('happened before now, each section in the order told', async () => {
-    const { versions } = await contents(database);
-    const times = versions as { created_at: Date; status_at: Date | null }[];
+    const { versions, sheets } = await contents(database);
+    const times = [...versions, ...sheets] as { created_at: Date; status_at: Date | null }[];
     for (const { created_at, status_at } of times) {
       expect(created_at.getTime()).toBeLessThan(now.getTime());
       if (status_at) expect(status_at.getTime()).toBeGreaterThan(created_at.getTime());
     }
-    for (const { name, steps } of demoSections) {
+    for (const { name, steps } of [...demoSections, ...demoSheets]) {
       const order = steps.map(({ at }) => -at.daysAgo * 1440 + minutesOf(at.time));
       expect(order, name).toEqual([...order].sort((a, b) => a - b));
     }
@@ -130,6 +150,50 @@ describe('the demo workshop', () => {
     const file = cutFileOf(version, 'svg', parseExportOptions('svg', { chordMm: 220 }));
     expect(file.fileName).toBe(row!.file_name);
     expect(createHash('sha256').update(file.text).digest('hex')).toBe(row!.checksum);
+  });
+
+  it('has cut sheets in every state: in force, stale, by hand, of ribs, withdrawn, and one with errors', async () => {
+    const { knex } = database;
+    const workshop: { id: string } = await knex('workshops').first('id');
+    const { items } = await listCutSheets(knex, workshop.id, 'all', { sort: 'name', limit: 100 });
+    expect(items).toHaveLength(demoSheets.length);
+    const of = (name: string) => items.find((sheet) => sheet.name === name)!;
+    const inForce = of('Heron outer panel');
+    expect(inForce).toMatchObject({ releasedNumber: 2, latest: { parts: ['core'], errors: 0 } });
+    expect(inForce.latest.machine?.name).toBe('Long bench');
+    expect(isStale(inForce.latest)).toBe(false);
+    const old = of('Heron outer panel, first set').latest;
+    expect([old.status, old.root.status, old.root.inForce]).toEqual(['released', 'superseded', 3]);
+    expect(of('Heron winglet, by hand').latest).toMatchObject({
+      status: 'released',
+      parts: ['core', 'templates'],
+      machine: { kind: 'bow' },
+    });
+    expect(of('Curlew trainer ribs').latest).toMatchObject({ status: 'released', parts: ['ribs'] });
+    expect(of('Sedge rudder core').latest).toMatchObject({
+      status: 'withdrawn',
+      root: { status: 'withdrawn' },
+    });
+    const bittern = of('Bittern wing').latest;
+    expect([bittern.status, bittern.tip.status, bittern.errors > 0]).toEqual(['draft', 'draft', true]);
+    expect(await knex('cut_sheet_drafts')).toHaveLength(1);
+  });
+
+  it('has the files of every sheet that was released, and those that were taken are among them', async () => {
+    const { knex } = database;
+    const released: { sheet_id: string; number: number }[] = await knex('cut_sheet_versions').whereNot({
+      status: 'draft',
+    });
+    for (const { sheet_id, number } of released) {
+      const names: string[] = await knex('cut_files')
+        .where({ sheet_id, version_number: number })
+        .pluck('name');
+      expect(names).toEqual(expect.arrayContaining(['cut-sheet.pdf', 'root.dat', 'tip.dat']));
+    }
+    const taken: { checksum: string }[] = await knex('cut_downloads');
+    expect(taken.length).toBeGreaterThanOrEqual(6);
+    const stored = new Set<string>(await knex('cut_files').pluck('checksum'));
+    expect(taken.every(({ checksum }) => stored.has(checksum))).toBe(true);
   });
 
   it('is the same each time for the same moment', async () => {

@@ -7,7 +7,7 @@ export interface Moment {
   readonly time: `${number}:${number}`;
 }
 
-interface Signed {
+export interface Signed {
   readonly at: Moment;
   readonly by: 'owner' | 'designer' | 'builder' | 'technician';
 }
@@ -37,7 +37,7 @@ export interface History {
 }
 
 type By = Signed['by'];
-type Time = Moment['time'];
+export type Time = Moment['time'];
 
 export function save(daysAgo: number, time: Time, by: By, shape: Shape, note: string) {
   return { did: 'save', at: { daysAgo, time }, by, shape, note } as const;

@@ -1,19 +1,16 @@
-import { createHash } from 'node:crypto';
 import { type Knex } from 'knex';
-import { parseExportOptions } from '#geometry/formats/export.ts';
 import { hashPassword } from '#server/account/passwords.ts';
 import { createPerson, createWorkshop } from '#server/account/store.ts';
-import { keepDraft } from '#server/sections/drafts/store.ts';
-import { cutFileOf } from '#server/exports/cut-file.ts';
-import { recordDownload } from '#server/exports/store.ts';
 import { type Author } from '#server/sections/rules.ts';
-import { changeSection, createSection } from '#server/sections/store.ts';
-import { releaseVersion, withdrawVersion } from '#server/sections/versions/status-store.ts';
-import { findVersion, saveVersion } from '#server/sections/versions/store.ts';
 import { fillShop } from '#server/shop/defaults.ts';
-import { type History, type Moment, type Step } from './histories.ts';
+import { listItems, machines, materials } from '#server/shop/store.ts';
+import { type Moment, type Signed } from './histories.ts';
 import { demoEmail, demoPeople, demoWorkshop } from './people.ts';
+import { sectionLife } from './section-events.ts';
 import { demoSections } from './sections.ts';
+import { sheetLife } from './sheet-events.ts';
+import { type Ids } from './sheet-histories.ts';
+import { demoSheets } from './sheets.ts';
 import { demoShop } from './shop.ts';
 
 const DAY_MS = 86_400_000;
@@ -26,94 +23,70 @@ export async function isEmpty(knex: Knex): Promise<boolean> {
 }
 
 /**
- * Fills in the demo workshop: four people with one password, machines and materials, and sections with some weeks of
- * history before `now`.
- * All or nothing. The same `now` gives the same workshop but for its ids and the salt of the passwords.
+ * Fills in the demo workshop: four people with one password, machines and materials, sections and cut sheets with some weeks of history before `now`.
+ * All or nothing. The same `now` gives the same workshop but for its ids, the sums that name them, and the salt of the passwords.
+ * @param publicUrl the address under which people reach the program, for the code on printed sheets
  * @throws ER_DUP_ENTRY when the accounts are there already
  */
-export async function seedDemo(knex: Knex, password: string, now: Date = new Date()): Promise<void> {
+export async function seedDemo(
+  knex: Knex,
+  password: string,
+  now: Date = new Date(),
+  publicUrl = 'http://localhost:8000',
+): Promise<void> {
   const passwordHash = await hashPassword(password);
   await knex.transaction(async (transaction) => {
     const opened = timeOf(OPENING, now);
     const workshopId = await createWorkshop(transaction, { name: demoWorkshop, at: opened });
-    const ids = new Map<string, string>();
+    const people = new Map<string, { id: string; name: string }>();
     for (const { role, name } of demoPeople) {
       const person = { name, role, email: demoEmail(role), passwordHash, at: opened };
-      ids.set(role, await createPerson(transaction, workshopId, person));
+      people.set(role, { name, id: await createPerson(transaction, workshopId, person) });
     }
-    const builder = { workshopId, personId: ids.get('builder') ?? '', at: opened };
-    await fillShop(transaction, builder, demoShop);
-    const author = ({ by, at }: Step): Author => ({
+    const personOf = (role: string) => people.get(role) ?? { id: '', name: '' };
+    await fillShop(transaction, { workshopId, personId: personOf('builder').id, at: opened }, demoShop);
+    const author = ({ by, at }: Signed): Author => ({
       workshopId,
-      personId: ids.get(by) ?? '',
+      personId: personOf(by).id,
       at: timeOf(at, now),
     });
-    for (const history of demoSections) await live(transaction, history, author);
+    const names = ({ by }: Signed) => ({ person: personOf(by).name, workshop: demoWorkshop, publicUrl });
+    for (const event of await eventsOf(transaction, workshopId, author, names)) await event();
   });
 }
 
-/** Takes the steps of a section one after the other, through the same stores that people use. */
-async function live(
+type Event = () => Promise<void>;
+
+/** All that happened in the workshop, section by section and sheet by sheet, in the order of time. */
+async function eventsOf(
   db: Knex,
-  { name, purpose, steps }: History,
-  author: (step: Step) => Author,
-): Promise<void> {
-  const [first, ...later] = steps;
-  const { id } = await createSection(db, author(first), {
-    name,
-    purpose,
-    shape: first.shape,
-    note: first.note,
-  });
-  let newest = 1;
-  for (const step of later) {
-    await take(db, id, newest, step, author(step));
-    if (step.did === 'save') newest += 1;
+  workshopId: string,
+  author: (step: Signed) => Author,
+  names: (step: Signed) => { person: string; workshop: string; publicUrl: string },
+): Promise<Event[]> {
+  const sections = new Map<string, string>();
+  const ids = await idsOf(db, workshopId, sections);
+  const events: { readonly at: Date; readonly happens: Event }[] = [];
+  for (const history of demoSections) {
+    const live = sectionLife(db, history, (id) => sections.set(history.name, id));
+    for (const step of history.steps)
+      events.push({ at: author(step).at, happens: () => live(step, author(step)) });
   }
-}
-
-async function take(
-  db: Knex,
-  sectionId: string,
-  newest: number,
-  step: Step,
-  author: Author,
-): Promise<unknown> {
-  switch (step.did) {
-    case 'save':
-      return saveVersion(db, author, sectionId, { basedOn: newest, shape: step.shape, note: step.note });
-    case 'release':
-      return releaseVersion(db, author, sectionId, step.version, step.reason);
-    case 'withdraw':
-      return withdrawVersion(db, author, sectionId, step.version, step.reason);
-    case 'archive':
-      return changeSection(db, author, sectionId, { archived: true });
-    case 'take file':
-      return takeFile(db, sectionId, step, author);
-    case 'keep draft':
-      return keepDraft(db, author, sectionId, { basedOn: newest, shape: step.shape, chordMm: step.chordMm });
+  for (const history of demoSheets) {
+    const live = sheetLife(db, history, ids);
+    for (const step of history.steps)
+      events.push({ at: author(step).at, happens: () => live(step, author(step), names(step)) });
   }
+  return events.sort((a, b) => a.at.getTime() - b.at.getTime()).map(({ happens }) => happens);
 }
 
-/** The bytes are made as they were at that moment, so that their sum is that of the file then taken. */
-async function takeFile(
-  db: Knex,
-  sectionId: string,
-  { version: number, format, options: asked }: Step & { readonly did: 'take file' },
-  author: Author,
-): Promise<void> {
-  const version = await findVersion(db, author.workshopId, sectionId, number, 'all');
-  const options = parseExportOptions(format, asked);
-  const { fileName, text } = cutFileOf(version, format, options);
-  const checksum = createHash('sha256').update(text, 'utf8').digest('hex');
-  await recordDownload(db, author, {
-    sectionId,
-    versionNumber: number,
-    fileName,
-    format,
-    options,
-    checksum,
-  });
+async function idsOf(db: Knex, workshopId: string, sections: ReadonlyMap<string, string>): Promise<Ids> {
+  const byName = (items: readonly { readonly name: string; readonly id: string }[]) =>
+    new Map(items.map(({ name, id }) => [name, id]));
+  const machineIds = byName((await listItems(db, workshopId, machines)).items);
+  const materialIds = byName((await listItems(db, workshopId, materials)).items);
+  const lookIn = (ids: ReadonlyMap<string, string>) => (name: string) => ids.get(name) ?? '';
+  return { section: lookIn(sections), machine: lookIn(machineIds), material: lookIn(materialIds) };
 }
 
 function timeOf({ daysAgo, time }: Moment, now: Date): Date {
