@@ -1,7 +1,7 @@
 import { type SurfaceCurve } from '../shapes/outline.ts';
 import { safeguardedRoot } from './roots.ts';
 
-/** Steps in which a surface is searched for changes from convex to hollow. */
+/** Steps in which a surface is searched for changes from convex to hollow; its knots and their middles are looked at as well. */
 const STEPS = 256;
 const T_TOLERANCE = 1e-9;
 
@@ -38,7 +38,9 @@ function cornerSign(surface: SurfaceCurve, t: number): number {
 
 function scanOf(surface: SurfaceCurve): number[] {
   const steps = Array.from({ length: STEPS - 1 }, (_, i) => (i + 1) / STEPS);
-  return [...steps, ...surface.breaks].sort((a, b) => a - b);
+  const knots = surface.knots ?? [];
+  const middles = knots.map((t, i) => (t + (knots[i + 1] ?? 1)) / 2);
+  return [...steps, ...knots, ...middles, ...surface.breaks].sort((a, b) => a - b);
 }
 
 function bendSign(surface: SurfaceCurve, t: number): number {

@@ -46,6 +46,11 @@ export const measuredSchema = z
 
 export type MeasuredShape = Readonly<z.infer<typeof measuredSchema>>;
 
+/** "Measured contour, 159 points" */
+export function describeMeasured({ x }: MeasuredShape): string {
+  return `Measured contour, ${x.length} points`;
+}
+
 /** What is wrong with points whose number and ranges are in order. */
 function measuredFaults({ x, y }: MeasuredShape): ShapeIssue[] {
   if (x.length !== y.length) {
@@ -200,8 +205,11 @@ function surfaceOf(spline: ParametricSpline, nose: number, end: number): Surface
     const u = Math.sin(QUARTER * t);
     return t === 1 ? end : nose + run * u * (k + (1 - k) * u);
   };
+  const inside = Array.from(spline.knots).filter((s) => (s - nose) * (s - end) < 0);
+  const knots = inside.map((s) => parameterAt((s - nose) / run, k));
   return {
     breaks: [],
+    knots: run < 0 ? knots.reverse() : knots,
     at(t) {
       const { x, y } = spline.at(place(t));
       return { x, y };
@@ -223,6 +231,12 @@ function surfaceOf(spline: ParametricSpline, nose: number, end: number): Surface
       };
     },
   };
+}
+
+/** t at a share of the length: the positive root of k u + (1 − k) u² = share, written without cancellation. */
+function parameterAt(share: number, k: number): number {
+  const u = (2 * share) / (k + Math.sqrt(k * k + 4 * (1 - k) * share));
+  return Math.asin(Math.min(1, u)) / QUARTER;
 }
 
 const HALVINGS = 50;

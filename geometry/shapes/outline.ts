@@ -24,6 +24,11 @@ export interface SurfaceCurve {
    * largest just there (0.02° on 2412). Derivatives at a break are those of one of its sides.
    */
   readonly breaks: readonly number[];
+  /**
+   * Values of t, ascending and inside 0 … 1, at which one smooth piece goes over into the next, as the points of a contour kept as points;
+   * absent where the curve is one formula. Between two of them the curve may bend differently from what lies beside.
+   */
+  readonly knots?: readonly number[];
 }
 
 /** The outline of a section: two surfaces that share the nose point at t = 0. */

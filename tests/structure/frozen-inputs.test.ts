@@ -175,6 +175,8 @@ const calls: Readonly<Record<string, () => readonly unknown[]>> = {
   withThickness: () => [shape(), 0.1],
   withCamber: () => [shape(), 0.03],
   withTrailingEdgeGap: () => [shape(), 1, 200],
+  toMeasured: () => [measured()],
+  describeMeasured: () => [measured()],
   crossesItself: () => [[point(), { x: 0.4, y: 0 }, { x: 0.3, y: -0.05 }]],
   checkShape: () => [shape()],
   outlineOf: () => [shape()],

@@ -7,6 +7,7 @@ import { type CstShape, cstOutline } from '#geometry/shapes/cst.ts';
 import {
   MEASURED_LIMITS,
   type MeasuredShape,
+  describeMeasured,
   measuredOutline,
   measuredSchema,
 } from '#geometry/shapes/measured.ts';
@@ -40,10 +41,10 @@ describe('the outline of a measured contour', () => {
     expect(outline.upper.at(1)).toEqual({ x: smooth.x[0], y: smooth.y[0] });
     expect(outline.lower.at(1)).toEqual({ x: smooth.x.at(-1), y: smooth.y.at(-1) });
     expect(outline.sharp).toBe(false);
-    const chain = sampleCosine(outline, 2000);
+    const chain = sampleCosine(outline, 500);
     smooth.x.forEach((x, i) => {
       const nearest = Math.min(...chain.x.map((cx, k) => Math.hypot(cx - x, chain.y[k]! - smooth.y[i]!)));
-      expect(nearest).toBeLessThan(1e-3);
+      expect(nearest).toBeLessThan(2e-3);
     });
   });
 
@@ -53,6 +54,18 @@ describe('the outline of a measured contour', () => {
       expectDerivatives(surface, [0.011, 0.1, 0.3, 0.52, 0.8, 0.97], 2e-3);
       expectFinite(surface);
     }
+  });
+
+  test('its knots are the t of its points, ascending from the nose', () => {
+    const { upper, lower } = measuredOutline(smooth);
+    expect(upper.knots).toHaveLength(78);
+    expect(lower.knots).toHaveLength(78);
+    upper.knots!.forEach((t, i) => {
+      expect(Math.hypot(upper.at(t).x - smooth.x[78 - i]!, upper.at(t).y - smooth.y[78 - i]!)).toBeLessThan(
+        1e-12,
+      );
+      expect(t).toBeGreaterThan(upper.knots![i - 1] ?? 0);
+    });
   });
 
   test('curvature does not jump at a point', () => {
@@ -103,12 +116,28 @@ describe('the outline of a measured contour', () => {
     }
   });
 
+  test('the tolerance is kept on a contour whose points scatter', () => {
+    const scattered = pointsOf(outlineOf(naca4('2412')), 400);
+    const y = scattered.y.map((value, i) =>
+      Math.abs(value) > 0.002 ? value + ((i * 7919) % 13) * 1e-6 : value,
+    );
+    const outline = measuredOutline({ ...scattered, y });
+    for (const tolerance of [1e-4, 2e-5]) {
+      const error = largestChordalError(outline, sampleToTolerance(outline, tolerance));
+      expect(error).toBeLessThanOrEqual(1.001 * tolerance);
+    }
+  });
+
   test('it is sampled within a tolerance and fitted like any other outline', () => {
     const outline = measuredOutline(smooth);
     const chain = sampleToTolerance(outline, 1e-4);
     expect(largestChordalError(outline, chain)).toBeLessThanOrEqual(1e-4);
     expect(fitCst(outline, { orderUpper: 6, orderLower: 6 }).residual.largest).toBeLessThan(3e-4);
   });
+});
+
+test('a short name', () => {
+  expect(describeMeasured(smooth)).toBe('Measured contour, 159 points');
 });
 
 describe('what is refused', () => {
