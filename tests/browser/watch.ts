@@ -10,7 +10,7 @@ interface Expected {
 /** No session yet, and no unsaved work: both are questions that may be answered by no. */
 const ALWAYS: readonly Expected[] = [
   { method: 'GET', path: /^\/api\/me$/, status: 401 },
-  { method: 'GET', path: /^\/api\/sections\/[^/]+\/draft$/, status: 404 },
+  { method: 'GET', path: /^\/api\/(sections|cut-sheets)\/[^/]+\/draft$/, status: 404 },
 ];
 
 /** What went wrong on a page. */
