@@ -14,17 +14,27 @@ import { at } from '#geometry/cutting/arrays.ts';
 
 type Row = readonly [name: string, value: string];
 
+interface FiguresProps {
+  readonly model: PlanModel | null;
+  /** A newer plan is being worked out. */
+  readonly stale: boolean;
+  /** The form holds no plan: these are of the last one. */
+  readonly refused: boolean;
+}
+
 /** What the plan comes to. Times and masses are estimates: foam differs from block to block, and machines from their program. */
-export function Figures({ model, stale }: { model: PlanModel | null; stale: boolean }) {
+export function Figures({ model, stale, refused }: FiguresProps) {
   const units = useUnits();
   const rows = model ? rowsOf(model, units) : EMPTY;
   return (
     <section aria-label="Figures" aria-busy={stale}>
       <div className="mb-1 flex items-end justify-between gap-2 border-b border-rule pb-1 text-xs text-graphite">
         <h2 className="font-semibold tracking-wide uppercase">Figures</h2>
-        <span>estimates</span>
+        <span>{refused ? 'of the last plan' : 'estimates'}</span>
       </div>
-      <dl className={`grid grid-cols-[minmax(0,1fr)_auto] gap-x-3 gap-y-1 ${stale ? 'opacity-60' : ''}`}>
+      <dl
+        className={`grid grid-cols-[minmax(0,1fr)_auto] gap-x-3 gap-y-1 ${stale || refused ? 'text-graphite' : ''}`}
+      >
         {rows.map(([name, value]) => (
           <Fragment key={name}>
             <dt>{name}</dt>

@@ -19,7 +19,7 @@ const COLOURS: Readonly<Record<Severity, string>> = {
 
 /** What there is to know about the plan, gravest first; each is a button that shows the place it speaks of. */
 export function FindingsList({ findings, pending, stale, selected, onSelect }: FindingsListProps) {
-  const sorted = ORDER.flatMap((severity) => findings.filter((finding) => finding.severity === severity));
+  const groups = groupsOf(findings);
   return (
     <section aria-label="Findings" aria-busy={stale}>
       <div className="mb-1 flex items-end justify-between gap-2 border-b border-rule pb-1 text-xs text-graphite">
@@ -27,28 +27,71 @@ export function FindingsList({ findings, pending, stale, selected, onSelect }: F
         <span role="status">{pending ? 'working out…' : shortWords(findings)}</span>
       </div>
       {!pending && findings.length === 0 && <p className="text-spruce">Nothing speaks against this plan.</p>}
-      <ul className={`text-xs ${stale ? 'opacity-60' : ''}`}>
-        {sorted.map((finding, i) => (
-          <li key={`${finding.code} ${finding.path} ${i}`} className="border-b border-hair">
-            <button
-              type="button"
-              aria-pressed={sameFinding(finding, selected)}
-              onClick={() => onSelect(sameFinding(finding, selected) ? null : finding)}
-              className="grid w-full grid-cols-[1.25rem_minmax(0,1fr)] gap-x-1 py-1.5 pr-1 text-left hover:bg-sheet aria-pressed:bg-sheet pointer-coarse:min-h-11"
-            >
-              <SeverityGlyph severity={finding.severity} />
-              <span>
-                <span
-                  className={`font-semibold ${COLOURS[finding.severity]}`}
-                >{`${WORDS[finding.severity]}. `}</span>
-                {finding.message}
-              </span>
-            </button>
+      <ul className={`text-xs ${stale ? 'text-graphite' : ''}`}>
+        {groups.map(([first, ...more], i) => (
+          <li key={i} className="border-b border-hair">
+            <FindingButton finding={first} selected={selected} onSelect={onSelect} />
+            {more.length > 0 && (
+              <details className="pb-1.5 pl-6">
+                <summary className="py-0.5 text-graphite pointer-coarse:min-h-11">
+                  {`${more.length} more of the same`}
+                </summary>
+                {more.map((finding) => (
+                  <FindingButton
+                    key={finding.message}
+                    finding={finding}
+                    selected={selected}
+                    onSelect={onSelect}
+                  />
+                ))}
+              </details>
+            )}
           </li>
         ))}
       </ul>
     </section>
   );
+}
+
+interface FindingButtonProps extends Pick<FindingsListProps, 'selected' | 'onSelect'> {
+  readonly finding: Finding;
+}
+
+function FindingButton({ finding, selected, onSelect }: FindingButtonProps) {
+  const { severity, message } = finding;
+  const pressed = sameFinding(finding, selected);
+  return (
+    <button
+      type="button"
+      aria-pressed={pressed}
+      onClick={() => onSelect(pressed ? null : finding)}
+      className="grid w-full grid-cols-[1.25rem_minmax(0,1fr)] gap-x-1 py-1.5 pr-1 text-left hover:bg-sheet aria-pressed:bg-sheet pointer-coarse:min-h-11"
+    >
+      <SeverityGlyph severity={severity} />
+      <span>
+        <span className={`font-semibold ${COLOURS[severity]}`}>{`${WORDS[severity]}. `}</span>
+        {message}
+      </span>
+    </button>
+  );
+}
+
+type FindingGroup = readonly [Finding, ...Finding[]];
+
+/** The gravest first; those that say the same of several lines of the program stand together. */
+export function groupsOf(findings: readonly Finding[]): readonly FindingGroup[] {
+  const groups: [Finding, ...Finding[]][] = [];
+  for (const severity of ORDER) {
+    for (const finding of findings.filter((of) => of.severity === severity)) {
+      const group =
+        finding.at?.line === undefined
+          ? undefined
+          : groups.find(([first]) => first.at?.line !== undefined && first.code === finding.code);
+      if (group) group.push(finding);
+      else groups.push([finding]);
+    }
+  }
+  return groups;
 }
 
 export function sameFinding(a: Finding, b: Finding | null): boolean {

@@ -79,7 +79,7 @@ function OpenedPlanner({ sheet, base, opened, mirror, mayWrite }: OpenedPlannerP
             selected={selection.selected}
             onSelect={selection.select}
           />
-          <Figures model={model} stale={worked.stale || planner.refused !== null} />
+          <Figures model={model} stale={worked.stale} refused={planner.refused !== null} />
         </>
       }
     >

@@ -60,6 +60,7 @@ function Run({ cut, control, position, units }: RunProps) {
           />
         )}
       </div>
+      <p className="text-xs sm:hidden">{`${duration(player.seconds)} of ${duration(player.totalSeconds)}`}</p>
       <ProgramLine cut={cut} position={position} units={units} />
     </>
   );

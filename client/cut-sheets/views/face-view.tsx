@@ -27,10 +27,9 @@ export const FaceView = memo(function FaceView(props: FaceViewProps) {
   const { model, scene, end, box, place, units } = props;
   const faces = facesAt(scene, end);
   const { block } = scene;
-  const left = block ? place.toX(0) : place.toX(Math.min(...faces.map((face) => boxOf(face.contour).minX)));
-  const top = block
-    ? place.toY(block.heightMm)
-    : place.toY(Math.max(...faces.map((face) => boxOf(face.contour).maxY)));
+  const { minX, maxY } = boxOf(...faces.map(({ contour }) => contour));
+  const left = place.toX(Math.min(minX, block ? 0 : minX));
+  const top = place.toY(Math.max(maxY, block?.heightMm ?? maxY));
   return (
     <g>
       <ViewTitle x={left} y={top - 8} text={faceWords(model, end, units)} room={box.width - 30} />
@@ -138,7 +137,14 @@ function FaceLines({ face, place, hasSkin, showsPath }: FaceLinesProps) {
 function FeatureNumbers({ face, place }: { face: SceneFace; place: Place }) {
   const bottom = place.toY(boxOf(face.contour).minY) + 14;
   return (
-    <g className="fill-graphite" fontSize={10} textAnchor="middle">
+    <g
+      className="fill-graphite stroke-sheet"
+      fontSize={10}
+      textAnchor="middle"
+      paintOrder="stroke"
+      strokeWidth={4}
+      strokeLinejoin="round"
+    >
       {face.features.map(({ index, outline }) => {
         const { minX, maxX } = boxOf(outline);
         return (
