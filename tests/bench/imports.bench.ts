@@ -7,7 +7,6 @@ import { IMPORT_LIMITS, ImportRefusal } from '#geometry/imports/refusal.ts';
 import { measuredOutline } from '#geometry/shapes/measured.ts';
 import { outlineOf } from '#geometry/shapes/shape.ts';
 import { naca4 } from '#tests/geometry/shapes/samples.ts';
-import { pointsOf } from '#tests/geometry/imports/files.ts';
 import { type Bench, type Figure } from './figures.ts';
 
 /** Every file must be read or refused within this time. */
@@ -34,10 +33,12 @@ const { bytes: most, points } = IMPORT_LIMITS;
 const fill = (piece: string, start = '') =>
   start + piece.repeat(Math.floor((most - start.length) / piece.length));
 const outline = outlineOf(naca4('2412'));
-const list = (perSurface: number) =>
-  pointsOf(outline, perSurface)
-    .map(({ x, y }) => `${x} ${y}`)
-    .join('\n');
+const list = (perSurface: number) => {
+  const steps = Array.from({ length: perSurface }, (_, i) => i / (perSurface - 1));
+  const upper = steps.toReversed().map((t) => outline.upper.at(t));
+  const round = [...upper, ...steps.slice(1).map((t) => outline.lower.at(t))];
+  return round.map(({ x, y }) => `${x} ${y}`).join('\n');
+};
 const entities = '0\nSECTION\n2\nENTITIES\n';
 const zigzag = Array.from({ length: points.max }, (_, i) => `${(i * 7919) % 10007} ${(i * 104729) % 1009}`);
 const lines = Array.from({ length: points.max / 2 }, (_, i) => {
