@@ -66,9 +66,22 @@ export function segmentDistance(
   bx: number,
   by: number,
 ): number {
+  return Math.sqrt(squareDistance(px, py, ax, ay, bx, by));
+}
+
+/** The square of the distance of (px, py) from the segment between two points. */
+export function squareDistance(
+  px: number,
+  py: number,
+  ax: number,
+  ay: number,
+  bx: number,
+  by: number,
+): number {
   const dx = bx - ax;
   const dy = by - ay;
   const square = dx * dx + dy * dy;
   const share = square > 0 ? Math.min(1, Math.max(0, ((px - ax) * dx + (py - ay) * dy) / square)) : 0;
-  return Math.hypot(px - ax - share * dx, py - ay - share * dy);
+  const [x, y] = [px - ax - share * dx, py - ay - share * dy];
+  return x * x + y * y;
 }

@@ -1,4 +1,4 @@
-import { type Polyline, at, between, segmentDistance } from './arrays.ts';
+import { type Polyline, at, between, squareDistance } from './arrays.ts';
 import { type ExpectedCore, inMouth } from './expected-core.ts';
 
 /** The largest difference between the core that the program cuts and the planned one in one plane across the span. */
@@ -59,20 +59,27 @@ function nearestOn(
     const [a, b] = [at(x, i - 1), at(x, i)];
     for (let s = strip(Math.min(a, b) - reach); s <= strip(Math.max(a, b) + reach); s++) strips[s]?.push(i);
   }
-  const all = Array.from({ length: x.length - 1 }, (_, i) => i + 1);
   const search = (px: number, py: number, moves: readonly number[]) => {
-    let [distance, move] = [Infinity, 0];
+    let [least, move] = [Infinity, 0];
+    let square = Infinity;
     for (const i of moves) {
-      const ay = at(y, i - 1);
-      const by = at(y, i);
-      if (py - Math.max(ay, by) > distance || Math.min(ay, by) - py > distance) continue;
-      const d = segmentDistance(px, py, at(x, i - 1), ay, at(x, i), by);
-      if (d < distance) [distance, move] = [d, i];
+      const [ax, ay, bx, by] = [at(x, i - 1), at(y, i - 1), at(x, i), at(y, i)];
+      if (py - Math.max(ay, by) > least || Math.min(ay, by) - py > least) continue;
+      const d = squareDistance(px, py, ax, ay, bx, by);
+      if (d < square) {
+        [square, move] = [d, i];
+        least = Math.sqrt(d);
+      }
     }
-    return { distance, move };
+    return { distance: least, move };
   };
   return (px, py) => {
     const near = search(px, py, strips[strip(px)] ?? []);
-    return near.distance <= reach ? near : search(px, py, all);
+    if (near.distance <= reach) return near;
+    return search(
+      px,
+      py,
+      Array.from({ length: x.length - 1 }, (_, i) => i + 1),
+    );
   };
 }

@@ -157,9 +157,9 @@ test('random panels with a tube, a slot and a hinge: what has no error cuts as p
         expect(core!.cut!.simulation.largestDeviationMm).toBeLessThanOrEqual(0.02);
       },
     ),
-    { numRuns: 40, seed: 41 },
+    { numRuns: 16 },
   );
-  expect(clean).toBeGreaterThan(20);
+  expect(clean).toBeGreaterThan(7);
 }, 60_000);
 
 test('two spars that pass through one another between the ends are a finding', () => {

@@ -187,6 +187,7 @@ function facesOfMoves() {
 /** Given numbers and text alone. */
 export const cuttingCallsWithoutObjects = [
   'segmentDistance',
+  'squareDistance',
   'number',
   'length',
   'station',

@@ -4,12 +4,12 @@ import { type Outline } from '#geometry/shapes/outline.ts';
 /** Distance of a point from a polyline, every segment tried. */
 export function distanceTo(line: Polyline, x: number, y: number, closed = true): number {
   let least = Infinity;
-  for (let i = closed ? 0 : 1; i < line.x.length; i++) {
-    const k = (i + line.x.length - 1) % line.x.length;
-    least = Math.min(
-      least,
-      segmentDistance(x, y, at(line.x, k), at(line.y, k), at(line.x, i), at(line.y, i)),
-    );
+  const count = line.x.length;
+  for (let i = closed ? 0 : 1, k = closed ? count - 1 : 0; i < count; k = i++) {
+    const [ax, bx] = [at(line.x, k), at(line.x, i)];
+    // Farther along x alone.
+    if (Math.min(ax, bx) - x >= least || x - Math.max(ax, bx) >= least) continue;
+    least = Math.min(least, segmentDistance(x, y, ax, at(line.y, k), bx, at(line.y, i)));
   }
   return least;
 }

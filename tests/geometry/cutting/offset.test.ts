@@ -70,30 +70,25 @@ test('closed 0012 at 200 mm: area and perimeter, and those of the path 0.5 mm ou
 });
 
 test('our path and an independent polygon offset differ by at most 0.01 mm, outward and inward', () => {
-  for (const [digits, edge] of [
-    ['0012', 'closed'],
-    ['2412', 'closed'],
-    ['4415', 'closed'],
-    ['2412', 'open'],
+  for (const [digits, edge, kerf, skin] of [
+    ['0012', 'closed', 0.8, 0],
+    ['2412', 'closed', 1.6, 0.3],
+    ['4415', 'closed', 0.4, 1],
+    ['4415', 'closed', 0.8, 0],
+    ['2412', 'open', 0.8, 0],
+    ['2412', 'open', 0.4, 1],
+    ['0012', 'closed', 0, 1.5],
   ] as const) {
-    for (const [kerf, skin] of [
-      [0.8, 0],
-      [1.6, 0.3],
-      [0.4, 1],
-      [0, 1.5],
-    ] as const) {
-      const plan = planWith({
-        ...prismOf(section(digits, edge), 200),
-        kerfMm: { root: kerf, tip: kerf },
-        allowances: { upperMm: skin, lowerMm: skin },
-        cut: fineCut,
-      });
-      const path = offsetInStep(buildPanel(plan).chain.root, kerf / 2)!;
-      const by = kerf / 2 - skin;
-      const other = independent(fine(outlineOf(section(digits, edge)), 200, 900), by);
-      expect(farthest(other, path)).toBeLessThanOrEqual(0.01);
-      expect(farthest(path, other)).toBeLessThanOrEqual(0.01);
-    }
+    const plan = planWith({
+      ...prismOf(section(digits, edge), 200),
+      kerfMm: { root: kerf, tip: kerf },
+      allowances: { upperMm: skin, lowerMm: skin },
+      cut: fineCut,
+    });
+    const path = offsetInStep(buildPanel(plan).chain.root, kerf / 2)!;
+    const other = independent(fine(outlineOf(section(digits, edge)), 200, 450), kerf / 2 - skin);
+    expect(farthest(other, path)).toBeLessThanOrEqual(0.01);
+    expect(farthest(path, other)).toBeLessThanOrEqual(0.01);
   }
 }, 60_000);
 
@@ -105,7 +100,7 @@ test('each point of the path has the wanted distance from the true contour withi
         const path = offsetInStep(panel.chain[end], plan.kerfMm[end] / 2);
         if (!path) continue;
         const placedFrom = (points: readonly Point[]) => polylineOf(points.map((p) => panel[end].toPanel(p)));
-        const along = Array.from({ length: 2401 }, (_, i) => i / 2400);
+        const along = Array.from({ length: 1201 }, (_, i) => i / 1200);
         const surfaces = {
           [PART.upper]: placedFrom(along.map((t) => panel[end].outline.upper.at(t))),
           [PART.lower]: placedFrom(along.map((t) => panel[end].outline.lower.at(t))),
@@ -131,7 +126,7 @@ test('each point of the path has the wanted distance from the true contour withi
         });
       }
     }),
-    { numRuns: 12, seed: 21 },
+    { numRuns: 6 },
   );
 }, 60_000);
 
@@ -145,7 +140,7 @@ test('the number of points stays and the path does not cross itself', () => {
         expect(crossingsByHand(path)).toBe(0);
       }
     }),
-    { numRuns: 40, seed: 22 },
+    { numRuns: 15 },
   );
 }, 60_000);
 

@@ -107,7 +107,7 @@ test('random strips: clear of the foam while travelling, simulated as expected, 
         if (crosses) expect(Math.min(last.left.y, node.left.y)).toBeGreaterThanOrEqual(20 + 150 + 10);
       });
     }),
-    { numRuns: 40 },
+    { numRuns: 15 },
   );
 });
 
