@@ -4,11 +4,10 @@ import { type Browser, type BrowserContext, chromium, type Page } from 'playwrig
 import { pino } from 'pino';
 import { createApp } from '#server/app.ts';
 import { demoEmail } from '#server/start/demo/people.ts';
-import { seedDemo } from '#server/start/demo/seed.ts';
-import { createTestDatabase, type TestDatabase } from '#tests/database.ts';
+import { type TestDatabase } from '#tests/database.ts';
+import { createDemoDatabase, demoPassword } from './demo-database.ts';
 import { type Watch, watch } from './watch.ts';
 
-const password = 'marsh-reed-heron-7';
 export type DemoRole = 'owner' | 'designer' | 'builder' | 'technician';
 
 /** The whole application with the demo workshop in a database of its own, and a browser to use it with. */
@@ -45,8 +44,7 @@ export interface Visit {
 
 /** Starts the application and the browser; TEST_CHROMIUM and TEST_CLIENT come from the project's set-up. */
 export async function startApp(): Promise<TestApp> {
-  const database = await createTestDatabase();
-  await seedDemo(database.knex, password);
+  const database = await createDemoDatabase();
   const server = createServer();
   await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve));
   const origin = `http://127.0.0.1:${String((server.address() as AddressInfo).port)}`;
@@ -144,7 +142,7 @@ async function openLibrary(page: Page, role: DemoRole): Promise<void> {
 export async function signIn(page: Page, role: DemoRole): Promise<void> {
   await page.goto('/sign-in');
   await page.getByLabel('E-mail').fill(demoEmail(role));
-  await page.getByLabel('Password', { exact: true }).fill(password);
+  await page.getByLabel('Password', { exact: true }).fill(demoPassword);
   await page.getByRole('button', { name: 'Sign in' }).click();
   await page.waitForURL((url) => url.pathname === (role === 'technician' ? '/cutting-list' : '/'));
   await openLibrary(page, role);
