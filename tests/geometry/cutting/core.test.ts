@@ -1,5 +1,6 @@
+import { EndType, JoinType, inflatePathsD } from 'clipper2-ts';
 import { expect, test } from 'vitest';
-import { areaOf, at } from '#geometry/cutting/arrays.ts';
+import { type Polyline, areaOf, at, polylineOf } from '#geometry/cutting/arrays.ts';
 import { buildCore } from '#geometry/cutting/core.ts';
 import { buildPanel, ruledVolume } from '#geometry/cutting/panel.ts';
 import { type Plan } from '#geometry/cutting/plan.ts';
@@ -63,6 +64,30 @@ test('the wire keeps half the kerf of its end outside the core', () => {
     core[end].path.x.forEach((x, i) =>
       expect(distanceTo(core[end].core, x, at(core[end].path.y, i))).toBeGreaterThan(half - 0.005),
     );
+  }
+});
+
+test('an independent polygon offset, shrunk by the skins and grown round by half the kerf, gives the same path', () => {
+  const moved = (line: Polyline, by: number) => {
+    const path = Array.from(line.x, (x, i) => ({ x, y: at(line.y, i) }));
+    const pieces = inflatePathsD([path], by, JoinType.Round, EndType.Polygon, 2, 6, 0.002).map(polylineOf);
+    return pieces.reduce((a, b) => (Math.abs(areaOf(a)) > Math.abs(areaOf(b)) ? a : b));
+  };
+  for (const [digits, skin, kerf] of [
+    ['0012', 1, 0.8],
+    ['4412', 0.5, 1.6],
+    ['0006', 1.5, 1.2],
+  ] as const) {
+    const plan = planWith({
+      ...prismOf(section(digits), 200),
+      allowances: { upperMm: skin, lowerMm: skin },
+      kerfMm: { root: kerf, tip: kerf },
+      cut: { toleranceMm: 0.002 },
+    });
+    const { core } = coreOf(plan);
+    const other = moved(moved(fine(outlineOf(section(digits)), 200, 450), -skin), kerf / 2);
+    expect(farthest(other, core.root.path)).toBeLessThanOrEqual(0.01);
+    expect(farthest(core.root.path, other)).toBeLessThanOrEqual(0.01);
   }
 });
 
