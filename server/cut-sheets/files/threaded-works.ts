@@ -1,6 +1,6 @@
 import { Worker } from 'node:worker_threads';
 import { Refusal, refuseField } from '#server/refusal.ts';
-import { type SheetWorks, worksInPlace } from './works.ts';
+import { type SheetWorks } from './works.ts';
 
 /** What the thread is asked, and what it answers. */
 export interface Job {
@@ -20,7 +20,7 @@ export interface ThreadOptions {
 
 const usual: ThreadOptions = {
   script: new URL('./worker.mjs', import.meta.url),
-  timeLimitMs: 20_000,
+  timeLimitMs: 45_000,
   mostWaiting: 40,
 };
 const RETRY_AFTER_SECONDS = 5;
@@ -75,7 +75,9 @@ export function threadedWorks(options: Partial<ThreadOptions> = {}): SheetWorks 
   };
 }
 
-function inPlace({ work, given }: Job): Promise<unknown> {
+/** Loaded only then: geometry and fonts are large, and the server starts without them. */
+async function inPlace({ work, given }: Job): Promise<unknown> {
+  const { worksInPlace } = await import('./works.ts');
   return (worksInPlace[work] as (given: unknown) => Promise<unknown>)(given);
 }
 
