@@ -11,6 +11,8 @@ export interface LinearDimension {
   /** Where the dimension line stands: its y when level, its x when upright. */
   readonly at: number;
   readonly text: string;
+  /** Where a text stands that does not fit between the arrows: beyond the right or lower end, or before the other one. */
+  readonly outside?: 'beyond' | 'before';
 }
 
 /** Closed, filled arrowheads of about 15° (ISO 129-1), mm. */
@@ -23,7 +25,7 @@ const CLEAR = 0.8;
 
 /**
  * A dimension after ISO 129-1: extension lines, dimension line with arrowheads, the text in a gap of the line. Where the text does not
- * fit between the arrows they point inwards from outside, and the text stands beyond the right or lower one.
+ * fit between the arrows they point inwards from outside, and the text stands beyond one of them.
  */
 export function dimension(of: LinearDimension): Mark[] {
   const level = of.direction === 'level';
@@ -67,11 +69,12 @@ export function dimension(of: LinearDimension): Mark[] {
       words(middle),
     ];
   }
+  const aside = TAIL + CLEAR + width / 2;
   return [
     ...extensions,
     stroke(low - TAIL, of.at, high + TAIL, of.at),
     arrow(low, 1),
     arrow(high, -1),
-    words(high + TAIL + CLEAR + width / 2),
+    words(of.outside === 'before' ? low - aside : high + aside),
   ];
 }

@@ -6,9 +6,9 @@ import { type CorePlan } from '../../cutting/planner.ts';
 import { fixed } from '../../formats/text.ts';
 import { type Point } from '../../point.ts';
 import { dimension } from '../dimension.ts';
-import { LETTER, textBox } from '../lettering.ts';
+import { LETTER, fittedText, textBox } from '../lettering.ts';
 import { WIDTH, area, line, outlined, segment, text } from '../marks.ts';
-import { occupied } from '../occupied.ts';
+import { type Occupied, occupied } from '../occupied.ts';
 import { type Mark, type Rect } from '../page.ts';
 import { type View, scaleText, viewOf } from '../view.ts';
 import { balloon } from './planform.ts';
@@ -67,13 +67,12 @@ export function faceMarks(plan: CorePlan, end: End, room: Rect, scale: number): 
   };
   const view = viewOf(faceExtent(plan, end), inner, scale);
   const cores = coresAt(plan, end);
+  const title = fittedText(`${nameOf(plan, end)} ${scaleText(scale)}`, room.width - 6, LETTER.title);
   return [
-    text({ x: room.x + 3, y: room.y + 6.5 }, `${nameOf(plan, end)} ${scaleText(scale)}`, LETTER.title, {
-      weight: 600,
-    }),
+    text({ x: room.x + 3, y: room.y + 6.5 }, title.text, title.heightMm, { weight: 600 }),
     ...cores.flatMap((of) => coreMarks(plan, of, view)),
     ...blockMarks(plan, view),
-    ...cores.flatMap(({ index }) => wireMarks(wireAt(plan, end, index), view)),
+    ...wiresMarks(plan, end, cores, view),
     ...balloons(plan, end, view, room),
     ...dimensions(plan, cores[0], view),
   ];
@@ -145,15 +144,26 @@ function featureMarks(feature: PlacedFeature, { end, place }: CoreInFace, view: 
 
 const ARROW = { length: 3, halfWidth: 0.8 } as const;
 
-function wireMarks(wire: WireInFace | null, view: View): Mark[] {
-  if (!wire) return [];
+/** The wires of all cores; where two begin so close that their words would overlap, only the first has them. */
+function wiresMarks(plan: CorePlan, end: End, cores: readonly CoreInFace[], view: View): Mark[] {
+  const taken = occupied();
+  return cores.flatMap(({ index }) => {
+    const wire = wireAt(plan, end, index);
+    return wire ? wireMarks(wire, view, taken) : [];
+  });
+}
+
+function wireMarks(wire: WireInFace, view: View, taken: Occupied): Mark[] {
   const points = onPage(wire.line, view);
   const first = points[0];
   if (!first) return [];
+  const words = text({ x: first.x + 1, y: first.y - 1.2 }, 'wire in', LETTER.small, { ink: 'wire' });
+  const free = taken.isFree(textBox(words));
+  if (free) taken.take(textBox(words));
   return [
     line(points, { ink: 'wire' }),
     ...wire.arrows.flatMap((i) => arrowBetween(points[i - 1], points[i])),
-    text({ x: first.x + 1, y: first.y - 1.2 }, 'wire in', LETTER.small, { ink: 'wire' }),
+    ...(free ? [words] : []),
   ];
 }
 

@@ -15,6 +15,8 @@ import { type View, scaleText, viewOf } from '../view.ts';
 export const PLANFORM_INSET = { left: 32, right: 38, top: 16, bottom: 16 } as const;
 /** From one dimension line to the next, mm. */
 const LEVEL = 7;
+/** What a text beyond the end of a dimension and the span's dimension below it need, mm. */
+const OUTSIDE_TEXT_MM = 27;
 /** So many features are dimensioned; the others stand in the table. */
 const DIMENSIONED = 2;
 
@@ -45,15 +47,15 @@ export function planformMarks(plan: CorePlan, room: Rect, scale: number): Mark[]
   };
   const view = viewOf(planformExtent(plan), inner, scale);
   const taken = occupied();
-  const washout = plan.plan.panel.washoutDeg;
-  const title = `Planform ${scaleText(scale)}${washout === 0 ? '' : `, washout ${Number(washout.toFixed(2))}°`}`;
+  const washout = Number(plan.plan.panel.washoutDeg.toFixed(2));
+  const title = `Planform ${scaleText(scale)}${washout === 0 ? '' : `, washout ${washout}°`}`;
   return [
     text({ x: room.x + 3, y: room.y + 6.5 }, title, LETTER.title, { weight: 600 }),
     ...outlines(plan, view),
     ...plan.features.flatMap((feature) => featureLines(feature, plan.plan.panel.spanMm, view)),
     ...ribLines(plan, view, taken),
     ...plan.features.flatMap((feature) => balloonOn(feature, plan.plan.panel.spanMm, view, taken)),
-    ...dimensions(plan, view),
+    ...dimensions(plan, view, room.y + room.height - OUTSIDE_TEXT_MM),
   ];
 }
 
@@ -162,7 +164,8 @@ function ribLines(plan: CorePlan, view: View, taken: Occupied): Mark[] {
   });
 }
 
-function dimensions(plan: CorePlan, view: View): Mark[] {
+/** @param floor an upright dimension that ends below has no room for a text beyond its lower end */
+function dimensions(plan: CorePlan, view: View, floor: number): Mark[] {
   const { panel } = plan.core;
   const { spanMm } = plan.plan.panel;
   const noses = { root: noseOf(panel.root), tip: noseOf(panel.tip) };
@@ -181,6 +184,7 @@ function dimensions(plan: CorePlan, view: View): Mark[] {
       direction: 'upright',
       at: faces[end] + (end === 'root' ? -1 : 1) * level * LEVEL,
       text: fixed(length, 1),
+      outside: Math.max(at(view, spanAt, from).y, at(view, spanAt, to).y) > floor ? 'before' : 'beyond',
     });
   const places = plan.features.slice(0, DIMENSIONED);
   const along = ENDS.flatMap((end) => {
@@ -198,10 +202,19 @@ function dimensions(plan: CorePlan, view: View): Mark[] {
     return [...features, ...chord];
   });
   const sweep = noses.tip - noses.root;
-  const lowest = Math.max(at(view, 0, tails.root).y, at(view, spanMm, tails.tip).y);
-  return [
+  const uprights = [
     ...along,
     ...(Math.abs(sweep) < 0.05 ? [] : upright('tip', spanMm, [noses.root, noses.tip], places.length + 2)),
+  ];
+  // Below the panel, and below the texts that did not fit between their arrows.
+  const texts = uprights.flatMap((of) => (of.kind === 'text' ? [textBox(of)] : []));
+  const lowest = Math.max(
+    at(view, 0, tails.root).y,
+    at(view, spanMm, tails.tip).y,
+    ...texts.map(({ y, height }) => y + height - 4),
+  );
+  return [
+    ...uprights,
     ...dimension({
       from: at(view, 0, tails.root),
       to: at(view, spanMm, tails.tip),

@@ -44,6 +44,9 @@ test('where there is no room the text stands beyond arrows that point inwards', 
   expect(box.x).toBeGreaterThan(18 + 5);
   const arrows = marks.flatMap((of) => (of.kind === 'area' ? [boxOfMark(of)] : []));
   expect(arrows.map(({ x }) => x)).toEqual([7.5, 18]);
+  const before = dimension({ ...WIDE, to: { x: 18, y: 40 }, text: '8.0', outside: 'before' });
+  const other = textBox(textsOf(before)[0]!);
+  expect(other.x + other.width).toBeLessThan(10 - 5);
 });
 
 test('an upright dimension is read from the right and above the line is the left', () => {

@@ -83,6 +83,32 @@ test.each(HOSTILE_NAMES)('a name as nobody should give it: %s', (name) => {
     expect(faultsOf(page)).toEqual([]);
 });
 
+const extreme = (root: number, tip: number, spanMm: number, sweepMm: number, pair = false) =>
+  planWith({
+    panel: {
+      root: { shape: PLAN.panel.root.shape, chordMm: root },
+      tip: { shape: PLAN.panel.tip.shape, chordMm: tip },
+      spanMm,
+      sweepMm,
+    },
+    allowances: { upperMm: 0, lowerMm: 0 },
+    features: [],
+    block: { lengthMm: 75, heightMm: 64, spanMm, pair },
+    machine: { towerDistanceMm: spanMm + 400 },
+    template: TEMPLATE,
+  });
+
+test.each([
+  ['a chord of 10 mm', extreme(10, 10, 2, 0)],
+  ['a tip swept far away', extreme(60, 12, 100, -3000)],
+  ['a long narrow panel', extreme(20, 40, 4000, 10)],
+  ['two thin cores in a small block', extreme(60, 38, 128, 0, true)],
+  ['two cores whose wires begin close together', extreme(60, 120, 156, 0, true)],
+])('%s: nothing overlaps', (_, of) => {
+  const { plan, findings } = planned(of);
+  for (const page of cutSheetPages(plan, findings, SHEET, DETAILS)) expect(faultsOf(page)).toEqual([]);
+});
+
 test('ordinary plans: nothing overlaps, and the same plan gives the same pages', () => {
   fc.assert(
     fc.property(plans, names, (of, name) => {
