@@ -1,7 +1,9 @@
 import { createHash } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { parseExportOptions } from '#geometry/formats/export.ts';
+import { cuttingList } from '#server/cutting-list/store.ts';
 import { cutFileOf } from '#server/exports/cut-file.ts';
+import { listInspections } from '#server/inspections/store.ts';
 import { findVersion } from '#server/sections/versions/store.ts';
 import { measure } from '#geometry/contour/measures.ts';
 import { camberAt, thicknessAt } from '#geometry/contour/thickness.ts';
@@ -194,6 +196,44 @@ describe('the demo workshop', () => {
     expect(taken.length).toBeGreaterThanOrEqual(6);
     const stored = new Set<string>(await knex('cut_files').pluck('checksum'));
     expect(taken.every(({ checksum }) => stored.has(checksum))).toBe(true);
+  });
+
+  it('has a cutting list with work begun, work left, and what was scrapped with its reason', async () => {
+    const { knex } = database;
+    const [{ id } = { id: '' }] = (await knex('workshops').select('id')) as { id: string }[];
+    const { items } = await cuttingList(knex, id);
+    const told = items.map(({ sheetName, part, wanted, done, scrapped, started }) =>
+      [sheetName, part, wanted, done, scrapped, started ? 'begun' : 'waits'].join(', '),
+    );
+    expect(told).toEqual([
+      'Heron winglet, by hand, core, 2, 1, 1, waits',
+      'Curlew trainer ribs, ribs, 2, 1, 0, waits',
+      'Heron outer panel, core, 4, 2, 1, begun',
+    ]);
+    const scrapped: string[] = await knex('cut_logs').where({ action: 'scrapped' }).pluck('reason');
+    expect(scrapped).toHaveLength(2);
+    const times: Date[] = [
+      ...(await knex('cut_logs').pluck('happened_at')),
+      ...(await knex('inspections').pluck('happened_at')),
+    ];
+    expect(times.every((time) => time < now)).toBe(true);
+  });
+
+  it('has parts within and out of tolerance, one of these answered and one not', async () => {
+    const { knex } = database;
+    const [{ id } = { id: '' }] = (await knex('workshops').select('id')) as { id: string }[];
+    const { items } = await listInspections(knex, id, 'released', { limit: 30 });
+    const told = items.map(({ mark, within, answer }) => [mark, within, answer?.decision ?? null]);
+    expect(told).toEqual([
+      ['Second set, right', false, null],
+      ['Second set, left', true, null],
+      ['Winglet 1', true, null],
+      ['First set, right', false, 'accepted'],
+      ['First set, left', true, null],
+    ]);
+    expect(items[0]?.measurements.filter(({ within }) => !within)).toMatchObject([
+      { end: 'tip', station: 0.7 },
+    ]);
   });
 
   it('is the same each time for the same moment', async () => {

@@ -4,6 +4,8 @@ import { createPerson, createWorkshop } from '#server/account/store.ts';
 import { type Author } from '#server/sections/rules.ts';
 import { fillShop } from '#server/shop/defaults.ts';
 import { listItems, machines, materials } from '#server/shop/store.ts';
+import { demoFloor } from './floor.ts';
+import { floorStep } from './floor-events.ts';
 import { type Moment, type Signed } from './histories.ts';
 import { demoEmail, demoPeople, demoWorkshop } from './people.ts';
 import { sectionLife } from './section-events.ts';
@@ -23,7 +25,8 @@ export async function isEmpty(knex: Knex): Promise<boolean> {
 }
 
 /**
- * Fills in the demo workshop: four people with one password, machines and materials, sections and cut sheets with some weeks of history before `now`.
+ * Fills in the demo workshop: four people with one password, machines and materials, sections and cut sheets with some weeks of history before `now`,
+ * and what was cut and measured of them.
  * All or nothing. The same `now` gives the same workshop but for its ids, the sums that name them, and the salt of the passwords.
  * @param publicUrl the address under which people reach the program, for the code on printed sheets
  * @throws ER_DUP_ENTRY when the accounts are there already
@@ -57,7 +60,7 @@ export async function seedDemo(
 
 type Event = () => Promise<void>;
 
-/** All that happened in the workshop, section by section and sheet by sheet, in the order of time. */
+/** All that happened in the workshop, at the desks and on the floor, in the order of time. */
 async function eventsOf(
   db: Knex,
   workshopId: string,
@@ -76,6 +79,9 @@ async function eventsOf(
     const live = sheetLife(db, history, ids);
     for (const step of history.steps)
       events.push({ at: author(step).at, happens: () => live(step, author(step), names(step)) });
+  }
+  for (const step of demoFloor) {
+    events.push({ at: author(step).at, happens: () => floorStep(db, ids, step, author(step)) });
   }
   return events.sort((a, b) => a.at.getTime() - b.at.getTime()).map(({ happens }) => happens);
 }
