@@ -1,3 +1,4 @@
+import { singleLine } from '../formats/text.ts';
 import { type DecimalMark, numbersIn } from './numbers.ts';
 import { IMPORT_LIMITS, ImportRefusal, quoted } from './refusal.ts';
 import { type Line, linesOf } from './text.ts';
@@ -49,7 +50,7 @@ export function readRows(text: string): Rows {
     if (!values) {
       refuseNoWords({ ...line, text: content });
       namesMm ||= speaksOfMm(content);
-      if (numbers === 0 && isName(content)) name ??= content.trim().slice(0, LONGEST_NAME);
+      if (numbers === 0 && isName(content)) name ??= singleLine(content).slice(0, LONGEST_NAME);
       if (numbers === 0) before++;
       else between++;
       refuseText(numbers === 0 ? before <= MOST_WORDS.before : isLabel(content), line, content);

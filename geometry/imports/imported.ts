@@ -56,7 +56,7 @@ export function contourOf(found: FoundChains): ImportedContour {
   const loop = oneLoop(joined, size, found.extras);
   const once = withoutClosing(withoutDuplicates(loop.points, size).chain, size);
   refuseCount(once.length);
-  const ordered = orderLoop(once);
+  const ordered = orderLoop(once, found.ordered && all.length === 1);
   const { x, y, sourceChordMm, notes } = normalise(ordered, found.unit);
   return {
     name: found.name,

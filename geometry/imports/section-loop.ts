@@ -24,20 +24,25 @@ const LEAST_AREA = 1e-5;
  * Puts a closed way round a section in order: finds its trailing edge and which end is the nose, turns the way counter-clockwise and
  * begins it at the upper trailing edge.
  * @param loop each point once, the last joined to the first
+ * @param list whether it begins where a list of points does: mostly at the trailing edge
  * @throws ImportRefusal when the outline encloses nothing, is too thick, or crosses itself
  */
-export function orderLoop(loop: Chain): OrderedLoop {
+export function orderLoop(loop: Chain, list = false): OrderedLoop {
   const area = areaOf(loop);
   const turned = area < 0 ? loop.toReversed() : loop;
   const ends = farthestEnds(turned);
   refuseFlat(turned, ends, Math.abs(area));
-  const edge = trailingEnd(turned, ends);
+  const edge = trailingEnd(turned, ends, list ? loop[0] : undefined);
   const nose = edge === ends.a ? ends.b : ends.a;
   const [e, n] = [at(turned, edge), at(turned, nose)];
   const mirrored = e.x < n.x;
   const points = mirrored ? turned.map(({ x, y, line }) => ({ x: -x, y, line })).reverse() : turned;
   const start = mirrored ? points.length - 1 - edge : edge;
-  const ordered = fromTrailingEdge(points, start, mirrored ? { x: -n.x, y: n.y } : n);
+  const listed = list ? closingFace(points, start, loop) : null;
+  const ordered = fromTrailingEdge(
+    points,
+    listed ?? faceAt(points, start, mirrored ? { x: -n.x, y: n.y } : n),
+  );
   const crossing = crossingOf(ordered);
   if (crossing) throw crossing;
   return { ...ordered, mirrored, reversed: area < 0 };
@@ -107,14 +112,19 @@ const GAUGES = [0.015, 0.04];
 /** An end that is so much thinner than the other is the trailing edge, even when it is on the left. */
 const THINNER = 0.5;
 
-/** Which end is the trailing edge: the right one, unless the left is far thinner and the right does not end in a face. */
-function trailingEnd(loop: Chain, { a, b, length }: Ends): number {
-  const [right, left] = at(loop, a).x >= at(loop, b).x ? [a, b] : [b, a];
+/** A list that begins so near to an end, in shares of the length, begins there. */
+const BEGINS = 0.02;
+
+/** Which end is the trailing edge: where the list begins, else the right one; but not when the other is far thinner and this no face. */
+function trailingEnd(loop: Chain, { a, b, length }: Ends, begin: Point | undefined): number {
+  const right = at(loop, a).x >= at(loop, b).x ? a : b;
+  const likely = [a, b].find((end) => apart(at(loop, end), begin) < BEGINS * length) ?? right;
+  const other = likely === a ? b : a;
   const thinner = GAUGES.every(
     (share) =>
-      widthAt(loop, left, right, share * length) < THINNER * widthAt(loop, right, left, share * length),
+      widthAt(loop, other, likely, share * length) < THINNER * widthAt(loop, likely, other, share * length),
   );
-  return thinner && !hasFace(loop, right, left) ? left : right;
+  return thinner && !hasFace(loop, likely, other) ? other : likely;
 }
 
 /** The extent of the outline square to the line from one end to the other, at a distance from the first. */
@@ -182,6 +192,22 @@ function faceAt(loop: Chain, end: number, nose: Point): Face {
   return corners ? { upper, lower } : { upper: end, lower: end };
 }
 
+/** The side from the last point of a list to its first, when it is the trailing-edge face, however oblique. */
+function closingFace(points: Chain, end: number, list: Chain): Face | null {
+  const count = points.length;
+  const [begin, finish] = [list[0], list.at(-1)].map((one) =>
+    points.findIndex(({ line }) => line === one?.line),
+  );
+  if (begin === undefined || finish === undefined) return null;
+  const ordered = (finish + 1) % count === begin ? [begin, finish] : [finish, begin];
+  const [upper = 0, lower = 0] = ordered;
+  const nearEnd = [upper, lower].some((index) => index === end);
+  const width = apart(at(points, upper), at(points, lower));
+  const short = width < FACE.longest * apart(at(points, end), at(points, end + Math.floor(count / 2)));
+  if (!nearEnd || !short || [upper, lower].some((index) => turnAt(points, index) < CORNER)) return null;
+  return { upper: upper < lower ? upper + count : upper, lower };
+}
+
 /** The angle by which the way turns at a point, radians. */
 function turnAt(loop: Chain, index: number): number {
   const [a, b, c] = [at(loop, index - 1), at(loop, index), at(loop, index + 1)];
@@ -198,8 +224,7 @@ function hasFace(loop: Chain, end: number, other: number): boolean {
 type EdgeLoop = Pick<OrderedLoop, 'points' | 'sharp' | 'facePoints'>;
 
 /** The points from the upper trailing edge round the nose to the lower. */
-function fromTrailingEdge(loop: Chain, end: number, nose: Point): EdgeLoop {
-  const { upper, lower } = faceAt(loop, end, nose);
+function fromTrailingEdge(loop: Chain, { upper, lower }: Face): EdgeLoop {
   const inside = Math.max(0, upper - lower - 1);
   const count = loop.length - inside;
   const points = Array.from({ length: count }, (_, i) => at(loop, upper + i));

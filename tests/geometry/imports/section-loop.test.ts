@@ -1,6 +1,9 @@
+import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { orderLoop } from '#geometry/imports/section-loop.ts';
-import { OPEN, SHARP, largestShift, numbered, refusalOf } from './files.ts';
+import { outlineOf } from '#geometry/shapes/shape.ts';
+import { naca4, naca4Shapes } from '#tests/geometry/shapes/samples.ts';
+import { OPEN, SHARP, largestShift, numbered, pointsOf, refusalOf } from './files.ts';
 
 const sharp = numbered(SHARP).slice(0, -1);
 const open = numbered(OPEN);
@@ -57,6 +60,42 @@ describe('an outline in order', () => {
       line: i + 1,
     }));
     expect(orderLoop(ellipse).points[0]!.line).toBe(1);
+  });
+});
+
+describe('the trailing edge of any section', () => {
+  const ordered = (points: readonly { x: number; y: number }[], list: boolean) => {
+    const found = orderLoop(numbered(points), list);
+    return found.points[0]!.line;
+  };
+
+  test('an oblique face is found by the ends of the list', () => {
+    const shape = { ...naca4('0018', 'open'), maxCamber: 0.1, maxCamberPosition: 0.7 };
+    const points = pointsOf(outlineOf(shape), 30);
+    for (const way of [points, points.toReversed()]) {
+      expect(largestShift(lists(orderLoop(numbered(way), true).points), points)).toBe(0);
+    }
+    const { sharp: isSharp } = orderLoop(
+      numbered(points.toReversed()).map((one) => ({ ...one, x: -one.x })),
+      true,
+    );
+    expect(isSharp).toBe(false);
+  });
+
+  test('is where a list begins; in a drawing it is found by its shape, mirrored as well', () => {
+    fc.assert(
+      fc.property(naca4Shapes, (shape) => {
+        fc.pre(shape.maxThickness < 0.3 && shape.maxCamber < 0.09);
+        const points = pointsOf(outlineOf(shape), 30);
+        const once = shape.trailingEdge === 'closed' ? points.slice(0, -1) : points;
+        expect(ordered(once, true)).toBe(1);
+        expect(ordered(once, false)).toBe(1);
+        expect(ordered(once.map(({ x, y }) => ({ x: -x, y })).reverse(), true)).toBeGreaterThanOrEqual(
+          once.length - 1,
+        );
+      }),
+      { numRuns: 40 },
+    );
   });
 });
 
