@@ -1,23 +1,16 @@
 import { expect, test } from 'vitest';
-import { type Contour, contourPoints } from '#geometry/contour/contour.ts';
+import { type Contour } from '#geometry/contour/contour.ts';
 import { sidesOf } from '#geometry/contour/chord-line.ts';
-import { loopOf, trueChordOf } from '#geometry/contour/loop.ts';
-import { SHEET_CHORD, pointsOnChord, residualsOf } from '#geometry/contour/point-residuals.ts';
 import { arcContour } from '#geometry/contour/arcs.ts';
 import { sampleCosine } from '#geometry/contour/sampling.ts';
 import { datOptionsSchema, dxfOptionsSchema } from '#geometry/formats/options.ts';
 import { roundContour } from '#geometry/formats/rounding.ts';
-import { type MeasuredShape } from '#geometry/shapes/measured.ts';
 import { similarityOf } from '#geometry/shapes/placement.ts';
 import { outlineOf, shapeSchema } from '#geometry/shapes/shape.ts';
 import { SMALL_DOCUMENT, SMALL_DRAWING } from '#tests/geometry/formats/drawing-example.ts';
-import { exportFile } from '#geometry/formats/export.ts';
-import { readRows } from '#geometry/imports/coordinate-rows.ts';
-import { readDxf } from '#geometry/imports/dxf-entities.ts';
-import { type FoundChains } from '#geometry/imports/imported.ts';
-import { orderLoop } from '#geometry/imports/section-loop.ts';
 import { MARSH } from '#tests/geometry/formats/identity-example.ts';
 import { cuttingCalls, cuttingCallsWithoutObjects } from '#tests/geometry/cutting/frozen-calls.ts';
+import { importCalls, importCallsWithoutObjects } from '#tests/geometry/imports/frozen-calls.ts';
 import { pageCalls, pageCallsWithoutObjects } from '#tests/geometry/pages/frozen-calls.ts';
 import { FREE_FORM, naca4 } from '#tests/geometry/shapes/samples.ts';
 
@@ -41,36 +34,6 @@ const shape = () => structuredClone(FREE_FORM);
 const outline = () => outlineOf(digits);
 const contour = () => sampleCosine(outline(), 20);
 const written = (): Contour => roundContour(contour(), 4);
-const measured = (): MeasuredShape => {
-  const points = contourPoints(contour());
-  const closed = [...points, points[0] ?? point()];
-  return { kind: 'measured', x: closed.map(({ x }) => x), y: closed.map(({ y }) => y) };
-};
-const residuals = () =>
-  residualsOf(outline(), pointsOnChord(measured(), SHEET_CHORD), () => point(), new Set());
-const sourcePoints = () => contourPoints(contour()).map((at, i) => ({ ...at, line: i + 1 }));
-const listed = () =>
-  measured()
-    .x.map((x, i) => `${x} ${measured().y[i] ?? 0}`)
-    .join('\n');
-const encoded = (text: string) => new TextEncoder().encode(text);
-const foundChains = (): FoundChains => ({
-  name: null,
-  groups: [[sourcePoints()]],
-  unit: { mm: null, hundred: 'mm' },
-  notes: [],
-  divided: new Set(),
-  joint: 1e-9,
-  extras: false,
-  ordered: true,
-});
-const bezier = () => ({
-  degree: 2,
-  knots: [0, 0, 0, 1, 1, 1],
-  control: [point(), { x: 1, y: 1 }, { x: 2, y: 0 }],
-  weights: [1, 1, 1],
-});
-const dxfLine = () => readDxf('0\nSECTION\n2\nENTITIES\n0\nLINE\n10\n0\n20\n0\n11\n1\n21\n1\n').entities[0];
 const arcs = () => arcContour(outline(), 1e-4);
 const line = () => sidesOf(outline()).line;
 const upper = () => outline().upper;
@@ -117,66 +80,6 @@ const calls: Readonly<Record<string, () => readonly unknown[]>> = {
   raiseOrder: () => [shape(), 'both', 8],
   lowerOrder: () => [shape(), 'both', 3],
   fitWeights: () => [{ n1: 0.5, n2: 1 }, 2, Float64Array.of(0, 0.2, 0.4, 0.6, 0.8), new Float64Array(5)],
-  splineThrough: () => [
-    [0, 1, 2],
-    [0, 1, 0],
-  ],
-  crossingSides: () => [
-    [0, 1, 1, 0],
-    [0, 0, 1, 1],
-  ],
-  measuredOutline: () => [measured()],
-  textOf: () => [Uint8Array.of(49, 32, 48)],
-  sizeOf: () => [[sourcePoints()]],
-  apart: () => [point(), { x: 0, y: 0 }],
-  withoutDuplicates: () => [sourcePoints(), 1],
-  withoutReversedPairs: () => [sourcePoints()],
-  joinChains: () => [[sourcePoints()], 1e-9],
-  oneLoop: () => [[{ chain: sourcePoints(), closed: true }], 1, true],
-  orderLoop: () => [sourcePoints()],
-  normalise: () => [orderLoop(sourcePoints()), { mm: null, hundred: 'mm' }],
-  contourOf: () => [foundChains()],
-  blocksOf: () => [readRows('1 0\n0 0')],
-  readCoordinates: () => [encoded(listed()), 'marsh.dat'],
-  dxfNumber: () => [{ code: 10, value: '1', line: 1 }],
-  arcPoints: () => [{ centre: point(), radius: 1, start: 0, sweep: 1 }, 0.1],
-  bulgeArc: () => [point(), { x: 1, y: 0 }, 0.3],
-  nurbsPoint: () => [bezier(), 2, 0.5],
-  nurbsPoints: () => [bezier(), 0.01, 100],
-  definingPoints: () => [dxfLine()],
-  drawnPoints: () => [dxfLine(), 1],
-  readDxfOutline: () => [
-    encoded(exportFile('dxf', naca4('2412'), MARSH, dxfOptionsSchema.parse({ chordMm: 220 })).text),
-  ],
-  loopOf: () => [outline()],
-  trueChordOf: () => [outline()],
-  onChord: () => [trueChordOf(outline()), point()],
-  nearestOn: () => [loopOf(outline()), point(), 0.3],
-  outwardNormal: () => [loopOf(outline()), 0.3],
-  deviationWords: () => [{ deviation: 0.001, surface: 'upper', station: 0.3 }],
-  toleranceVerdict: () => [
-    { deviation: 0.001, surface: 'upper', station: 0.3 },
-    { counted: 9, outside: 1, excluded: 0 },
-  ],
-  longestChordOf: () => [measured()],
-  pointsOnChord: () => [measured(), trueChordOf(outline())],
-  residualsOf: () => [outline(), pointsOnChord(measured(), SHEET_CHORD), () => point(), new Set([3])],
-  largestOf: () => [residuals(), 'size'],
-  shareOf: () => [residuals()],
-  fitPoints: () => [measured(), { order: { upper: 4, lower: 4 }, excluded: [3] }],
-  matchFourDigits: () => [measured(), [3]],
-  deviationOf: () => [outline(), outlineOf(shape()), 'chord', 11],
-  outlineOfAny: () => [measured()],
-  fitClosely: () => [outline()],
-  toCst: () => [measured()],
-  blendShapes: () => [naca4('2412'), shape(), 0.3],
-  blendOutlines: () => [outline(), outlineOf(shape()), 0.3],
-  blendToThickness: () => [naca4('2412'), naca4('4415'), 0.13],
-  withThickness: () => [shape(), 0.1],
-  withCamber: () => [shape(), 0.03],
-  withTrailingEdgeGap: () => [shape(), 1, 200],
-  toMeasured: () => [measured()],
-  describeMeasured: () => [measured()],
   crossesItself: () => [[point(), { x: 0.4, y: 0 }, { x: 0.3, y: -0.05 }]],
   checkShape: () => [shape()],
   outlineOf: () => [shape()],
@@ -241,17 +144,12 @@ const calls: Readonly<Record<string, () => readonly unknown[]>> = {
   withoutRepeats: () => [written()],
   ...cuttingCalls,
   ...pageCalls,
+  ...importCalls,
 };
 
 /** Given numbers, text or functions only; writeTables adds to the collector of tags that it is given for that. */
 const withoutObjects = [
-  'modelTolerance',
-  'quoted',
-  'linesOf',
-  'numbersIn',
-  'readRows',
-  'eachDxfGroup',
-  'readDxf',
+  ...importCallsWithoutObjects,
   'naca4NoseRadius',
   'naca4ThicknessOfNose',
   'parseDesignation',
