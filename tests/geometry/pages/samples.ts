@@ -76,7 +76,7 @@ export const PLANS = {
     ...BIG,
     template: TEMPLATE,
     features: [...PLAN.features, HINGE],
-    ribs: { ...RIBS, stations: { kind: 'count', count: 12 } },
+    ribs: { ...RIBS, stations: { kind: 'count', count: 12 }, lighteningHoles: null },
   }),
   'ribs alone': {
     ...planWith({ ribs: RIBS, kerfMm: { root: 0, tip: 0 } }),

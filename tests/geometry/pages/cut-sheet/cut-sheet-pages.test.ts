@@ -5,21 +5,32 @@ import { PLAN, RIBS, SLOT, TEMPLATE, planWith, plans } from '#tests/geometry/cut
 import { faultsOf, wordsOf } from '../checking.ts';
 import { DETAILS, HOSTILE_NAMES, PLANS, SHEET, namedSheet, names, planned } from '../samples.ts';
 
-test.each(Object.entries(PLANS))('%s: nothing overlaps and nothing is cut off', (_, of) => {
-  const { plan, findings } = planned(of);
-  const pages = cutSheetPages(plan, findings, SHEET, DETAILS);
-  expect(pages.length).toBeGreaterThan(1);
-  for (const page of pages) expect(faultsOf(page)).toEqual([]);
-});
+/** Whole plans are worked out here; on a busy machine that takes its time, in ms. */
+const PATIENCE = 20_000;
 
-test('a small panel stands on A4, others on A3', () => {
-  const width = (name: keyof typeof PLANS) => {
-    const { plan, findings } = planned(PLANS[name]);
-    return new Set(cutSheetPages(plan, findings, SHEET, DETAILS).map(({ widthMm }) => widthMm));
-  };
-  expect([...width('small')]).toEqual([297]);
-  expect([...width('tapered and swept')]).toEqual([420]);
-});
+test.each(Object.entries(PLANS))(
+  '%s: nothing overlaps and nothing is cut off',
+  (_, of) => {
+    const { plan, findings } = planned(of);
+    const pages = cutSheetPages(plan, findings, SHEET, DETAILS);
+    expect(pages.length).toBeGreaterThan(1);
+    for (const page of pages) expect(faultsOf(page)).toEqual([]);
+  },
+  PATIENCE,
+);
+
+test(
+  'a small panel stands on A4, others on A3',
+  () => {
+    const width = (name: keyof typeof PLANS) => {
+      const { plan, findings } = planned(PLANS[name]);
+      return new Set(cutSheetPages(plan, findings, SHEET, DETAILS).map(({ widthMm }) => widthMm));
+    };
+    expect([...width('small')]).toEqual([297]);
+    expect([...width('tapered and swept')]).toEqual([420]);
+  },
+  PATIENCE,
+);
 
 test('the sheets carry views, tables, cautions and the title block', () => {
   const { plan, findings } = planned(PLANS['tapered and swept']);
@@ -51,31 +62,35 @@ test('a sheet that is not released says so in large type', () => {
   expect(wordsOf(page!.marks)).toContain('draft: not for cutting');
 });
 
-test('as many features and ribs as a plan may have go on over several pages', () => {
-  const features = Array.from({ length: 24 }, (_, i) => ({
-    ...SLOT,
-    name: `Stringer ${i + 1}`,
-    rootStation: 0.1 + 0.032 * i,
-    tipStation: 0.1 + 0.032 * i,
-    widthMm: 1.5,
-    rootDepthMm: 1,
-    tipDepthMm: 1,
-  }));
-  const ribs = {
-    ...RIBS,
-    stations: { kind: 'count' as const, count: 40 },
-    jigTabs: null,
-    lighteningHoles: null,
-  };
-  const { plan, findings } = planned(planWith({ ...PLAN, features, ribs, template: TEMPLATE }));
-  const pages = cutSheetPages(plan, findings, SHEET, DETAILS);
-  expect(pages.length).toBeGreaterThan(2);
-  for (const page of pages) expect(faultsOf(page)).toEqual([]);
-  const words = pages.flatMap(({ marks }) => wordsOf(marks));
-  for (const { name } of features) expect(words).toContain(name);
-  expect(words).toContain('Ribs, continued');
-  expect(words).toContain('40');
-});
+test(
+  'as many features and ribs as a plan may have go on over several pages',
+  () => {
+    const features = Array.from({ length: 24 }, (_, i) => ({
+      ...SLOT,
+      name: `Stringer ${i + 1}`,
+      rootStation: 0.1 + 0.032 * i,
+      tipStation: 0.1 + 0.032 * i,
+      widthMm: 1.5,
+      rootDepthMm: 1,
+      tipDepthMm: 1,
+    }));
+    const ribs = {
+      ...RIBS,
+      stations: { kind: 'count' as const, count: 40 },
+      jigTabs: null,
+      lighteningHoles: null,
+    };
+    const { plan, findings } = planned(planWith({ ...PLAN, features, ribs, template: TEMPLATE }));
+    const pages = cutSheetPages(plan, findings, SHEET, DETAILS);
+    expect(pages.length).toBeGreaterThan(2);
+    for (const page of pages) expect(faultsOf(page)).toEqual([]);
+    const words = pages.flatMap(({ marks }) => wordsOf(marks));
+    for (const { name } of features) expect(words).toContain(name);
+    expect(words).toContain('Ribs, continued');
+    expect(words).toContain('40');
+  },
+  PATIENCE,
+);
 
 test.each(HOSTILE_NAMES)('a name as nobody should give it: %s', (name) => {
   const { plan, findings } = planned(PLANS['pair in two passes']);
@@ -109,14 +124,18 @@ test.each([
   for (const page of cutSheetPages(plan, findings, SHEET, DETAILS)) expect(faultsOf(page)).toEqual([]);
 });
 
-test('ordinary plans: nothing overlaps, and the same plan gives the same pages', () => {
-  fc.assert(
-    fc.property(plans, names, (of, name) => {
-      const { plan, findings } = planned(of);
-      const pages = cutSheetPages(plan, findings, namedSheet(name), DETAILS);
-      for (const page of pages) expect(faultsOf(page)).toEqual([]);
-      expect(cutSheetPages(plan, findings, namedSheet(name), DETAILS)).toEqual(pages);
-    }),
-    { numRuns: 6 },
-  );
-});
+test(
+  'ordinary plans: nothing overlaps, and the same plan gives the same pages',
+  () => {
+    fc.assert(
+      fc.property(plans, names, (of, name) => {
+        const { plan, findings } = planned(of);
+        const pages = cutSheetPages(plan, findings, namedSheet(name), DETAILS);
+        for (const page of pages) expect(faultsOf(page)).toEqual([]);
+        expect(cutSheetPages(plan, findings, namedSheet(name), DETAILS)).toEqual(pages);
+      }),
+      { numRuns: 6 },
+    );
+  },
+  PATIENCE,
+);

@@ -9,6 +9,9 @@ import { TEMPLATE, plans } from '#tests/geometry/cutting/plans.ts';
 import { faultsOf, textsOf, wordsOf } from '../checking.ts';
 import { DETAILS, PLANS, SHEET, namedSheet, names, planned } from '../samples.ts';
 
+/** Whole plans are worked out here; on a busy machine that takes its time, in ms. */
+const PATIENCE = 20_000;
+
 const EDGE_WIDTH = 0.35;
 
 /** The pieces of the template's edge on a page. */
@@ -101,38 +104,47 @@ test.each(['tapered and swept', 'chord of 1200 mm'] as const)(
       expect(Math.max(...corners.map((corner) => distanceTo(corner, pieces)))).toBeLessThan(0.01);
     }
   },
+  PATIENCE,
 );
 
-test.each(Object.entries(PLANS))('%s: nothing overlaps and nothing is cut off', (_, of) => {
-  const { plan } = planned(of);
-  for (const paper of of === PLANS['chord of 1200 mm']
-    ? (['Letter'] as const)
-    : (['A4', 'A3', 'Letter'] as const)) {
-    const pages = templatePages(plan, SHEET, paper, DETAILS);
-    expect(pages.length > 0).toBe(of.template !== null);
-    for (const page of pages) {
-      expect(page).toMatchObject(PAPERS[paper]);
-      expect(faultsOf(page)).toEqual([]);
+test.each(Object.entries(PLANS))(
+  '%s: nothing overlaps and nothing is cut off',
+  (_, of) => {
+    const { plan } = planned(of);
+    for (const paper of of === PLANS['chord of 1200 mm']
+      ? (['Letter'] as const)
+      : (['A4', 'A3', 'Letter'] as const)) {
+      const pages = templatePages(plan, SHEET, paper, DETAILS);
+      expect(pages.length > 0).toBe(of.template !== null);
+      for (const page of pages) {
+        expect(page).toMatchObject(PAPERS[paper]);
+        expect(faultsOf(page)).toEqual([]);
+      }
     }
-  }
-});
+  },
+  PATIENCE,
+);
 
-test('every page says what it is, where it lies and what to mind', () => {
-  const { plan } = planned(PLANS['chord of 1200 mm']);
-  const pages = templatePages(plan, SHEET, 'A4', DETAILS);
-  pages.forEach(({ marks }, i) => {
-    const words = wordsOf(marks);
-    expect(words).toContain(`Sheet ${i + 1} of ${pages.length}`);
-    expect(words.some((of) => /^(?:Root|Tip) template: row [AB], column [1-6]$/.test(of))).toBe(true);
-    expect(words).toContain('K7QM-3F2X');
-    expect(words).toContain('SHA-256 8c1f 04d9 a77e');
-    expect(words).toContain('Version 3, released 2026-03-05');
-    expect(words.filter((of) => of === '100 mm')).toHaveLength(2);
-    expect(words.join(' ')).toContain('Print at 100 %');
-    expect(words.join(' ')).toContain(SHEET.address);
-  });
-  expect(pages.flatMap(({ marks }) => wordsOf(marks))).toContain('Root template, chord 1200 mm');
-});
+test(
+  'every page says what it is, where it lies and what to mind',
+  () => {
+    const { plan } = planned(PLANS['chord of 1200 mm']);
+    const pages = templatePages(plan, SHEET, 'A4', DETAILS);
+    pages.forEach(({ marks }, i) => {
+      const words = wordsOf(marks);
+      expect(words).toContain(`Sheet ${i + 1} of ${pages.length}`);
+      expect(words.some((of) => /^(?:Root|Tip) template: row [AB], column [1-6]$/.test(of))).toBe(true);
+      expect(words).toContain('K7QM-3F2X');
+      expect(words).toContain('SHA-256 8c1f 04d9 a77e');
+      expect(words).toContain('Version 3, released 2026-03-05');
+      expect(words.filter((of) => of === '100 mm')).toHaveLength(2);
+      expect(words.join(' ')).toContain('Print at 100 %');
+      expect(words.join(' ')).toContain(SHEET.address);
+    });
+    expect(pages.flatMap(({ marks }) => wordsOf(marks))).toContain('Root template, chord 1200 mm');
+  },
+  PATIENCE,
+);
 
 test('all numbers of the ticks are there where there is room', () => {
   const { plan } = planned(PLANS['chord of 1200 mm']);
@@ -147,14 +159,18 @@ test('a sheet that is not released says so on its templates', () => {
   expect(wordsOf(page!.marks)).toContain('Version 3, withdrawn: not for cutting');
 });
 
-test('ordinary plans with any names: nothing overlaps, and the same plan gives the same pages', () => {
-  fc.assert(
-    fc.property(plans, names, (of, name) => {
-      const { plan } = planned({ ...of, template: TEMPLATE });
-      const pages = templatePages(plan, namedSheet(name), 'A4', DETAILS);
-      for (const page of pages) expect(faultsOf(page)).toEqual([]);
-      expect(templatePages(plan, namedSheet(name), 'A4', DETAILS)).toEqual(pages);
-    }),
-    { numRuns: 4 },
-  );
-});
+test(
+  'ordinary plans with any names: nothing overlaps, and the same plan gives the same pages',
+  () => {
+    fc.assert(
+      fc.property(plans, names, (of, name) => {
+        const { plan } = planned({ ...of, template: TEMPLATE });
+        const pages = templatePages(plan, namedSheet(name), 'A4', DETAILS);
+        for (const page of pages) expect(faultsOf(page)).toEqual([]);
+        expect(templatePages(plan, namedSheet(name), 'A4', DETAILS)).toEqual(pages);
+      }),
+      { numRuns: 4 },
+    );
+  },
+  PATIENCE,
+);
