@@ -3,7 +3,7 @@ import { expectedCores } from '#geometry/cutting/expected-core.ts';
 import { type WirePlan } from '#geometry/cutting/plan.ts';
 import { planCore } from '#geometry/cutting/planner.ts';
 import { simulate } from '#geometry/cutting/simulate.ts';
-import { PLAN, planWith } from './plans.ts';
+import { PLAN, planWith, section } from './plans.ts';
 
 const IDENTITY = { sheetName: 'Reed wing', versionNumber: 1, checksum: 'abc', part: 'core' };
 const { core: WHOLE } = planCore(PLAN, IDENTITY);
@@ -77,4 +77,27 @@ test('many breaches of a kind are counted, not listed', () => {
   const found = simulate(TEXT, slow, EXPECTED).findings.filter(({ code }) => code === 'wire-too-fast');
   expect(found).toHaveLength(13);
   expect(found.at(-1)!.message).toMatch(/^\d+ further lines/);
+});
+
+test('what a straight wire can’t do between the ends is one warning, where it is largest', () => {
+  // Three times as thick at the tip: behind the nose the normals stand up to 30° apart, 0.75 mm (1 − cos 15°) = 0.026 mm.
+  const plan = planWith({
+    panel: {
+      root: { shape: section('0006'), chordMm: 220 },
+      tip: { shape: section('0018'), chordMm: 200 },
+      washoutDeg: 0,
+    },
+    allowances: { upperMm: 0, lowerMm: 0 },
+    kerfMm: { root: 1.5, tip: 1.5 },
+    features: [],
+  });
+  const { core, findings } = planCore(plan, IDENTITY);
+  const { deviations, largestDeviationMm } = core!.cut!.simulation;
+  expect(largestDeviationMm).toBeGreaterThan(0.024);
+  expect(largestDeviationMm).toBeLessThan(0.032);
+  expect(findings.filter(({ code }) => code.startsWith('cut-differs'))).toMatchObject([
+    { severity: 'warning', code: 'cut-differs-between', path: 'panel', at: { spanMm: 300 } },
+  ]);
+  for (const { share, deviationMm } of deviations)
+    if (share === 0 || share === 1) expect(deviationMm).toBeLessThanOrEqual(0.01);
 });
