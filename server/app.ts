@@ -12,6 +12,7 @@ import { authenticator } from './account/session.ts';
 import { signInConfig } from './account/sign-in.ts';
 import { type Config } from './config.ts';
 import { threadedWorks } from './cut-sheets/files/threaded-works.ts';
+import { type SheetWorks } from './cut-sheets/files/works.ts';
 import { cutSheetHandlers } from './cut-sheets/routes.ts';
 import { cuttingListHandlers } from './cutting-list/routes.ts';
 import { deskHandlers } from './desk/routes.ts';
@@ -36,6 +37,8 @@ interface AppDependencies {
   readonly logger: Logger;
   /** The built client; null where something else serves it. */
   readonly clientFolder: string | null;
+  /** Where plans are worked out and files made; a thread of the application's own when it is not given. */
+  readonly works?: SheetWorks | undefined;
 }
 
 /** The middleware's own level, 4, makes the first load larger than gzip would; 6 makes it smaller at little cost. */
@@ -45,7 +48,7 @@ const packageFile = new URL('../package.json', import.meta.url);
 const { version } = JSON.parse(readFileSync(packageFile, 'utf8')) as { version: string };
 
 /** Makes the application: API under /api, sign-in under /auth, the client for everything else. Starts nothing. */
-export function createApp({ config, knex, logger, clientFolder }: AppDependencies): Express {
+export function createApp({ config, knex, logger, clientFolder, works }: AppDependencies): Express {
   const attempts = new AttemptLimit();
   const auth = signInConfig({ knex, secret: config.authSecret, logger });
   const authenticate = authenticator(knex, auth);
@@ -58,7 +61,7 @@ export function createApp({ config, knex, logger, clientFolder }: AppDependencie
     ...cuttingListHandlers(knex),
     ...inspectionHandlers(knex),
     ...deskHandlers(knex),
-    ...cutSheetHandlers({ knex, works: threadedWorks(), publicUrl: config.publicUrl }),
+    ...cutSheetHandlers({ knex, works: works ?? threadedWorks(), publicUrl: config.publicUrl }),
   };
   const document = JSON.stringify(openApiDocument(version));
 

@@ -4,6 +4,7 @@ import { type EndpointName, endpoints } from '#server/contracts/endpoints.ts';
 import { startApi, type TestApi, type TestWorkshop } from './support/api.ts';
 import { type Client } from './support/client.ts';
 import { makeSamples, makeSection, makeShop, requests, type Samples } from './support/requests.ts';
+import { cheapWorks } from './support/sheets.ts';
 import { naca4 } from './support/shapes.ts';
 
 const tables = [
@@ -37,7 +38,7 @@ describe('two workshops', () => {
   let samples: Samples;
 
   beforeAll(async () => {
-    api = await startApi();
+    api = await startApi({ works: cheapWorks });
     marsh = await api.addWorkshop('marsh');
     fen = await api.addWorkshop('fen');
     stranger = await api.signIn(fen, 'owner');

@@ -6,6 +6,7 @@ import { accountRoles, may, permissions, roles } from '#server/contracts/permiss
 import { startApi, type TestApi, type TestWorkshop } from './support/api.ts';
 import { type Client } from './support/client.ts';
 import { makeSamples, requests, type Samples } from './support/requests.ts';
+import { cheapWorks } from './support/sheets.ts';
 
 const names = Object.keys(endpoints) as EndpointName[];
 
@@ -57,7 +58,7 @@ describe('every endpoint for every role', () => {
   let shared: Samples;
 
   beforeAll(async () => {
-    api = await startApi();
+    api = await startApi({ works: cheapWorks });
     workshop = await api.addWorkshop('marsh');
     shared = await makeSamples(api, workshop);
     clients.set('nobody', api.anonymous());

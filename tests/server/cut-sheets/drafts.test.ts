@@ -2,7 +2,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { startApi, type TestApi, type TestWorkshop } from '../support/api.ts';
 import { type Client } from '../support/client.ts';
 import { makeSamples, type Samples } from '../support/requests.ts';
-import { samplePlan } from '../support/sheets.ts';
+import { cheapWorks, samplePlan } from '../support/sheets.ts';
 
 let api: TestApi;
 let marsh: TestWorkshop;
@@ -11,7 +11,7 @@ let designer: Client;
 let samples: Samples;
 let params: { sheetId: string };
 beforeAll(async () => {
-  api = await startApi();
+  api = await startApi({ works: cheapWorks });
   marsh = await api.addWorkshop('marsh');
   builder = await api.signIn(marsh, 'builder');
   designer = await api.signIn(marsh, 'designer');

@@ -6,6 +6,7 @@ import { type AccountRole } from '#server/account/person.ts';
 import { hashPassword } from '#server/account/passwords.ts';
 import { createPerson, createWorkshop } from '#server/account/store.ts';
 import { accountRoles } from '#server/contracts/permissions.ts';
+import { type SheetWorks } from '#server/cut-sheets/files/works.ts';
 import { type Author } from '#server/sections/rules.ts';
 import { createTestDatabase, type TestDatabase } from '#tests/database.ts';
 import { Client } from './client.ts';
@@ -38,6 +39,7 @@ export async function startApi(
     trustProxy?: false | number;
     clientFolder?: string | null;
     database?: TestDatabase;
+    works?: SheetWorks;
   } = {},
 ): Promise<TestApi> {
   const database = options.database ?? (await createTestDatabase());
@@ -53,6 +55,7 @@ export async function startApi(
       knex: database.knex,
       logger,
       clientFolder: options.clientFolder ?? null,
+      works: options.works,
     }),
   );
   await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve));
