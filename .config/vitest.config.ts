@@ -22,6 +22,7 @@ export default defineConfig({
           isolate: false,
           setupFiles: [...setupFiles, 'tests/setup-properties.ts'],
           include: ['tests/{geometry,reference,structure}/**/*.test.ts'],
+          testTimeout: 20_000,
         },
       },
       {
@@ -32,6 +33,7 @@ export default defineConfig({
           setupFiles,
           environment: 'jsdom',
           include: ['tests/client/**/*.test.{ts,tsx}'],
+          testTimeout: 20_000,
         },
       },
       {

@@ -36,19 +36,12 @@ export function Component() {
 
 function DeskLists({ desk }: { readonly desk: Desk }) {
   const mayPlan = useMay('cut-sheets.write');
+  const mayShape = useMay('sections.write');
   return (
-    <div className="grid items-start gap-x-10 gap-y-8 lg:grid-cols-2">
+    <div className="gap-x-10 lg:columns-2">
       <DeskList title="Out of tolerance" none="Every measured part is within tolerance or decided.">
         {desk.outOfTolerance.map((inspection) => (
           <Measured key={inspection.id} inspection={inspection} />
-        ))}
-      </DeskList>
-      <DeskList
-        title="Cut sheets on sections out of force"
-        none="Every released cut sheet stands on sections in force."
-      >
-        {desk.staleSheets.map((sheet) => (
-          <Stale key={sheet.id} sheet={sheet} />
         ))}
       </DeskList>
       <DeskList title="Unsaved work" none="Nothing of yours is unsaved.">
@@ -58,12 +51,17 @@ function DeskLists({ desk }: { readonly desk: Desk }) {
           </Line>
         ))}
       </DeskList>
-      <DeskList title="Cut sheets in work" none="No cut sheet is being planned.">
+      <DeskList
+        title="Cut sheets on sections out of force"
+        none="Every cut sheet stands on sections in force."
+      >
+        {desk.staleSheets.map((sheet) => (
+          <Stale key={sheet.id} sheet={sheet} />
+        ))}
+      </DeskList>
+      <DeskList title="Cut sheets in work" none="No cut sheet is being planned or cut.">
         {desk.sheetsInWork.map((sheet) => (
-          <Line key={sheet.id} to={sheetPath(sheet.id)} name={sheet.name}>
-            v{sheet.latest.number} <StatusMark status={sheet.latest.status} /> {sourcesText(sheet.latest)}
-            {sheet.latest.errors > 0 && <span className="text-brick">, {sheet.latest.errors} to mend</span>}
-          </Line>
+          <SheetInWork key={sheet.id} sheet={sheet} />
         ))}
       </DeskList>
       {mayPlan && (
@@ -73,12 +71,32 @@ function DeskLists({ desk }: { readonly desk: Desk }) {
           ))}
         </DeskList>
       )}
-      <DeskList title="Sections changed last" none="No section yet.">
-        {desk.recentSections.map((section) => (
-          <Shape key={section.id} section={section} />
-        ))}
-      </DeskList>
+      {mayShape && (
+        <DeskList title="Sections changed last" none="No section yet.">
+          {desk.recentSections.map((section) => (
+            <Shape key={section.id} section={section} />
+          ))}
+        </DeskList>
+      )}
     </div>
+  );
+}
+
+function SheetInWork({ sheet }: { readonly sheet: CutSheet }) {
+  const { number, status, errors } = sheet.latest;
+  return (
+    <Line to={sheetPath(sheet.id)} name={sheet.name}>
+      <span>v{number}</span>
+      <StatusMark status={status} />
+      {errors > 0 && <span className="text-brick">{errors} to mend</span>}
+      <span>{sourcesText(sheet.latest)}</span>
+      {status === 'released' &&
+        sheet.progress.map(({ part, wanted, done }) => (
+          <span key={part}>
+            {part} {done} of {wanted}
+          </span>
+        ))}
+    </Line>
   );
 }
 
@@ -90,7 +108,7 @@ interface DeskListProps {
 
 function DeskList({ title, none, children }: DeskListProps) {
   return (
-    <section aria-label={title} className="flex min-w-0 flex-col gap-1">
+    <section aria-label={title} className="mb-7 flex min-w-0 break-inside-avoid flex-col gap-1">
       <h2 className="flex items-baseline justify-between border-b border-edge pb-1 text-base font-semibold">
         {title}
         <span className="font-normal text-graphite">{children.length}</span>

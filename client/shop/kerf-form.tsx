@@ -5,7 +5,9 @@ import { SelectField } from '#client/ui/select-field.tsx';
 import { TextField } from '#client/ui/text-field.tsx';
 import { type Kerf, type Machine, type Material } from '#server/contracts/shop.ts';
 import { KerfCaution, KindCautions } from './cautions.tsx';
+import { KerfStrip } from './kerf-strip.tsx';
 import { kerfRange, textsOfKerf, today } from './kerf-values.ts';
+import { formatShopQuantity } from './quantities.ts';
 import { StandingNotice } from './standing-notice.tsx';
 import { useKerfForm } from './use-kerf-form.ts';
 import { useUnsaved } from './use-unsaved.tsx';
@@ -25,6 +27,12 @@ export function KerfForm(props: { machine: Machine; material: Material; kerf: Ke
   );
   const { question } = useUnsaved(form.formState.isDirty);
   const { errors } = form.formState;
+  const takeMeasured = (kerfMm: number) => {
+    const touched = { shouldDirty: true, shouldValidate: true };
+    form.setValue('kerfMm', formatShopQuantity(kerfMm, 'length', units, 2), touched);
+    form.setValue('origin', 'measured', touched);
+    form.setValue('measuredOn', today(), touched);
+  };
   return (
     <form
       noValidate
@@ -32,6 +40,7 @@ export function KerfForm(props: { machine: Machine; material: Material; kerf: Ke
       className="flex flex-col gap-4"
     >
       <KerfCaution />
+      <KerfStrip machine={machine} material={material} onKerf={takeMeasured} />
       <TextField
         label="Kerf"
         autoComplete="off"

@@ -107,7 +107,7 @@ function Findings({ latest }: { readonly latest: CutSheet['latest'] }) {
 
 function Panel({ latest }: { readonly latest: CutSheet['latest'] }) {
   const units = useUnits();
-  const length = (mm: number) => formatLength(mm, units);
+  const length = (mm: number) => formatLength(mm, units, 1);
   return (
     <>
       {length(latest.rootChordMm)} → {length(latest.tipChordMm)}, span {length(latest.spanMm)},{' '}
