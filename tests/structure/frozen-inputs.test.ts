@@ -11,6 +11,7 @@ import { SMALL_DOCUMENT, SMALL_DRAWING } from '#tests/geometry/formats/drawing-e
 import { MARSH } from '#tests/geometry/formats/identity-example.ts';
 import { cuttingCalls, cuttingCallsWithoutObjects } from '#tests/geometry/cutting/frozen-calls.ts';
 import { importCalls, importCallsWithoutObjects } from '#tests/geometry/imports/frozen-calls.ts';
+import { flowCalls, flowCallsWithoutObjects } from '#tests/geometry/flow/frozen-calls.ts';
 import { pageCalls, pageCallsWithoutObjects } from '#tests/geometry/pages/frozen-calls.ts';
 import { FREE_FORM, naca4 } from '#tests/geometry/shapes/samples.ts';
 
@@ -143,6 +144,7 @@ const calls: Readonly<Record<string, () => readonly unknown[]>> = {
   roundContour: () => [contour(), 4],
   withoutRepeats: () => [written()],
   ...cuttingCalls,
+  ...flowCalls,
   ...pageCalls,
   ...importCalls,
 };
@@ -171,6 +173,7 @@ const withoutObjects = [
   'roundTo',
   'writeTables',
   ...cuttingCallsWithoutObjects,
+  ...flowCallsWithoutObjects,
   ...pageCallsWithoutObjects,
 ];
 
