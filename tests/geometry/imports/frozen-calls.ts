@@ -1,6 +1,7 @@
 import { contourPoints } from '#geometry/contour/contour.ts';
 import { loopOf, trueChordOf } from '#geometry/contour/loop.ts';
 import { SHEET_CHORD, pointsOnChord, residualsOf } from '#geometry/contour/point-residuals.ts';
+import { rowsOf } from '#geometry/contour/surface-fit.ts';
 import { sampleCosine } from '#geometry/contour/sampling.ts';
 import { exportFile } from '#geometry/formats/export.ts';
 import { dxfOptionsSchema } from '#geometry/formats/options.ts';
@@ -24,6 +25,7 @@ const measured = (): MeasuredShape => {
 };
 const residuals = () =>
   residualsOf(outline(), pointsOnChord(measured(), SHEET_CHORD), () => point(), new Set());
+const chordPoints = () => pointsOnChord(measured(), SHEET_CHORD);
 const sourcePoints = () => contourPoints(contour()).map((at, i) => ({ ...at, line: i + 1 }));
 const listed = () =>
   measured()
@@ -87,6 +89,9 @@ export const importCalls: Readonly<Record<string, () => readonly unknown[]>> = {
   residualsOf: () => [outline(), pointsOnChord(measured(), SHEET_CHORD), () => point(), new Set([3])],
   largestOf: () => [residuals(), 'size'],
   shareOf: () => [residuals()],
+  rowsOf: () => [chordPoints(), 'upper', 0],
+  fitSurface: () => [rowsOf(chordPoints(), 'upper', 0), 4],
+  ladderOf: () => [rowsOf(chordPoints(), 'upper', 0)],
   fitPoints: () => [measured(), { order: { upper: 4, lower: 4 }, excluded: [3] }],
   matchFourDigits: () => [measured(), [3]],
   textOf: () => [Uint8Array.of(49, 32, 48)],
