@@ -37,7 +37,7 @@ test('random plans: in step, no crossing, the simulator agrees', () => {
       expect(simulation.deviations).toHaveLength(7);
       expect(simulation.largestDeviationMm).toBeLessThanOrEqual(0.02);
     }),
-    { numRuns: 25 },
+    { numRuns: 20 },
   );
 }, 120_000);
 
@@ -81,7 +81,7 @@ test('any accepted shapes and sizes end in finite numbers or findings, never in 
         expect(core.cut?.program.text ?? '').not.toMatch(/NaN|Infinity/);
       },
     ),
-    { numRuns: 14 },
+    { numRuns: 10 },
   );
 }, 120_000);
 

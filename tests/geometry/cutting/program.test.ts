@@ -129,11 +129,11 @@ test('no name can end a comment, begin a line or carry a code', () => {
   fc.assert(
     fc.property(nasty, nasty, (sheetName, name) => {
       const text = withName(sheetName, name);
-      expect(codeOf(text)).toEqual(codeOf(plain));
-      for (const line of text.split('\n'))
-        expect(line).toMatch(/^(\([A-Za-z0-9 .,:/+-]*\)|N\d+ [A-Z0-9 .-]+( \(wire on\))?|)$/);
+      expect(codeOf(text).join('\n')).toBe(codeOf(plain).join('\n'));
+      const whole = /^(\([A-Za-z0-9 .,:/+-]*\)|N\d+ [A-Z0-9 .-]+( \(wire on\))?|)$/;
+      expect(text.split('\n').filter((line) => !whole.test(line))).toEqual([]);
     }),
-    { numRuns: 15 },
+    { numRuns: 10 },
   );
   const wordsIn = (text: string) => parseStringSync(text).map(({ words }) => words);
   expect(wordsIn(withName(') G0 X999 (', 'b\r\nM30'))).toEqual(wordsIn(plain));
