@@ -1,7 +1,7 @@
 /** Paths of findings that belong to another field of the form than their own. */
 const ELSEWHERE: readonly (readonly [RegExp, string])[] = [
-  [/^machine(\.|$)/, 'machineId'],
-  [/^material(\.|$)/, 'materialId'],
+  [/^machine(\..*)?$/, 'machineId'],
+  [/^material(\..*)?$/, 'materialId'],
   [/^panel\.(root|tip)\.shape.*/, 'panel.$1.sectionId'],
   [/^panel\.(root|tip)$/, 'panel.$1.chordMm'],
   [/^block$/, 'block.lengthMm'],
