@@ -1,9 +1,8 @@
 import { type Finding } from '#geometry/cutting/findings.ts';
 import { planSheetStrip } from '#geometry/cutting/sheet-strip.ts';
-import { planWireStrip } from '#geometry/cutting/test-strip.ts';
+import { planWireStrip, STRIP_WIDTHS_MM } from '#geometry/cutting/test-strip.ts';
 import { writeDxfDocument } from '#geometry/formats/dxf.ts';
 import { slugOf } from '#geometry/formats/file-name.ts';
-import { stripWidthsOf } from '#server/contracts/kerf-strip.ts';
 import { type MachineSettings, type MaterialSettings } from '#server/contracts/shop.ts';
 import { Refusal } from '#server/refusal.ts';
 
@@ -26,8 +25,8 @@ interface StripFile {
   readonly text: string;
 }
 
-/** An off-cut of this size is enough for the wire. */
-const PIECE_MM = { length: 100, span: 300 } as const;
+/** An off-cut of this size is enough for the wire; its height is what all pieces and the foam above and below them need. */
+const PIECE_MM = { length: 100, height: 90, span: 300 } as const;
 const CLEARANCE_MM = 10;
 const WARM_UP_S = 3;
 
@@ -37,24 +36,33 @@ function refuse(findings: readonly Finding[]): never {
   throw new Refusal('invalid', { errors: errors.map(({ path, message }) => ({ path, message })) });
 }
 
+type Foam = MaterialSettings & { readonly kind: 'foam' };
+
+/**
+ * The piece of foam to cut from: as it lies when it is high enough, otherwise an off-cut of its length that stands on edge.
+ * @throws Refusal `invalid` when the foam gives none
+ */
+function pieceOf({ blockLengthMm, blockHeightMm, blockSpanMm }: Foam) {
+  const spanMm = Math.min(blockSpanMm, PIECE_MM.span);
+  if (blockHeightMm >= PIECE_MM.height) {
+    return { lengthMm: Math.min(blockLengthMm, PIECE_MM.length), heightMm: blockHeightMm, spanMm };
+  }
+  if (blockLengthMm >= PIECE_MM.height) {
+    return { lengthMm: blockHeightMm, heightMm: PIECE_MM.height, spanMm };
+  }
+  const message = `The test strip needs a piece ${PIECE_MM.height} mm high, which this foam does not give.`;
+  throw new Refusal('invalid', { errors: [{ path: 'block.heightMm', message }] });
+}
+
 function wireProgram({ machine, material, kerfMm }: StripOrder): string | null {
   if (machine.settings.kind !== 'wire' || material.settings.kind !== 'foam') return null;
   const { kind: _kind, ...settings } = machine.settings;
-  const { densityKgM3, feedMmMin, maxFeedMmMin, ...block } = material.settings;
-  const widthsMm = stripWidthsOf(material.settings);
-  if (widthsMm.length === 0) {
-    const message = 'This foam is too low for a test strip.';
-    throw new Refusal('invalid', { errors: [{ path: 'block.heightMm', message }] });
-  }
+  const { densityKgM3, feedMmMin, maxFeedMmMin } = material.settings;
   const { strip, findings } = planWireStrip({
     machine: { name: machine.name, ...settings },
     material: { name: material.name, densityKgM3, feedMmMin, maxFeedMmMin },
-    block: {
-      lengthMm: Math.min(block.blockLengthMm, PIECE_MM.length),
-      heightMm: block.blockHeightMm,
-      spanMm: Math.min(block.blockSpanMm, PIECE_MM.span),
-    },
-    widthsMm,
+    block: pieceOf(material.settings),
+    widthsMm: STRIP_WIDTHS_MM,
     kerfMm,
     clearanceMm: CLEARANCE_MM,
     warmUpS: WARM_UP_S,
@@ -74,7 +82,7 @@ function sheetDrawing({ machine, material }: StripOrder): string | null {
       widthMm: Math.min(settings.sheetWidthMm, material.settings.sheetWidthMm),
       heightMm: Math.min(settings.sheetHeightMm, material.settings.sheetHeightMm),
     },
-    widthsMm: stripWidthsOf(material.settings),
+    widthsMm: STRIP_WIDTHS_MM,
   });
   if (!strip) refuse(findings);
   return writeDxfDocument(strip.document, 'r2000');

@@ -2,7 +2,6 @@ import { createHash } from 'node:crypto';
 import DxfParser from 'dxf-parser';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { STRIP_WIDTHS_MM } from '#geometry/cutting/test-strip.ts';
-import { stripWidthsOf } from '#server/contracts/kerf-strip.ts';
 import { balsa, extrudedFoam, handBow, laser, router, wireBench } from '#server/contracts/shop-samples.ts';
 import { Refusal } from '#server/refusal.ts';
 import { stripFile, type StripName, type StripOrder } from '#server/shop/strips/strip.ts';
@@ -30,18 +29,18 @@ function refusal(name: StripName, asked: StripOrder): Refusal {
   throw new Error('not refused');
 }
 
-describe('the widths of a strip', () => {
-  it('are those of which the foam holds all above what it is held by', () => {
-    const widths = (blockHeightMm: number) => stripWidthsOf({ ...extrudedFoam, blockHeightMm });
-    expect([24.9, 25, 44.9, 45, 84.9, 85].map((height) => widths(height).length)).toEqual([0, 1, 1, 2, 2, 3]);
-    expect(stripWidthsOf(balsa)).toEqual(STRIP_WIDTHS_MM);
-  });
-
-  it.each([25, 45, 60, 85, 100])('can be cut from foam %d mm high', (blockHeightMm) => {
-    const material = { ...extrudedFoam, blockHeightMm };
-    const { text } = stripFile('strip.nc', order(wireBench, material));
-    expect(text).toContain(`(Pieces: ${stripWidthsOf(material).join(', ')} mm, from the top)`);
-    expect(text.match(/\(Part: Cut \d/g)).toHaveLength(stripWidthsOf(material).length + 1);
+describe('the foam of a strip', () => {
+  it.each([
+    [20, '20 x 90'],
+    [60, '60 x 90'],
+    [89.9, '89.9 x 90'],
+    [90, '100 x 90'],
+    [120, '100 x 120'],
+  ])('%d mm high is cut into all the pieces as %s mm', (blockHeightMm, size) => {
+    const { text } = stripFile('strip.nc', order(wireBench, { ...extrudedFoam, blockHeightMm }));
+    expect(text).toContain(`, ${size} mm)`);
+    expect(text).toContain(`(Pieces: ${STRIP_WIDTHS_MM.join(', ')} mm, from the top)`);
+    expect(text.match(/\(Part: Cut \d/g)).toHaveLength(STRIP_WIDTHS_MM.length + 1);
   });
 });
 
@@ -79,10 +78,9 @@ describe('the file of a strip', () => {
   });
 
   it('is refused with its field where it cannot be cut', () => {
-    const low = refusal('strip.nc', order(wireBench, { ...extrudedFoam, blockHeightMm: 20 }));
-    expect(low.details.errors).toEqual([
-      { path: 'block.heightMm', message: 'This foam is too low for a test strip.' },
-    ]);
+    const foam = { ...extrudedFoam, blockHeightMm: 60, blockLengthMm: 80 };
+    const little = refusal('strip.nc', order(wireBench, foam));
+    expect(little.details.errors?.map(({ path }) => path)).toEqual(['block.heightMm']);
     const short = refusal('strip.nc', order({ ...wireBench, travelXMm: 120 }, extrudedFoam));
     expect(short.code).toBe('invalid');
     expect(short.details.errors?.length).toBeGreaterThan(0);
@@ -106,7 +104,7 @@ describe('asking for a strip', () => {
     const params = await makeShop(api, marsh);
     const answer = await technician.call('kerfStripFile', { params: { ...params, name: 'strip.nc' } });
     expect(answer.status).toBe(200);
-    expect(answer.text).toContain('(Pieces: 10, 20 mm, from the top)');
+    expect(answer.text).toContain('(Pieces: 10, 20, 40 mm, from the top)');
     const sum = createHash('sha256').update(answer.text).digest('hex');
     expect(answer.headers.get('x-checksum-sha256')).toBe(sum);
     expect(answer.headers.get('content-disposition')).toMatch(
