@@ -107,8 +107,8 @@ function axisMarks(
     ...word,
     at: { x: from.x + (0.3 + k * 0.05) * (to.x - from.x), y: from.y - LEVEL_CLEAR_MM },
   })).find((of) => fits(of, outline, room));
-  // Behind the line's end where the template has no room for it.
-  const placed = inside ?? { ...word, at: { x: to.x + 1, y: to.y + LETTER.small / 2 } };
+  // Behind the line's end where the template has no room for it, clear of the last tick's number.
+  const placed = inside ?? { ...word, at: { x: to.x + 5, y: to.y + LETTER.small / 2 } };
   if (!inside && (touches(textBox(placed), outline) || !room.isFree(textBox(placed))))
     return { lines, texts: [] };
   room.take(textBox(placed));

@@ -153,6 +153,15 @@ test('all numbers of the ticks are there where there is room', () => {
   for (let number = 1; number <= most; number += 1) expect(words).toContain(String(number));
 });
 
+test('first and last number stand on small templates too', () => {
+  const { plan } = planned(PLANS['tapered and swept']);
+  for (const { marks } of templatePages(plan, SHEET, 'A4', DETAILS)) {
+    const words = wordsOf(marks);
+    for (const number of ['1', '21', '41']) expect(words).toContain(number);
+    expect(words.some((of) => of.startsWith('level'))).toBe(true);
+  }
+});
+
 test('a sheet that is not released says so on its templates', () => {
   const { plan } = planned(PLANS['by hand']);
   const [page] = templatePages(plan, { ...SHEET, status: 'withdrawn' }, 'A4', DETAILS);
