@@ -12,10 +12,12 @@ type NumberRow = Extract<Row, { kind: 'numbers' }>;
 
 /**
  * The points in the rows of a coordinate file. Lines that count the points are passed over, a third column that says nothing is
- * dropped.
+ * dropped. Tables with both surfaces on a line (station, upper, lower; or x and y of each) are read as two groups.
  * @throws ImportRefusal when there are no points, or a line that is not two numbers
  */
 export function blocksOf({ rows }: Rows): Blocks {
+  const table = tableOf(rows);
+  if (table) return table;
   const columns = columnsOf(rows);
   const groups: SourcePoint[][] = [];
   const counts: string[] = [];
@@ -36,6 +38,36 @@ export function blocksOf({ rows }: Rows): Blocks {
   if (split.note) counts.push(split.note);
   if (counts.length > MOST_COUNTS) throw alone(rows);
   return { blocks: mended(split.groups), notes: [...columns.notes, ...countNote(counts)] };
+}
+
+/** The pairs of columns of a table of both surfaces, and what is said about it. */
+const TABLES = [
+  { count: 4, pairs: [[0, 1], [2, 3]], note: 'read the columns as x and y of the upper, then of the lower surface' },
+  { count: 3, pairs: [[0, 1], [0, 2]], note: 'read the columns as station, upper and lower ordinate' },
+] as const; // prettier-ignore
+
+/** Both surfaces of a table, when every line of numbers has as many of them and the stations run one way. */
+function tableOf(rows: readonly Row[]): Blocks | null {
+  const numbers = rows.filter((row) => row.kind === 'numbers');
+  const table = TABLES.find(({ count }) => numbers.every(({ values }) => values.length === count));
+  if (!table || numbers.length === 0) return null;
+  const surfaces = table.pairs.map(([x, y]) =>
+    numbers.map(({ values, line }) => ({ x: values[x] ?? 0, y: values[y] ?? 0, line })),
+  );
+  const stations = surfaces.every((points) => runsOneWay(points.map(({ x }) => x)));
+  const ordinates = surfaces.every((points) => points.some(({ y }) => y !== points[0]?.y));
+  if (!stations || !ordinates || (table.count === 3 && counts(numbers))) return null;
+  return { blocks: surfaces, notes: [table.note] };
+}
+
+function runsOneWay(values: readonly number[]): boolean {
+  const steps = values.slice(1).map((value, i) => value - (values[i] ?? 0));
+  return steps.every((step) => step > 0) || steps.every((step) => step < 0);
+}
+
+/** Whether the first column counts the lines. */
+function counts(numbers: readonly NumberRow[]): boolean {
+  return numbers.every(({ values }, i) => values[0] === (numbers[0]?.values[0] ?? 0) + i);
 }
 
 const MOST_COUNTS = 4;
@@ -71,7 +103,7 @@ function columnsOf(rows: readonly Row[]): Columns {
   if (triples.length <= pairs.length) return { x: 0, y: 1, count: 2, notes: [] };
   const column = (i: number) => triples.map(({ values }) => values[i] ?? 0);
   const same = [2, 1, 0].find((i) => column(i).every((value, _, all) => value === all[0]));
-  const running = column(0).every((value, i, all) => value === (all[0] ?? 0) + i);
+  const running = counts(triples);
   const dropped = running ? 0 : same;
   const first = triples[0]?.line ?? 0;
   if (dropped === undefined) {

@@ -42,6 +42,17 @@ describe('points in groups', () => {
     expect(read('1 7 0\n.5 7 .1').blocks).toEqual([[[1, 0], [0.5, 0.1]]]); // prettier-ignore
   });
 
+  test('tables with both surfaces on a line', () => {
+    expect(read('0 0 0\n.5 .1 -.05\n1 .01 -.01')).toEqual({
+      blocks: [[[0, 0], [0.5, 0.1], [1, 0.01]], [[0, 0], [0.5, -0.05], [1, -0.01]]], // prettier-ignore
+      notes: ['read the columns as station, upper and lower ordinate'],
+    });
+    expect(read('0 0 0 0\n.5 .1 .52 -.05')).toEqual({
+      blocks: [[[0, 0], [0.5, 0.1]], [[0, 0], [0.52, -0.05]]], // prettier-ignore
+      notes: ['read the columns as x and y of the upper, then of the lower surface'],
+    });
+  });
+
   test('the mark between elements parts them', () => {
     expect(read('1 0\n0 0\n999 999\n2 0\n1 0').blocks).toHaveLength(2);
   });
@@ -53,7 +64,7 @@ test.each([
   ['5\n'.repeat(5) + '1 0', 'not-numbers', 1, 'Line 1 holds one number, not two.'],
   ['1 0\n1 2 3 4', 'not-numbers', 2, 'Line 2 holds more than three numbers, not 2.'],
   ['1 0\n2 0\n1 2 3', 'not-numbers', 3, 'Line 3 holds 3 numbers, not 2.'],
-  ['1 2 3\n4 5 6', 'not-numbers', 1, 'Line 1 holds three numbers, not two.'],
+  ['4 5 6\n1 2 3\n4 5 7', 'not-numbers', 1, 'Line 1 holds three numbers, not two.'],
 ])('refused: %j', (text, code, line, message) => {
   const refusal = refusalOf(() => read(text));
   expect([refusal.code, refusal.line, refusal.message]).toEqual([code, line, message]);

@@ -35,6 +35,13 @@ describe('one section in many dialects', () => {
     expect(contour.sourceChordMm).toBe(null);
   }); // prettier-ignore
 
+  test('a table of stations with both ordinates, in per cent', () => {
+    const symmetric = upper.map(({ x }) => ({ x, y: 0.6 * (0.2969 * Math.sqrt(x) - 0.126 * x - 0.3516 * x ** 2 + 0.2843 * x ** 3 - 0.1036 * x ** 4) }));
+    const { repairs, x } = read(symmetric.map((p) => `${100 * p.x} ${100 * p.y} ${-100 * p.y}`).join('\n'));
+    expect(repairs).toEqual(['read the columns as station, upper and lower ordinate', surfaces, 'scaled from per cent of chord']);
+    expect(x).toHaveLength(39);
+  }); // prettier-ignore
+
   test('mm and per cent, and what tells 100 mm from per cent', () => {
     const by = (factor: number) => listed(SHARP.map(({ x, y }) => ({ x: factor * x, y: factor * y })));
     expect(read(by(250))).toMatchObject({ sourceChordMm: 250, repairs: ['scaled from 250 mm chord'] });
