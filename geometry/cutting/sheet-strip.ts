@@ -1,8 +1,8 @@
 import { z } from 'zod';
-import { THIN_WIDTH_MM } from '../formats/drawing.ts';
-import { type DxfDocument, type DxfEntity, type DxfLayer } from '../formats/dxf-document.ts';
+import { type DxfDocument, type DxfEntity } from '../formats/dxf-document.ts';
 import { type Polyline, boxOf, polylineOf } from './arrays.ts';
 import { name } from './fields.ts';
+import { RIB_LAYERS } from './files/layers.ts';
 import { type Finding, error, findingsOf, mm } from './findings.ts';
 import { ribsSchema } from './plan.ts';
 import { strokeText, strokeWidth } from './strokes.ts';
@@ -34,14 +34,8 @@ const GAP_MM = 10;
 const DIGITS_MM = 4;
 const TEXT_MM = 3;
 
-const layer = (layerName: string, color: number): DxfLayer => ({
-  name: layerName,
-  color,
-  centerLine: false,
-  lineWeight: THIN_WIDTH_MM * 100,
-});
-/** Colours as on the other cut files: red is cut, blue engraved. */
-const LAYERS = [layer('ENGRAVE', 5), layer('CUT', 1), layer('TEXT', 3)] as const;
+/** Those of a sheet of ribs that a strip needs. */
+const LAYERS = RIB_LAYERS.filter(({ name: layer }) => layer !== 'REFERENCE');
 
 const CAUTIONS = {
   laser: 'Caution: beam and fumes, cut behind the closed cover, with extraction, and stay with it.',
