@@ -1,122 +1,13 @@
 import { type Knex } from 'knex';
-import { z } from 'zod';
-import { idSchema, timeSchema } from '#server/contracts/common.ts';
 import { type CutSheet, type CutSheetListQuery } from '#server/contracts/cut-sheets.ts';
-import { type VersionStatus } from '#server/contracts/sections.ts';
-import { continueBehind, decodeCursor, encodeCursor, pageOfRows } from '#server/database/cursor.ts';
+import { continueBehind, pageOfRows } from '#server/database/cursor.ts';
 import { containing, joinScoped, scoped } from '#server/database/scoped.ts';
 import { Refusal } from '#server/refusal.ts';
 import { type Reach } from '#server/sections/rules.ts';
 import { progressOf } from '../progress.ts';
-import {
-  joinSources,
-  joinThings,
-  machineOf,
-  materialOf,
-  partsOfColumn,
-  sourceOf,
-  type SourceRow,
-  type ThingRow,
-} from '../source-rows.ts';
-import { type Sort, views } from './views.ts';
-
-interface SheetColumns {
-  id: string;
-  name: string;
-  purpose: string;
-  created_at: Date;
-  shown_at: Date;
-  shown_by: string;
-  shown_by_name: string;
-  shown_count: number;
-  archived: 0 | 1;
-  released_number: number | null;
-  sort_value: string | Date;
-  number: number;
-  status: VersionStatus;
-  root_chord_mm: number;
-  tip_chord_mm: number;
-  span_mm: number;
-  quantity: number;
-  parts: string;
-  errors: number;
-  warnings: number;
-}
-type Row = SheetColumns & SourceRow & ThingRow<'machine' | 'material'>;
-
-function sheetOf(row: Row, progress: CutSheet['progress']): CutSheet {
-  return {
-    id: row.id,
-    name: row.name,
-    purpose: row.purpose,
-    archived: row.archived === 1,
-    createdAt: row.created_at.toISOString(),
-    updatedAt: row.shown_at.toISOString(),
-    updatedBy: { id: row.shown_by, name: row.shown_by_name },
-    versionCount: row.shown_count,
-    releasedNumber: row.released_number,
-    latest: {
-      number: row.number,
-      status: row.status,
-      root: sourceOf(row, 'root'),
-      tip: sourceOf(row, 'tip'),
-      rootChordMm: row.root_chord_mm,
-      tipChordMm: row.tip_chord_mm,
-      spanMm: row.span_mm,
-      quantity: row.quantity,
-      parts: partsOfColumn(row.parts),
-      machine: machineOf(row.machine_id, row.machine_name, row.machine_kind),
-      material: materialOf(row.material_id, row.material_name),
-      errors: row.errors,
-      warnings: row.warnings,
-    },
-    progress,
-  };
-}
-
-const versionColumns = [
-  'number',
-  'status',
-  'root_chord_mm',
-  'tip_chord_mm',
-  'span_mm',
-  'quantity',
-  'parts',
-  'errors',
-  'warnings',
-];
-
-/** Adds version, sections, machine and person to sheets that are already chosen: a page is cut before anything is joined to it. */
-function withVersions(db: Knex, chosen: Knex.QueryBuilder): Knex.QueryBuilder {
-  const rows = db
-    .from(chosen.as('s'))
-    .select('s.*', 'p.name as shown_by_name', ...versionColumns.map((column) => `v.${column}`));
-  joinScoped(rows, 'inner', ['cut_sheet_versions', 'v'], 's', [
-    ['v.sheet_id', 's.id'],
-    ['v.number', 's.shown_number'],
-  ]);
-  joinScoped(rows, 'inner', ['people', 'p'], 's', [['p.id', 's.shown_by']]);
-  joinSources(rows, 'v');
-  return joinThings(rows, 'v', ['machine', 'material']);
-}
-
-function columnsOf(reach: Reach, sort: Sort): string[] {
-  const view = views[reach];
-  return [
-    's.workshop_id',
-    's.id',
-    's.name',
-    's.purpose',
-    's.created_at',
-    's.archived',
-    's.released_number',
-    `s.${view.at} as shown_at`,
-    `s.${view.by} as shown_by`,
-    `s.${view.count} as shown_count`,
-    `s.${view.number} as shown_number`,
-    `s.${view.sorts[sort].column} as sort_value`,
-  ];
-}
+import { cursorOf, placeOf } from './cursor.ts';
+import { columnsOf, type Row, sheetOf, withVersions } from './rows.ts';
+import { views } from './views.ts';
 
 /** How many section versions behind the shown version of `s` are not released: as a number, which leaves the order of the list alone. */
 function staleEnds(db: Knex, workshopId: string, reach: Reach): Knex.QueryBuilder {
@@ -157,20 +48,6 @@ function narrow(
   }
 }
 
-const cursorSchemas = {
-  updated: z.tuple([z.literal('updated'), timeSchema.transform((text) => new Date(text)), idSchema]),
-  name: z.tuple([z.literal('name'), z.string().max(60), idSchema]),
-} as const satisfies Record<Sort, z.ZodType>;
-
-function cursorOf(sort: Sort, { sort_value: value, id }: Row): string {
-  return encodeCursor([sort, value instanceof Date ? value.toISOString() : value, id]);
-}
-
-function placeOf(cursor: string, sort: Sort): { value: string | Date; id: string } {
-  const [, value, id] = decodeCursor<readonly [Sort, string | Date, string]>(cursor, cursorSchemas[sort]);
-  return { value, id };
-}
-
 /** The query behind a page of the list, for one row more than the page; apart, so that it can be explained. */
 export function sheetListQuery(
   db: Knex,
@@ -208,7 +85,7 @@ export async function listCutSheets(
   const { page, last } = pageOfRows(rows, asked.limit);
   return {
     items: await withProgress(db, workshopId, page),
-    nextCursor: last ? cursorOf(asked.sort, last) : null,
+    nextCursor: last ? cursorOf(asked.sort, { value: last.sort_value, id: last.id }) : null,
   };
 }
 
