@@ -1,4 +1,5 @@
 import { type ReactNode, useRef } from 'react';
+import { formatLength, formatPercent, type Units, useUnits } from '#client/app/units.ts';
 import { Button } from '#client/ui/button.tsx';
 import { Menu, MenuItem } from '#client/ui/menu.tsx';
 import { PLAN_LIMITS } from '#geometry/cutting/plan.ts';
@@ -96,6 +97,7 @@ interface FeatureItemProps {
 
 function FeatureItem({ feature, index, last, onMove, onRemove }: FeatureItemProps) {
   const { enabled, marks } = usePlannerFields();
+  const units = useUnits();
   const path = `features.${index}`;
   const word = WORDS[feature.kind];
   const worst = worstMark([...marks].filter(([at]) => at.startsWith(`${path}.`)).map(([, mark]) => mark));
@@ -106,7 +108,7 @@ function FeatureItem({ feature, index, last, onMove, onRemove }: FeatureItemProp
           className={`grid min-h-7 grid-cols-[1.25rem_minmax(0,1fr)_auto] list-none items-center gap-x-1 pointer-coarse:min-h-11 [&::-webkit-details-marker]:hidden ${worst}`}
         >
           <span className="text-graphite">{index + 1}</span>
-          <span className="truncate font-semibold">{nameOf(feature)}</span>
+          <span className="truncate font-semibold">{nameOf(feature, units)}</span>
           <span className="text-graphite">{placeOf(feature)}</span>
         </summary>
         <div className="flex flex-col gap-1 pt-1 pb-2 pl-5">
@@ -149,15 +151,15 @@ function worstMark(marks: readonly string[]): string {
   return marks.includes('warning') ? 'shadow-[inset_3px_0_0_var(--amber)] pl-1.5' : '';
 }
 
-function nameOf({ kind, name, widthMm, diameterMm }: FeatureValues): string {
+function nameOf({ kind, name, widthMm, diameterMm }: FeatureValues, units: Units): string {
   const size = kind === 'tube' ? diameterMm : widthMm;
   const called = typeof name === 'string' && name.trim() !== '' ? name : WORDS[kind];
-  return typeof size === 'number' ? `${called}, ${Number(size.toFixed(2))} mm` : called;
+  return typeof size === 'number' ? `${called}, ${formatLength(size, units, 1)}` : called;
 }
 
 function placeOf({ rootStation, surface, entry, hingeSurface }: FeatureValues): string {
   const side = surface ?? entry ?? hingeSurface;
-  const station = typeof rootStation === 'number' ? `${(rootStation * 100).toFixed(1)} %` : '';
+  const station = typeof rootStation === 'number' ? formatPercent(rootStation, 1) : '';
   return typeof side === 'string' ? `${station} ${side}` : `${station} through`;
 }
 

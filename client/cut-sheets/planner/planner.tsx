@@ -87,6 +87,7 @@ function OpenedPlanner({ sheet, base, opened, mirror, mayWrite }: OpenedPlannerP
       <SaveDialogs
         saving={saving}
         values={planForm.present}
+        names={planner.names}
         basedOn={planner.basedOn}
         nextNumber={planner.nextNumber}
         findings={countWords(findings)}

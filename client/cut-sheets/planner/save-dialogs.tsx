@@ -8,7 +8,7 @@ import { Dialog } from '#client/ui/dialog.tsx';
 import { Moment } from '#client/ui/moment.tsx';
 import { Notice } from '#client/ui/notice.tsx';
 import { TextAreaField } from '#client/ui/text-field.tsx';
-import { differencesOf } from './plan-differences.ts';
+import { differencesOf, type Names } from './plan-differences.ts';
 import { type PlanValues } from './plan-values.ts';
 import { type useSheetSave } from './use-sheet-save.ts';
 
@@ -19,17 +19,19 @@ interface SaveDialogsProps {
   readonly values: PlanValues;
   readonly basedOn: number;
   readonly nextNumber: number;
+  /** What the ids in the values stand for. */
+  readonly names: Names;
   /** How the findings stand: "0 errors, 1 caution, 2 notes". */
   readonly findings: string;
 }
 
 /** The dialogs of saving: the note, and a save that met another one. */
 export function SaveDialogs(props: SaveDialogsProps) {
-  const { saving, values, basedOn } = props;
+  const { saving, values, basedOn, names } = props;
   const { save } = saving;
   if (save.step === 'asking') return <SaveDialog {...props} refusal={save.refusal} />;
   if (save.step === 'conflict')
-    return <ConflictDialog latest={save.latest} values={values} basedOn={basedOn} saving={saving} />;
+    return <ConflictDialog latest={save.latest} {...{ values, basedOn, saving, names }} />;
   return null;
 }
 
@@ -86,11 +88,13 @@ interface ConflictDialogProps {
   readonly values: PlanValues;
   readonly basedOn: number;
   readonly saving: SaveDialogsProps['saving'];
+  readonly names: Names;
 }
 
 /** Somebody saved in between. Nothing is lost: what differs is shown, and the person decides. */
-function ConflictDialog({ latest, values, basedOn, saving }: ConflictDialogProps) {
-  const differences = differencesOf(latest.plan, values);
+function ConflictDialog({ latest, values, basedOn, saving, names }: ConflictDialogProps) {
+  const known = new Map([...names, ...namesOf(latest)]);
+  const differences = differencesOf(latest.plan, values, known);
   return (
     <Dialog
       title={`Version ${latest.number} came in between`}
@@ -133,4 +137,20 @@ function ConflictDialog({ latest, values, basedOn, saving }: ConflictDialogProps
       </div>
     </Dialog>
   );
+}
+
+function namesOf({
+  root,
+  tip,
+  machine,
+  material,
+  ribMachine,
+  ribMaterial,
+}: SheetVersion): [string, string][] {
+  return [
+    ...[root, tip].map(({ sectionId, sectionName }): [string, string] => [sectionId, sectionName]),
+    ...[machine, material, ribMachine, ribMaterial].flatMap((of): [string, string][] =>
+      of ? [[of.id, of.name]] : [],
+    ),
+  ];
 }

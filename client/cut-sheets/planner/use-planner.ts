@@ -10,6 +10,7 @@ import { type PlanIdentity } from '../views/plan-title-block.tsx';
 import { useWorked } from '../views/use-worked.ts';
 import { secondsOfLine } from '../views/wire-position.ts';
 import { focusPath } from './focus-path.ts';
+import { type Names } from './plan-differences.ts';
 import { type OpenedPlan, type PlanMirror } from './open-plan.ts';
 import { type PlanErrors, type PlanValues, sameValues } from './plan-values.ts';
 import { fieldsOf, usePlanForm } from './use-plan-form.ts';
@@ -83,13 +84,24 @@ export function usePlanner({ sheet, base, opened, mirror, mayWrite, formElement 
     dirty,
     basedOn,
     nextNumber: Math.max(sheet.versionCount, sheet.latest.number, version.number) + 1,
-    refused: refusedWords(read.errors.size),
+    refused: refusedWords(read.errors.size, worked.error !== null),
+    names: namesOf(sources),
     machine: sources.machines?.find(({ id }) => id === present['machineId'])?.settings.kind ?? null,
     identity: useIdentity(sheet.name, version, sources, dirty, basedOn),
   };
 }
 
-function refusedWords(errors: number): string | null {
+function namesOf({ root, tip, machines, materials }: PlanSources): Names {
+  return new Map([
+    ...[root, tip].map(({ sectionId, name }) => [sectionId, name ?? sectionId] as const),
+    ...[...(machines ?? []), ...(materials ?? [])].map(({ id, name }) => [id, name] as const),
+  ]);
+}
+
+/** Why the drawing is not of what the form says; null when it is. */
+function refusedWords(errors: number, failed: boolean): string | null {
+  if (failed)
+    return 'The plan could not be worked out in this browser: keep it as a draft and load the page again.';
   if (errors === 0) return null;
   return `${errors === 1 ? 'One value is' : `${errors} values are`} not usable: the drawing shows the last plan that was.`;
 }

@@ -25,3 +25,11 @@ test('a feature that only one of them has is one difference', () => {
   const yours = withValue(valuesOf(PLAN), 'features', []);
   expect(differencesOf(PLAN, yours)).toEqual([{ place: 'features, 1', theirs: 'given', yours: 'none' }]);
 });
+
+test('things are called by their names where these are known', () => {
+  const yours = withValue(valuesOf(PLAN), 'materialId', 'other');
+  const names = new Map([[String(PLAN.materialId), 'XPS 32']]);
+  expect(differencesOf(PLAN, yours, names)).toEqual([
+    { place: 'material', theirs: 'XPS 32', yours: 'other' },
+  ]);
+});

@@ -77,7 +77,7 @@ test('shows the plan, what it comes to, and what there is to know of it', async 
   expect(fieldAt('features.0.rootStation').value).toBe('40.0 %');
   expect(findingOf(/^Note\. At the root the skins meet/)).toBeDefined();
   expect(within(labelled('Figures')).getByText(/ g$/)).toBeTruthy();
-  expect(screen.getByText(/^Hot wire burns.*cold wire/)).toBeTruthy();
+  expect(screen.getByText(/the emergency stop in reach\.$/)).toBeTruthy();
 });
 
 test('a value that cannot be read stays, is kept as it is, dims the drawing, and is undone', async () => {
