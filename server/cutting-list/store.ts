@@ -138,6 +138,12 @@ function thingsOf(row: VersionRow, part: SheetPart): Pick<CuttingListItem, 'mach
   };
 }
 
+/** Whether a file is needed to make a part: who cuts a core by hand follows the templates. */
+function isNeeded(file: FileRow, row: VersionRow, part: SheetPart): boolean {
+  if (file.part === part || file.part === 'sheet') return true;
+  return part === 'core' && file.part === 'templates' && row.machine_kind !== 'wire';
+}
+
 function itemOf(
   row: VersionRow,
   part: SheetPart,
@@ -145,7 +151,7 @@ function itemOf(
   files: readonly FileRow[],
 ): CuttingListItem {
   const isReleased = row.status === 'released';
-  const own = files.filter((file) => file.part === part || file.part === 'sheet');
+  const own = files.filter((file) => isNeeded(file, row, part));
   return {
     sheetId: row.sheet_id,
     sheetName: row.sheet_name,

@@ -37,6 +37,15 @@ async function checkHeader(bytes: Buffer, type: string): Promise<void> {
   }
 }
 
+let last: Promise<unknown> = Promise.resolve();
+
+/** One photograph after the other: a large one takes some hundred megabytes while it is unpacked. */
+function inTurn<Result>(work: () => Promise<Result>): Promise<Result> {
+  const turn = last.then(work);
+  last = turn.catch(() => undefined);
+  return turn;
+}
+
 /**
  * Encodes a photograph as a JPEG of at most {@link LONGEST_SIDE_PX} on its long side: turned as its orientation says, in sRGB, on
  * white where it was transparent, and without position, time, names or any other metadata. What it is decides its content alone.
@@ -47,7 +56,17 @@ export async function encodePhoto(bytes: Buffer): Promise<EncodedPhoto> {
   const type = photoTypeOf(bytes);
   if (type === null) throw refused('A photograph is a JPEG, PNG or WebP file.');
   await checkHeader(bytes, type);
-  const { data, info } = await sharp(bytes, options)
+  const { data, info } = await inTurn(() => encoded(bytes));
+  return {
+    bytes: data,
+    width: info.width,
+    height: info.height,
+    checksum: createHash('sha256').update(data).digest('hex'),
+  };
+}
+
+function encoded(bytes: Buffer) {
+  return sharp(bytes, options)
     .timeout({ seconds: LONGEST_SECONDS })
     .autoOrient()
     .resize({ width: LONGEST_SIDE_PX, height: LONGEST_SIDE_PX, fit: 'inside', withoutEnlargement: true })
@@ -57,10 +76,4 @@ export async function encodePhoto(bytes: Buffer): Promise<EncodedPhoto> {
     .catch(() => {
       throw refused('The photograph is damaged or broken off.');
     });
-  return {
-    bytes: data,
-    width: info.width,
-    height: info.height,
-    checksum: createHash('sha256').update(data).digest('hex'),
-  };
 }

@@ -1,14 +1,18 @@
 import { v4 as uuid } from 'uuid';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { handBow } from '#server/contracts/shop-samples.ts';
+import { createCutSheet } from '#server/cut-sheets/store.ts';
 import { releaseSheetVersion, withdrawSheetVersion } from '#server/cut-sheets/versions/status-store.ts';
 import { findSheetVersion } from '#server/cut-sheets/versions/store.ts';
 import { saveVersion } from '#server/sections/versions/store.ts';
 import { releaseVersion } from '#server/sections/versions/status-store.ts';
+import { createItem, machines } from '#server/shop/store.ts';
 import { startApi, type TestApi, type TestWorkshop } from '../support/api.ts';
 import { type Client } from '../support/client.ts';
+import { byHand, handTemplate } from '../support/floor.ts';
 import { makeSamples, makeSection, makeShop } from '../support/requests.ts';
 import { naca4 } from '../support/shapes.ts';
-import { cheapWorks, makeSheet, type PlanParts, sampleNames } from '../support/sheets.ts';
+import { cheapWorks, makeSheet, type PlanParts, sampleNames, samplePlan } from '../support/sheets.ts';
 
 let api: TestApi;
 let marsh: TestWorkshop;
@@ -72,6 +76,29 @@ describe('the cutting list', () => {
       releasedAt: '2026-02-02T09:00:00.000Z',
     });
     expect(item?.root).toMatchObject({ sectionId: parts.sectionId, versionNumber: 1, status: 'released' });
+  });
+
+  it('gives the templates with a core that is cut by hand, and with none that a machine cuts', async () => {
+    const wire = (await listed(await makeOne()))[0];
+    const machine = await createItem(api.knex, author(), machines, { name: 'Bow', settings: handBow });
+    const plan = { ...samplePlan(parts), machineId: machine.id, template: handTemplate };
+    const { id } = await createCutSheet(api.knex, byHand, author(), {
+      name: 'By hand',
+      purpose: '',
+      plan,
+      note: '',
+    });
+    await releaseSheetVersion(api.knex, byHand, author(), { sheetId: id, number: 1, ...signed });
+    const items = await listed(id);
+    expect(items.map(({ part, wanted, files }) => [part, wanted, files])).toEqual([
+      ['core', 2, ['root.dxf', 'templates.pdf', 'cut-sheet.pdf']],
+      ['templates', 1, ['templates.pdf', 'cut-sheet.pdf']],
+    ]);
+    expect(items.map(({ machine: by, material }) => [by?.kind, material?.id])).toEqual([
+      ['bow', parts.materialId],
+      [undefined, undefined],
+    ]);
+    expect(wire?.files).toEqual(['root.dxf']);
   });
 
   it('follows a part from start to done, and lets it go when all are done', async () => {

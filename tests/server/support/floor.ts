@@ -1,8 +1,10 @@
 import sharp from 'sharp';
 import { v4 as uuid } from 'uuid';
+import { type SheetWorks } from '#server/cut-sheets/files/works.ts';
 import { addPhoto } from '#server/inspections/photos/store.ts';
 import { addInspection } from '#server/inspections/store.ts';
 import { type TestApi, type TestWorkshop } from './api.ts';
+import { cheapWorks } from './sheets.ts';
 
 /** A small photograph as a camera sends it. */
 export const photo = await sharp({
@@ -31,3 +33,25 @@ export async function makeInspection(
   const { id: photoId } = await addPhoto(knex, author, 'released', inspectionId, photo);
   return { inspectionId, photoId };
 }
+
+/** A template for two people with a bow. */
+export const handTemplate = {
+  wireDiameterMm: 0.4,
+  ticks: 20,
+  rampFraction: 0.15,
+  pinDiameterMm: 3,
+  pinStations: [0.3, 0.6] as [number, number],
+};
+
+/** Makes a drawing, templates and the printed sheet, each of a few bytes. */
+export const byHand: SheetWorks = {
+  ...cheapWorks,
+  make: async (order) => {
+    const { findings, files } = await cheapWorks.make(order);
+    const printed = (['templates', 'sheet'] as const).map((part) => {
+      const name = part === 'sheet' ? 'cut-sheet.pdf' : 'templates.pdf';
+      return { name, part, downloadName: name, mediaType: 'application/pdf', bytes: Buffer.from(name) };
+    });
+    return { findings, files: [...files, ...printed] };
+  },
+};
