@@ -1,8 +1,8 @@
 import { AxeBuilder } from '@axe-core/playwright';
-import { type Page } from 'playwright-core';
+import { type Locator, type Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { type OpenOptions, startApp, type TestApp, type Visit } from './app.ts';
-import { sectionPath } from './names.ts';
+import { sectionPath, sheetIdOf, sheetPath } from './names.ts';
 
 let app: TestApp;
 beforeAll(async () => {
@@ -27,6 +27,11 @@ const editor = (name: string) => async (page: Page) => {
   await page.goto(await sectionPath(app, name));
   await page.locator('[data-handle="nose"]').waitFor();
   await page.getByRole('button', { name: /^v1/ }).waitFor();
+};
+
+const at = (path: string | (() => Promise<string>), sign: (page: Page) => Locator) => async (page: Page) => {
+  await page.goto(typeof path === 'string' ? path : await path());
+  await sign(page).first().waitFor();
 };
 
 const screens: readonly Screen[] = [
@@ -90,6 +95,60 @@ const screens: readonly Screen[] = [
       await page.getByRole('button', { name: 'Release…' }).click();
       await page.getByRole('dialog').waitFor();
     },
+  },
+  {
+    name: 'desk',
+    as: 'designer',
+    show: at('/', (page) => page.getByRole('heading', { name: /^Sections changed last/ })),
+  },
+  {
+    name: 'cut sheets',
+    as: 'builder',
+    show: at('/cut-sheets', (page) => page.getByRole('link', { name: 'Heron outer panel', exact: true })),
+  },
+  {
+    name: 'planner',
+    as: 'builder',
+    show: at(
+      () => sheetPath(app, 'Heron outer panel'),
+      (page) => page.getByText('Planform, seen from above'),
+    ),
+  },
+  {
+    name: 'planner with findings',
+    as: 'designer',
+    show: at(
+      () => sheetPath(app, 'Bittern wing'),
+      (page) => page.getByRole('button', { name: /^Error/ }),
+    ),
+  },
+  {
+    name: 'cut sheet in force',
+    as: 'technician',
+    show: at(
+      () => sheetPath(app, 'Heron outer panel', 2),
+      (page) => page.getByRole('button', { name: 'Download all.zip' }),
+    ),
+  },
+  {
+    name: 'cutting list',
+    as: 'technician',
+    show: at('/cutting-list', (page) => page.getByRole('button', { name: 'Start' })),
+  },
+  {
+    name: 'measuring',
+    as: 'technician',
+    show: at(
+      async () => `/cutting-list/inspect/${await sheetIdOf(app, 'Heron outer panel')}/2`,
+      (page) => page.getByRole('table', { name: 'Readings' }),
+    ),
+  },
+  {
+    name: 'inspections',
+    as: 'designer',
+    show: at('/inspections', (page) =>
+      page.getByRole('heading', { name: 'Deviation by section and machine' }),
+    ),
   },
   {
     name: 'account',
