@@ -16,8 +16,9 @@ const trip = (name: string) =>
 
 /**
  * Under what conditions a section is calculated.
- * `reynolds` of the chord; `criticalN` the exponent N of the e^N method (9 in a quiet stream, see criticalExponent); `tripUpper`, `tripLower` chord
- * stations at which the layer turns turbulent at the latest, 1 for free transition; `mach` corrects the pressures only (see karmanTsien).
+ * `reynolds` of the chord; `criticalN` the exponent N of the e^N method (9 in a quiet stream, see criticalExponent); `tripUpper`,
+ * `tripLower` chord stations at which the layer turns turbulent at the latest, 1 for free transition; `mach` corrects the pressures only
+ * (see karmanTsien).
  */
 export const viscousConditionsSchema = z.strictObject({
   reynolds: numberWithin(VISCOUS_LIMITS.reynolds, 'reynolds must be between 30,000 and 20,000,000'),

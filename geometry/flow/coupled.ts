@@ -22,8 +22,8 @@ export interface Convergence {
 }
 
 /**
- * Layer and outer flow solved together: in turn the layer is brought onto its equations (project) and both onto each other by a Newton step. Steps that do not bring them closer are
- * halved, which ends the to and fro of a transition point at a node [own choice].
+ * Layer and outer flow solved together: in turn the layer is brought onto its equations (project) and both onto each other by a Newton
+ * step. Steps that do not bring them closer are halved, which ends the to and fro of a transition point at a node [own choice].
  */
 export class CoupledLayer {
   readonly layer: Layer;

@@ -15,8 +15,9 @@ export interface OuterFlow {
 }
 
 /**
- * The influence of mass defects m = ue δ* (Lighthill, J. Fluid Mech. 4, 1958: the layer displaces the flow like sources dm/ds on the surface): a panel carries (M_j − M_{j+1})/L_j with
- * the signed defects M, whichever way the flow runs, so that the surface's part is found once for a section.
+ * The influence of mass defects m = ue δ* (Lighthill, J. Fluid Mech. 4, 1958: the layer displaces the flow like sources dm/ds on the
+ * surface): a panel carries (M_j − M_{j+1})/L_j with the signed defects M, whichever way the flow runs, so that the surface's part is found
+ * once for a section.
  */
 export class Coupling {
   readonly system: PanelSystem;

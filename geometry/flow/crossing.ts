@@ -5,8 +5,9 @@ import { START_SHARE } from './turbulent.ts';
 const START = Math.sqrt(START_SHARE);
 
 /**
- * The interval in which the layer turns turbulent, at a share ξ of its length (Drela & Giles, AIAA J. 25, 1987): the state there is interpolated linearly; the
- * laminar equations hold up to it and the turbulent ones behind it, and their residuals are added. Shear stress starts with CT = 0.7 CTeq.
+ * The interval in which the layer turns turbulent, at a share ξ of its length (Drela & Giles, AIAA J. 25, 1987): the state there is
+ * interpolated linearly; the laminar equations hold up to it and the turbulent ones behind it, and their residuals are added. Shear stress
+ * starts with CT = 0.7 CTeq.
  */
 export class Crossing {
   readonly residual = new Float64Array(3);

@@ -17,7 +17,10 @@ export interface CurveFigures {
   readonly zeroLiftDeg: number | null;
   /** Moment about the quarter chord at zero lift. */
   readonly zeroLiftMoment: number | null;
-  /** Lift curve slope per degree: straight line through the converged points from a degree below to ten degrees above zero lift that stay below 85 % of the highest lift [own range]. */
+  /**
+   * Lift curve slope per degree: straight line through the converged points from a degree below to ten degrees above zero lift that stay
+   * below 85 % of the highest lift [own range].
+   */
   readonly slopePerDeg: number | null;
   /** Lift coefficients round that of least drag between which drag is at most a fifth higher [own measure]. */
   readonly lowDrag: { readonly from: number; readonly to: number } | null;

@@ -1,6 +1,7 @@
 /**
- * Dense systems of equations by elimination with partial pivoting (Golub & Van Loan, Matrix Computations, §3.2 and §3.4), rows one after the other
- * in one array. Four pivots are eliminated in one pass over the remaining rows: the passes over memory, not the arithmetic, set the time.
+ * Dense systems of equations by elimination with partial pivoting (Golub & Van Loan, Matrix Computations, §3.2 and §3.4), rows one after
+ * the other in one array. Four pivots are eliminated in one pass over the remaining rows: the passes over memory, not the arithmetic, set
+ * the time.
  */
 const BLOCK = 4;
 

@@ -34,8 +34,10 @@ const field = (name: string, kind: Field, unit: string) =>
 const chord = (name: string) => field(name, 'chordMm', ' mm');
 
 /**
- * The aircraft and the air for which a section is judged: mass, wing, speed (or a lift coefficient in level flight), altitude and the state of the surface.
- * `turbulencePercent` is that of the air the wing meets: 0.07 gives the exponent N = 9 of a quiet tunnel. A trip is the chord station at which the surface forces the layer turbulent; null leaves it free.
+ * The aircraft and the air for which a section is judged: mass, wing, speed (or a lift coefficient in level flight), altitude and the state
+ * of the surface.
+ * `turbulencePercent` is that of the air the wing meets: 0.07 gives the exponent N = 9 of a quiet tunnel. A trip is the chord station at
+ * which the surface forces the layer turbulent; null leaves it free.
  */
 export const flightConditionSchema = z.strictObject({
   massKg: field('massKg', 'massKg', ' kg'),
@@ -98,7 +100,8 @@ export function checkFlightCondition(input: unknown): FlightCondition {
 }
 
 /**
- * Density, Reynolds numbers and the lift coefficient needed, in level flight: ½ ρ V² S c_l = m g. Where the wing is given by its area the mean chord is that of a straight taper from root to tip.
+ * Density, Reynolds numbers and the lift coefficient needed, in level flight: ½ ρ V² S c_l = m g. Where the wing is given by its area the
+ * mean chord is that of a straight taper from root to tip.
  */
 export function flightFigures(condition: FlightCondition): FlightFigures {
   const { wing, rootChordMm, tipChordMm, flight, surface } = condition;

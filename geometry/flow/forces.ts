@@ -15,8 +15,8 @@ export interface Forces {
 }
 
 /**
- * Integrates the pressures: cp is averaged over each panel for a speed linear along it, (γ₁² + γ₁γ₂ + γ₂²)/3, which is exact for these panels; the face
- * of a blunt edge has the pressure of the speed with which the flow leaves.
+ * Integrates the pressures: cp is averaged over each panel for a speed linear along it, (γ₁² + γ₁γ₂ + γ₂²)/3, which is exact for these
+ * panels; the face of a blunt edge has the pressure of the speed with which the flow leaves.
  * @param speed at the nodes, over free stream @param alpha radians @param mach 0 … 0.5
  * @throws ShapeError when the Mach number is out of range
  */

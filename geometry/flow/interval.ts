@@ -9,8 +9,8 @@ const UPWIND_WAKE = 1;
 export const PER_ROW = 5;
 
 /**
- * The integral equations between two stations, in logarithmic differences (so that similar flows near stagnation and on a plate come out nearly exactly;
- * form of Drela & Giles, AIAA J. 25 (1987), from memory):
+ * The integral equations between two stations, in logarithmic differences (so that similar flows near stagnation and on a plate come out
+ * nearly exactly; form of Drela & Giles, AIAA J. 25 (1987), from memory):
  *   momentum  ln(θ₂/θ₁) + (H + 2 + h) ln(u₂/u₁) − [(cf/2) s/θ] ln(s₂/s₁) = 0
  *   shape     ln(H*₂/H*₁) + (1 − H − h) ln(u₂/u₁) + [(cf/2 − 2CD/H*) s/θ] ln(s₂/s₁) = 0
  *   lag       2 ln(c₂/c₁) − K (c_eq − c)(s₂ − s₁)/δ = 0        (turbulent and wake)

@@ -23,9 +23,10 @@ export interface PanelSystem {
 const INSIDE_EDGE = 0.3;
 
 /**
- * Sets up the stream-function equations (linear-vorticity panels: Drela, in Mueller (ed.), Low Reynolds Number Aerodynamics, 1989): at each node
- * the stream function of stream and panels equals one constant ψ₀, so that the air inside rests and the vortex strength is the speed outside;
- * Kutta: γ₁ + γ_N = 0. At a sharp edge nodes 1 and N coincide; there the speed along the bisector just inside is set to zero [own choice].
+ * Sets up the stream-function equations (linear-vorticity panels: Drela, in Mueller (ed.), Low Reynolds Number Aerodynamics, 1989): at each
+ * node the stream function of stream and panels equals one constant ψ₀, so that the air inside rests and the vortex strength is the speed
+ * outside; Kutta: γ₁ + γ_N = 0. At a sharp edge nodes 1 and N coincide; there the speed along the bisector just inside is set to zero [own
+ * choice].
  * @param withSources also prepares what source panels do, for the boundary layer
  * @throws ShapeError when the contour gives no solution, as one that crosses itself may
  */

@@ -6,8 +6,8 @@ export const STAGNATION_H = 2.2401;
 export const STAGNATION_LAMBDA = 0.084305;
 
 /**
- * Laminar closure: fits to the Falkner–Skan profiles, Drela & Giles, AIAA J. 25 (1987), pp. 1347–1355 (coefficients from memory, tested against the
- * similarity solutions).
+ * Laminar closure: fits to the Falkner–Skan profiles, Drela & Giles, AIAA J. 25 (1987), pp. 1347–1355 (coefficients from memory, tested
+ * against the similarity solutions).
  */
 export class LaminarClosure implements Closure {
   hs = 0;

@@ -28,7 +28,8 @@ export interface Side {
 }
 
 /**
- * The boundary layer's and the wake's state at all nodes of the panels. Sides change with the stagnation point; the state stays with its node.
+ * The boundary layer's and the wake's state at all nodes of the panels. Sides change with the stagnation point; the state stays with its
+ * node.
  */
 export class Layer {
   readonly panels: Panels;
@@ -156,8 +157,8 @@ export class Layer {
   }
 
   /**
-   * Takes new speeds, given along the flow of the side a node was on; the stagnation point moves to where they turn negative, once it lies more than a
-   * hundredth of the next speed beyond a node.
+   * Takes new speeds, given along the flow of the side a node was on; the stagnation point moves to where they turn negative, once it lies
+   * more than a hundredth of the next speed beyond a node.
    * @param signed speeds at all nodes; overwritten
    */
   takeSpeeds(signed: Float64Array): void {

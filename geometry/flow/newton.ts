@@ -1,14 +1,16 @@
 import { type OuterFlow } from './coupling.ts';
 import { DenseMatrix } from './dense.ts';
+import { type Change } from './growth.ts';
 import { LOWEST_SPEED, type Layer, type Side } from './layer.ts';
-import { type Change, type March, PER_NODE, PER_UNKNOWN } from './march.ts';
+import { type March, PER_NODE, PER_UNKNOWN } from './march.ts';
 import { edgeStress } from './project.ts';
 import { SideRows } from './side-rows.ts';
 import { LAMINAR } from './station.ts';
 
 /**
- * Newton's method for layer and outer flow together (simultaneous solution: Drela & Giles, AIAA J. 25, 1987). The stations' equations are resolved from the stagnation point downstream, so
- * that θ, c and ue are linear in the mass defects m = ue δ*; what is left is one dense system, ue(m) = outer flow (m), of one equation for each node [own arrangement].
+ * Newton's method for layer and outer flow together (simultaneous solution: Drela & Giles, AIAA J. 25, 1987). The stations' equations are
+ * resolved from the stagnation point downstream, so that θ, c and ue are linear in the mass defects m = ue δ*; what is left is one dense
+ * system, ue(m) = outer flow (m), of one equation for each node [own arrangement].
  */
 export class NewtonSystem {
   readonly change: { theta: Float64Array; dstar: Float64Array; c: Float64Array; ue: Float64Array };

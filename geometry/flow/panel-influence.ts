@@ -77,8 +77,8 @@ export class PointView {
   }
 
   /**
-   * Speed in a direction at the point in sight, outside the surface or inside but not on it, per unit vortex strength of each node and per unit
-   * source strength of each panel.
+   * Speed in a direction at the point in sight, outside the surface or inside but not on it, per unit vortex strength of each node and per
+   * unit source strength of each panel.
    * @param ux component of the unit direction along x @param uy along y
    */
   speedRow(
@@ -118,8 +118,8 @@ function wrap(angle: number): number {
 }
 
 /**
- * The face of a blunt trailing edge carries what the flow leaving along the bisector b with the speed q = (γ₁ − γ_N)/2 leaves on a wall at rest
- * inside: sources q (b·n) and vortices −q (b·t) [own derivation: jumps of the normal and of the tangential speed].
+ * The face of a blunt trailing edge carries what the flow leaving along the bisector b with the speed q = (γ₁ − γ_N)/2 leaves on a wall at
+ * rest inside: sources q (b·n) and vortices −q (b·t) [own derivation: jumps of the normal and of the tangential speed].
  */
 function faceStrengths({ edge }: Panels): { source: number; vortex: number } {
   return {

@@ -3,8 +3,8 @@ import { type Outline, type SurfaceCurve } from '../shapes/outline.ts';
 import { shapeError } from '../shapes/error.ts';
 
 /**
- * The surface as straight panels between nodes: node 0 at the upper trailing edge, over the nose to the lower trailing edge at the last node,
- * so that the inside lies to the left. Lengths in fractions of chord.
+ * The surface as straight panels between nodes: node 0 at the upper trailing edge, over the nose to the lower trailing edge at the last
+ * node, so that the inside lies to the left. Lengths in fractions of chord.
  */
 export interface Panels {
   /** Number of nodes; there is one panel less. */
@@ -101,7 +101,8 @@ const FINE = 400;
 
 /**
  * The outline as a contour for panels: nodes lie close where the surface turns and near both ends. The spacing along the chord is
- * x = (1 − cos(B π u)) / (1 − cos(B π)) with B = 0.96 for 85 % of the nodes; the others are shared out by the angle through which the surface turns.
+ * x = (1 − cos(B π u)) / (1 − cos(B π)) with B = 0.96 for 85 % of the nodes; the others are shared out by the angle through which the
+ * surface turns.
  * @param panels even number of panels on the whole contour, the face of a blunt trailing edge not counted; 20 … 600
  * @throws ShapeError when the count is odd or out of range
  */

@@ -1,12 +1,14 @@
 import { type Side } from './layer.ts';
-import { type Change, type March } from './march.ts';
+import { type March } from './march.ts';
+import { type Change } from './growth.ts';
 import { LAMINAR, TURBULENT, WAKE } from './station.ts';
 import { START_SHARE } from './turbulent.ts';
 
 const START = Math.sqrt(START_SHARE);
 
 /**
- * Brings the whole layer onto its equations, side by side and then the wake, each station along the line of its own interaction law; transition moves as far as the march finds it.
+ * Brings the whole layer onto its equations, side by side and then the wake, each station along the line of its own interaction law;
+ * transition moves as far as the march finds it.
  * @param selfInfluence change of a node's speed per mass defect of its own, one for each node
  */
 export function project(march: March, selfInfluence: Float64Array): void {
@@ -44,7 +46,7 @@ export function marchSide(
     i += side.step;
     const was = layer.regime[i];
     const turbulent = change.node !== -1;
-    const turnsHere = !turbulent && march.turns(side, change, i);
+    const turnsHere = !turbulent && march.growth.turns(side, change, i);
     if (turbulent || turnsHere) {
       if (was === LAMINAR) layer.c[i] = turnsHere ? startStress(march, i) : march.before.c;
       solve(i, TURBULENT, turnsHere ? change.xi : null);
@@ -65,7 +67,10 @@ function startStress(march: March, i: number): number {
   return Math.min(0.15, Math.max(0.01, START * march.here.equilibrium.value));
 }
 
-/** √CT with which a side enters the wake, with its slopes against θ, δ*, ue and c: a side still laminar at the edge brings the stress of a start. */
+/**
+ * √CT with which a side enters the wake, with its slopes against θ, δ*, ue and c: a side still laminar at the edge brings the stress of a
+ * start.
+ */
 export interface EdgeStress {
   value: number;
   t: number;

@@ -1,8 +1,9 @@
-import { type Change, type March, PER_NODE, PER_UNKNOWN } from './march.ts';
+import { type Change } from './growth.ts';
+import { type March, PER_NODE, PER_UNKNOWN } from './march.ts';
 
 /**
- * Linear expressions in the mass defects of all nodes for δθ, δ√CT and δue of one station after the other, each with its constant in the last place; and for n and its
- * growth rates as long as the layer is laminar.
+ * Linear expressions in the mass defects of all nodes for δθ, δ√CT and δue of one station after the other, each with its constant in the
+ * last place; and for n and its growth rates as long as the layer is laminar.
  */
 export class SideRows {
   readonly theta: Float64Array;
@@ -86,12 +87,12 @@ export class SideRows {
   advanceGrowth(i: number, first: boolean, from: number, to: number): void {
     const { size, march, n, rate, rateBefore } = this;
     const { layer } = march;
-    const byRate = first ? 0 : (march.growth[i * 2] ?? 0);
-    const byRateBefore = first ? 0 : (march.growth[i * 2 + 1] ?? 0);
+    const byRate = first ? 0 : (march.growth.answers[i * 2] ?? 0);
+    const byRateBefore = first ? 0 : (march.growth.answers[i * 2 + 1] ?? 0);
     const ue = layer.ue[i] ?? 1;
-    const byT = march.rates[i * 4 + 1] ?? 0;
-    const byD = march.rates[i * 4 + 2] ?? 0;
-    const byU = (march.rates[i * 4 + 3] ?? 0) - (byD * (layer.dstar[i] ?? 0)) / ue;
+    const byT = march.growth.rates[i * 4 + 1] ?? 0;
+    const byD = march.growth.rates[i * 4 + 2] ?? 0;
+    const byU = (march.growth.rates[i * 4 + 3] ?? 0) - (byD * (layer.dstar[i] ?? 0)) / ue;
     const { theta, ue: speed } = this;
     const one = (j: number) => {
       n[j] = (n[j] ?? 0) + byRate * (rate[j] ?? 0) + byRateBefore * (rateBefore[j] ?? 0);

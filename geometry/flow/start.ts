@@ -1,6 +1,7 @@
 import { type OuterFlow } from './coupling.ts';
 import { type Layer, type Side } from './layer.ts';
-import { type Change, type March } from './march.ts';
+import { type Change } from './growth.ts';
+import { type March } from './march.ts';
 import { joinWake, marchSide } from './project.ts';
 import { LAMINAR, type Regime, WAKE } from './station.ts';
 
@@ -15,8 +16,8 @@ const HIGHEST_LAMINAR = 6;
 const EDGE_FROM = 0.9;
 
 /**
- * First state for an angle, from the flow without a layer: the layer is marched with that speed; where it would separate, its shape factor is prescribed instead, rising as in a
- * laminar bubble and falling behind transition, and the speed follows.
+ * First state for an angle, from the flow without a layer: the layer is marched with that speed; where it would separate, its shape factor
+ * is prescribed instead, rising as in a laminar bubble and falling behind transition, and the speed follows.
  */
 export function coldStart(march: March, outer: OuterFlow): void {
   const { layer } = march;

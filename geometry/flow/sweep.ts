@@ -19,7 +19,8 @@ const BEYOND_STALL_DEG = 3;
 const MOST_FAILURES = 3;
 
 /**
- * A sweep in angle, one point at a time in the order of calculation: from the angle nearest 0 upwards and then from there downwards, each from the one before. A branch ends three degrees beyond the stall or after three failures; what lies beyond is left out.
+ * A sweep in angle, one point at a time in the order of calculation: from the angle nearest 0 upwards and then from there downwards, each
+ * from the one before. A branch ends three degrees beyond the stall or after three failures; what lies beyond is left out.
  * A caller that wants to report progress or stop takes the points from the generator; the return value is all points by angle.
  * @param section from prepareSection
  * @throws ShapeError naming the value out of range

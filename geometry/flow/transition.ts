@@ -6,8 +6,8 @@ const RAMP = 0.08;
 const LOWEST_H = 2.2;
 
 /**
- * Growth of the most amplified waves along a laminar layer: the envelope method of Drela & Giles, AIAA J. 25 (1987), after Gleyzes, Cousteix & Bonnet
- * (coefficients from memory, tested on the flat plate). Slopes end in H, R and T (against θ).
+ * Growth of the most amplified waves along a laminar layer: the envelope method of Drela & Giles, AIAA J. 25 (1987), after Gleyzes,
+ * Cousteix & Bonnet (coefficients from memory, tested on the flat plate). Slopes end in H, R and T (against θ).
  */
 export class Amplification {
   /** dn/ds, growth of the exponent along the surface. */

@@ -7,15 +7,16 @@ const HIGHEST_US = 0.95;
 const HIGHEST_US_WAKE = 0.99995;
 
 /**
- * Lag of the shear stress: K in (δ/CT) dCT/ds = K (√CTeq − √CT). 4.2 is the value of Drela & Giles 1987 as remembered; later publications have 5.6.
+ * Lag of the shear stress: K in (δ/CT) dCT/ds = K (√CTeq − √CT). 4.2 is the value of Drela & Giles 1987 as remembered; later publications
+ * have 5.6.
  */
 export const LAG = 4.2;
 /** Shear stress at transition as a share of its equilibrium: 0.7 in Drela & Giles 1987 as remembered. */
 export const START_SHARE = 0.7;
 
 /**
- * Turbulent closure: Drela & Giles, AIAA J. 25 (1987), pp. 1347–1355, with the friction law of Swafford, AIAA J. 21 (1983) (coefficients from memory,
- * tested against the flat plate). In the wake there is no wall friction and the dissipation counts for both halves.
+ * Turbulent closure: Drela & Giles, AIAA J. 25 (1987), pp. 1347–1355, with the friction law of Swafford, AIAA J. 21 (1983) (coefficients
+ * from memory, tested against the flat plate). In the wake there is no wall friction and the dissipation counts for both halves.
  */
 export class TurbulentClosure implements Closure {
   hs = 0;

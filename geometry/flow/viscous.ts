@@ -25,7 +25,8 @@ const LIFT_CLOSE = 2e-4;
 const FIRST_SLOPE = 0.105;
 
 /**
- * A section prepared for viscous calculations at any conditions: the factored panel equations and the influence of mass defects on the surface.
+ * A section prepared for viscous calculations at any conditions: the factored panel equations and the influence of mass defects on the
+ * surface.
  * @param contour chord about 1, nose at x = 0; its points are the panels' ends: see panelOutline, 160 panels is a good number
  * @throws ShapeError for a contour that cannot be solved
  */
@@ -34,7 +35,8 @@ export function prepareSection(contour: Contour): Coupling {
 }
 
 /**
- * A section at given conditions. Each angle starts from the last one that converged, so that neighbouring angles cost least; the answer does not depend on the way (to about 1e-4).
+ * A section at given conditions. Each angle starts from the last one that converged, so that neighbouring angles cost least; the answer
+ * does not depend on the way (to about 1e-4).
  */
 export class ViscousSection {
   readonly conditions: ViscousConditions;
@@ -60,7 +62,8 @@ export class ViscousSection {
   }
 
   /**
-   * The section at an angle. When it does not converge from the neighbouring angle, it is tried from nothing and then by way of the angle half way.
+   * The section at an angle. When it does not converge from the neighbouring angle, it is tried from nothing and then by way of the angle
+   * half way.
    * @param alphaDeg −30 … 30 degrees
    */
   at(alphaDeg: number): FlowPoint {

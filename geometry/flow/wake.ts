@@ -133,8 +133,9 @@ export function wakeSpeed(wake: Wake, panel: number, px: number, py: number, ux:
 }
 
 /**
- * Speed at wake node k from the sources of one of its own two panels: the mean between the middles of both panels, as a difference of potential (the speed
- * itself is infinite at the end of a panel) [own choice]. At the last node the mean runs from the middle of its panel to the node.
+ * Speed at wake node k from the sources of one of its own two panels: the mean between the middles of both panels, as a difference of
+ * potential (the speed itself is infinite at the end of a panel) [own choice]. At the last node the mean runs from the middle of its panel
+ * to the node.
  */
 export function ownWakeSpeed(wake: Wake, node: number, panel: number): number {
   const other = panel === node ? node - 1 : node;

@@ -1,5 +1,6 @@
 /**
- * Potential flow of 4-digit sections with closed trailing edge (last coefficient −0.1036), by conformal mapping with 1024 and 4096 points that agree to 1e-6. Lift and moment about the quarter chord at 0, 4, 8°.
+ * Potential flow of 4-digit sections with closed trailing edge (last coefficient −0.1036), by conformal mapping with 1024 and 4096 points
+ * that agree to 1e-6. Lift and moment about the quarter chord at 0, 4, 8°.
  */
 export const INVISCID_SECTIONS: Readonly<
   Record<string, { readonly cl: readonly number[]; readonly cm: readonly number[] }>
@@ -31,7 +32,10 @@ export const INVISCID_PRESSURES: readonly (readonly [
   [0.9, 0.0036, 0.0851, -0.1311, 0.2243],
 ];
 
-/** Exact thin-airfoil integrals of the 4-digit mean lines (Glauert 1926), m = 6 %: position in tenths, angle of zero lift, moment about the quarter chord. */
+/**
+ * Exact thin-airfoil integrals of the 4-digit mean lines (Glauert 1926), m = 6 %: position in tenths, angle of zero lift, moment about the
+ * quarter chord.
+ */
 export const MEAN_LINES: readonly (readonly [tenths: number, zeroLiftDeg: number, cm: number])[] = [
   [2, -5.3963, -0.11088],
   [3, -5.7538, -0.13419],
@@ -41,7 +45,8 @@ export const MEAN_LINES: readonly (readonly [tenths: number, zeroLiftDeg: number
 ];
 
 /**
- * Wind-tunnel values of NACA Report 824 (1945), smooth, Re 9e6, as tabulated from its charts in the USAF Stability and Control Datcom, table 4.1.1-B (from memory; chart reading scatters
+ * Wind-tunnel values of NACA Report 824 (1945), smooth, Re 9e6, as tabulated from its charts in the USAF Stability and Control Datcom,
+ * table 4.1.1-B (from memory; chart reading scatters
  * by 0.2°): angle and moment of zero lift, slope per degree, highest lift and the end of the linear part.
  */
 export const MEASURED_SECTIONS: readonly {
@@ -78,7 +83,10 @@ export const TRIPPED_0012: readonly (readonly [alphaDeg: number, cl: number, cd:
   [17.13, 1.6116, 0.0256],
 ];
 
-/** 0012 over many tunnels: McCroskey, NASA TM 100019 (1987) (formulas from memory): Re, slope per degree at low speed, tripped drag at zero lift. */
+/**
+ * 0012 over many tunnels: McCroskey, NASA TM 100019 (1987) (formulas from memory): Re, slope per degree at low speed, tripped drag at zero
+ * lift.
+ */
 export const CORRELATED_0012: readonly (readonly [reynolds: number, slope: number, cd: number])[] = [
   [1e6, 0.1025, 0.010642],
   [2e6, 0.10396, 0.009581],

@@ -1,5 +1,6 @@
 /**
- * Falkner–Skan flows, scaled with η = y √((m+1) ue/(2 ν x)): f''' + f f'' + β (1 − f'²) = 0, β = 2m/(m+1), integrated to 1e-8 (Hartree 1937;
+ * Falkner–Skan flows, scaled with η = y √((m+1) ue/(2 ν x)): f''' + f f'' + β (1 − f'²) = 0, β = 2m/(m+1), integrated to 1e-8 (Hartree
+ * 1937;
  * lower branch Stewartson 1954). `r` products are with Rθ.
  */
 export interface SimilarFlow {
@@ -29,7 +30,10 @@ export const SIMILAR_FLOWS: readonly SimilarFlow[] = [
   flow([-0.18, 1.87158, 0.56771, 3.29673, 1.5263, 0.07303, 0.15741]),
 ];
 
-/** Values of the published laminar fits at the shape factors of the flows above and of reversed profiles: tells a misprint from a property of the fits. */
+/**
+ * Values of the published laminar fits at the shape factors of the flows above and of reversed profiles: tells a misprint from a property
+ * of the fits.
+ */
 export const LAMINAR_FITS: readonly (readonly [
   h: number,
   hs: number,

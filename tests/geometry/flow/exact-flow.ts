@@ -11,7 +11,8 @@ const power = ([a, b]: Complex, k: number): Complex => {
 const turn = (angle: number): Complex => [Math.cos(angle), Math.sin(angle)];
 
 /**
- * Exact potential flow of a Kármán–Trefftz section (von Kármán & Trefftz, Z. Flugtechn. Motorluftsch. 9, 1918): z = k (1 + w^k)/(1 − w^k), w = (ζ − 1)/(ζ + 1), of the circle through ζ = 1 about μ; k = 2 is Joukowski's, k = 2 − τ/π has
+ * Exact potential flow of a Kármán–Trefftz section (von Kármán & Trefftz, Z. Flugtechn. Motorluftsch. 9, 1918): z = k (1 + w^k)/(1 − w^k),
+ * w = (ζ − 1)/(ζ + 1), of the circle through ζ = 1 about μ; k = 2 is Joukowski's, k = 2 − τ/π has
  * the trailing-edge angle τ. Scaled to chord 1 with the foremost point at x = 0.
  */
 export function exactSection(

@@ -29,7 +29,7 @@ test('the place of transition answers to the growth upstream, and the station be
   const rows = new SideRows(march);
   rows.advance(40, -1, null, 40, 40);
   rows.advanceGrowth(40, true, 40, 40);
-  const rate = march.rates.slice(160, 164);
+  const rate = march.growth.rates.slice(160, 164);
   const change = { node: 41, xi: 0.5, byN: -2, byRate: 3, byRateBefore: 0 };
   rows.setShare(change);
   const total = layer.dstar[40]! / layer.ue[40]!;

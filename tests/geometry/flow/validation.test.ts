@@ -8,8 +8,9 @@ const rows = flowErrors();
 
 /**
  * What misses its tolerance, why, and the error that must not be exceeded:
- * the highest lift of thin sections, because a stall at the nose is not seen (see stall-kind.ts); the angle of zero lift of the cambered 44xx sections, which in
- * the tunnel is half a degree nearer to 0 than even without viscosity; the slope near 0° at the lower Reynolds numbers, as the pull of the curved wake is left out.
+ * the highest lift of thin sections, because a stall at the nose is not seen (see stall-kind.ts); the angle of zero lift of the cambered
+ * 44xx sections, which in the tunnel is half a degree nearer to 0 than even without viscosity; the slope near 0° at the lower Reynolds
+ * numbers, as the pull of the curved wake is left out.
  */
 const KNOWN_MISSES: Readonly<Record<string, number>> = {
   '0006: highest lift': 0.7,
