@@ -8,7 +8,7 @@ export function TopBar({ onShowKeys }: { onShowKeys: () => void }) {
   const me = useMe();
   const readsShop = useMay('shop.read');
   return (
-    <header className="sticky top-0 z-20 flex h-11 shrink-0 items-stretch gap-5 border-b border-rule bg-paper px-4 pointer-coarse:h-13 print:hidden">
+    <header className="sticky top-0 z-20 flex h-11 shrink-0 items-stretch gap-x-5 max-sm:h-auto max-sm:flex-wrap border-b border-rule bg-paper px-4 pointer-coarse:h-13 print:hidden">
       <Link
         to="/"
         className="flex items-center gap-2.5 text-lg font-extrabold tracking-tight"
@@ -19,7 +19,7 @@ export function TopBar({ onShowKeys }: { onShowKeys: () => void }) {
       </Link>
       <nav
         aria-label="Main"
-        className="flex min-w-0 flex-1 items-stretch gap-4 overflow-x-auto whitespace-nowrap [scrollbar-width:none]"
+        className="flex min-w-0 flex-1 items-stretch gap-4 overflow-x-auto whitespace-nowrap [scrollbar-width:none] max-sm:order-last max-sm:h-11 max-sm:w-full max-sm:flex-none max-sm:justify-between max-sm:gap-2"
       >
         {me.role !== 'technician' && <Place to="/">Desk</Place>}
         <Place to="/sections">Sections</Place>
@@ -27,7 +27,7 @@ export function TopBar({ onShowKeys }: { onShowKeys: () => void }) {
         <Place to="/cutting-list">Cutting list</Place>
         {readsShop && <Place to="/shop">Shop</Place>}
       </nav>
-      <div className="ml-auto flex min-w-0 shrink-0 items-center gap-4">
+      <div className="ml-auto flex min-w-0 shrink-0 items-center gap-4 max-sm:h-11">
         <span className="truncate text-graphite max-md:hidden">{me.workshop.name}</span>
         <PersonMenu me={me} onShowKeys={onShowKeys} />
       </div>
