@@ -101,14 +101,15 @@ function fastest({ kinds, left, right, arrives, leaves }: CutModel): number {
 }
 
 function volume(mm3: number, units: Units): string {
-  return units === 'mm'
-    ? `${formatNumber(mm3 / 1000, 0)} cm³`
-    : `${formatNumber(mm3 / MM_PER_INCH ** 3, 1)} in³`;
+  if (units === 'inch') return `${formatNumber(mm3 / MM_PER_INCH ** 3, 1)} in³`;
+  return mm3 < 1e7 ? `${formatNumber(mm3 / 1e3, 0)} cm³` : `${formatNumber(mm3 / 1e6, 1)} dm³`;
 }
 
+/** Avoirdupois ounce (international yard and pound agreement, 1959). */
 const G_PER_OUNCE = 28.349523125;
 function mass(grams: number, units: Units): string {
-  return units === 'mm' ? `${formatNumber(grams, 1)} g` : `${formatNumber(grams / G_PER_OUNCE, 2)} oz`;
+  if (units === 'inch') return `${formatNumber(grams / G_PER_OUNCE, 2)} oz`;
+  return grams < 1000 ? `${formatNumber(grams, 1)} g` : `${formatNumber(grams / 1000, 2)} kg`;
 }
 
 function speed(mmMin: number, units: Units): string {

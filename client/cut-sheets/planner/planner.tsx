@@ -67,7 +67,7 @@ function OpenedPlanner({ sheet, base, opened, mirror, mayWrite }: OpenedPlannerP
             refused={planner.refused}
           />
           <PlayerBar cut={model?.cut ?? null} control={run} />
-          <Cautions machine={planner.machine} />
+          <Cautions machine={planner.machine} ribMachine={planner.ribMachine} />
         </>
       }
       side={

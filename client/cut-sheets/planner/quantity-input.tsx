@@ -61,7 +61,7 @@ export function QuantityInput(props: QuantityInputProps) {
         aria-invalid={error !== undefined}
         aria-describedby={error === undefined ? undefined : `${id}-error`}
         value={text}
-        className={`${planFieldClass} px-1.5 text-right ${mark === undefined ? '' : MARKS[mark]}`}
+        className={`${planFieldClass} pr-1.5 pl-0.5 text-right ${mark === undefined ? '' : MARKS[mark]}`}
       />
       <FieldError id={id} error={error} />
     </div>

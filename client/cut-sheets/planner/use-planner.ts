@@ -2,6 +2,7 @@ import { useEffect, useMemo, useRef, useState } from 'react';
 import { type Finding } from '#geometry/cutting/findings.ts';
 import { cutSheetEndpoints } from '#server/contracts/cut-sheet-endpoints.ts';
 import { type CutSheet, type SheetPlan, type SheetVersion } from '#server/contracts/cut-sheets.ts';
+import { type MachineKind } from '#server/contracts/shop.ts';
 import { keepSheetDraft, type SheetDraftInput } from '#client/api/cut-sheets.ts';
 import { useMe } from '#client/app/session.tsx';
 import { type DraftKeeper } from '#client/sections/editor/draft-keeper.ts';
@@ -86,9 +87,14 @@ export function usePlanner({ sheet, base, opened, mirror, mayWrite, formElement 
     nextNumber: Math.max(sheet.versionCount, sheet.latest.number, version.number) + 1,
     refused: refusedWords(read.errors.size, worked.error !== null),
     names: namesOf(sources),
-    machine: sources.machines?.find(({ id }) => id === present['machineId'])?.settings.kind ?? null,
+    machine: kindOf(sources, present['machineId']),
+    ribMachine: present['ribs'] === null ? null : kindOf(sources, present['ribMachineId']),
     identity: useIdentity(sheet.name, version, sources, dirty, basedOn),
   };
+}
+
+function kindOf({ machines }: PlanSources, id: unknown): MachineKind | null {
+  return machines?.find((machine) => machine.id === id)?.settings.kind ?? null;
 }
 
 function namesOf({ root, tip, machines, materials }: PlanSources): Names {

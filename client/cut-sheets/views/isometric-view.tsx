@@ -4,7 +4,7 @@ import { type Box } from '#client/drawing/sheet-layout.ts';
 import { type Point } from '#geometry/point.ts';
 import { hullOf, pointsOf, pointsPath } from './line-paths.ts';
 import { type Place } from './plan-layout.ts';
-import { type Scene, type SceneCore, shownAt } from './scene.ts';
+import { type Scene, type SceneCore, type SceneFace, shownAt } from './scene.ts';
 import { ViewTitle } from './view-title.tsx';
 import { pointAt, type WirePosition } from './wire-position.ts';
 
@@ -34,7 +34,10 @@ export function isometricExtent(scene: Scene) {
         [0, scene.block?.lengthMm ?? 0].map((x) => project(scene, x, 0, at)),
       )
     : [];
-  const points = [...corners, ...towers];
+  const bodies = scene.cores.flatMap((core) =>
+    ends(scene, core).flatMap(({ face, at }) => ringOf(scene, face, at)),
+  );
+  const points = [...corners, ...bodies, ...towers];
   const [xs, ys] = [points.map(({ x }) => x), points.map(({ y }) => y)];
   return { minX: Math.min(...xs), maxX: Math.max(...xs), minY: Math.min(...ys), maxY: Math.max(...ys) };
 }
@@ -106,12 +109,22 @@ function BlockEdges({ scene, place }: { scene: Scene; place: Place }) {
   );
 }
 
+/** The faces of a core in the planes of root and tip. */
+function ends({ spanMm }: Scene, { mirrored, root, tip }: SceneCore) {
+  const [first, last] = mirrored ? [tip, root] : [root, tip];
+  return [
+    { face: first, at: 0 },
+    { face: last, at: spanMm },
+  ] as const;
+}
+
+function ringOf(scene: Scene, face: SceneFace, alongSpan: number): Point[] {
+  return pointsOf(face.contour).map(({ x, y }) => project(scene, x, y, alongSpan));
+}
+
 function CoreBody({ scene, core, place }: { scene: Scene; core: SceneCore; place: Place }) {
-  const atRoot = core.mirrored ? core.tip : core.root;
-  const atTip = core.mirrored ? core.root : core.tip;
-  const ring = (face: typeof atRoot, z: number) =>
-    pointsOf(face.contour).map(({ x, y }) => project(scene, x, y, z));
-  const [near, far] = [ring(atRoot, 0), ring(atTip, scene.spanMm)];
+  const [{ face: atRoot }, { face: atTip }] = ends(scene, core);
+  const [near, far] = [ringOf(scene, atRoot, 0), ringOf(scene, atTip, scene.spanMm)];
   return (
     <>
       <path

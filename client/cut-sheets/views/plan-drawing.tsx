@@ -5,10 +5,11 @@ import { SheetRemarks } from '#client/drawing/sheet-remarks.tsx';
 import { ENDS } from '#geometry/cutting/plan.ts';
 import { FaceView, FaceWire } from './face-view.tsx';
 import { IsometricView, IsometricWire } from './isometric-view.tsx';
-import { type PlanLayout, UNZOOMED, type Zoom } from './plan-layout.ts';
+import { type PlanLayout, sideBoxes, type SideViews, UNZOOMED, type Zoom } from './plan-layout.ts';
 import { type PlanModel } from './plan-model.ts';
 import { PlanTitleBlock, type PlanIdentity } from './plan-title-block.tsx';
 import { PlanformView, PlanformWire } from './planform-view.tsx';
+import { RibsView } from './ribs-view.tsx';
 import { type Scene, sceneOf } from './scene.ts';
 import { viewPlaces } from './view-places.ts';
 import { viewScale } from './view-words.ts';
@@ -34,7 +35,11 @@ export interface PlanDrawingProps {
 export const PlanDrawing = memo(function PlanDrawing(props: PlanDrawingProps) {
   const { model, layout, identity, units, zoom = UNZOOMED, position, remarks, dimmed, over, element } = props;
   const scene = useMemo(() => sceneOf(model), [model]);
-  const places = useMemo(() => viewPlaces(scene, layout, zoom), [scene, layout, zoom]);
+  const side = useMemo(() => sideBoxes(layout, sideOf(model)), [layout, model]);
+  const places = useMemo(
+    () => viewPlaces(scene, layout, zoom, side.isometric ?? undefined),
+    [scene, layout, zoom, side],
+  );
   const clip = useId();
   const scale = viewScale(places.root.scale * layout.scale);
   return (
@@ -52,14 +57,14 @@ export const PlanDrawing = memo(function PlanDrawing(props: PlanDrawingProps) {
         <rect {...layout.drawing} />
       </clipPath>
       <g clipPath={`url(#${clip})`} className={dimmed === true ? 'opacity-40' : undefined}>
-        <Views {...{ model, scene, layout, places, units }} />
+        <Views {...{ model, scene, layout, places, side, zoom, units }} />
         {position && (
           <g aria-hidden="true">
             <PlanformWire scene={scene} place={places.planform} position={position} />
             {ENDS.map((end) => (
               <FaceWire key={end} {...{ model, scene, end, position }} place={places[end]} />
             ))}
-            <IsometricWire scene={scene} place={places.isometric} position={position} />
+            {side.isometric && <IsometricWire scene={scene} place={places.isometric} position={position} />}
           </g>
         )}
         {over?.(scene, places)}
@@ -75,10 +80,12 @@ interface ViewsProps {
   readonly scene: Scene;
   readonly layout: PlanLayout;
   readonly places: ReturnType<typeof viewPlaces>;
+  readonly side: ReturnType<typeof sideBoxes>;
+  readonly zoom: Zoom;
   readonly units: Units;
 }
 
-const Views = memo(function Views({ model, scene, layout, places, units }: ViewsProps) {
+const Views = memo(function Views({ model, scene, layout, places, side, zoom, units }: ViewsProps) {
   const { views } = layout;
   return (
     <>
@@ -86,10 +93,17 @@ const Views = memo(function Views({ model, scene, layout, places, units }: Views
       {ENDS.map((end) => (
         <FaceView key={end} {...{ model, scene, end, units }} box={views[end]} place={places[end]} />
       ))}
-      <IsometricView scene={scene} box={views.isometric} place={places.isometric} />
+      {side.isometric && <IsometricView scene={scene} box={side.isometric} place={places.isometric} />}
+      {side.ribs && model.ribs && <RibsView ribs={model.ribs} box={side.ribs} zoom={zoom} />}
     </>
   );
 });
+
+/** Without a block the ribs take the place of the block's view. */
+function sideOf({ ribs, plan }: PlanModel): SideViews {
+  if (!ribs) return 'isometric';
+  return plan.block ? 'both' : 'ribs';
+}
 
 function remarksOf(units: Units, { plan }: PlanModel): string[] {
   return [

@@ -3,6 +3,8 @@ import { FITTED, sheetTransform, type SheetView } from '#client/drawing/sheet-vi
 import { type Size } from '#client/drawing/use-sheet-size.ts';
 
 export type ViewId = 'planform' | 'root' | 'tip' | 'isometric';
+/** What stands in the room of the isometric view. */
+export type SideViews = 'isometric' | 'ribs' | 'both';
 
 /** The sheet with the places of its views: the faces under each other, the planform above them. */
 export interface PlanLayout extends SheetLayout {
@@ -38,6 +40,18 @@ function stacked({ x, y, width, height }: Box): PlanLayout['views'] {
     return box;
   }) as [Box, Box, Box, Box];
   return { planform, root, tip, isometric };
+}
+
+/** The room of the isometric view shared out: the ribs take the whole where nothing is cut from a block. */
+export function sideBoxes(
+  { views }: PlanLayout,
+  side: SideViews,
+): { isometric: Box | null; ribs: Box | null } {
+  const box = views.isometric;
+  if (side !== 'both')
+    return { isometric: side === 'isometric' ? box : null, ribs: side === 'ribs' ? box : null };
+  const height = box.height / 2;
+  return { isometric: { ...box, height }, ribs: { ...box, y: box.y + height, height } };
 }
 
 /** What zooming and panning do to a pixel of the fitted sheet. */

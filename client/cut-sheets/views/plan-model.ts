@@ -1,12 +1,20 @@
-import { type Polyline } from '#geometry/cutting/arrays.ts';
+import { type Polyline, polylineOf } from '#geometry/cutting/arrays.ts';
 import { type BlockFit, type FoamAmounts } from '#geometry/cutting/block.ts';
 import { type SkinsMeet } from '#geometry/cutting/core.ts';
 import { type MeltReport } from '#geometry/cutting/feed.ts';
 import { type PlacedFeature } from '#geometry/cutting/features.ts';
 import { type InspectionRow } from '#geometry/cutting/inspection.ts';
-import { type End, type Feature, hasWire, type Plan, type WirePlan } from '#geometry/cutting/plan.ts';
+import {
+  type End,
+  type Feature,
+  hasWire,
+  type Plan,
+  type RibsPlan,
+  type WirePlan,
+} from '#geometry/cutting/plan.ts';
 import { type CorePlan, type Cut } from '#geometry/cutting/planner.ts';
 import { type SheetLayout } from '#geometry/cutting/packing.ts';
+import { type RibSet } from '#geometry/cutting/ribs.ts';
 import { benchOf, toTowers } from '#geometry/cutting/towers.ts';
 import { type MoveKind } from '#geometry/cutting/wire-path.ts';
 import { type Point } from '#geometry/point.ts';
@@ -32,9 +40,19 @@ export interface FeatureModel {
   readonly tip: Polyline;
 }
 
+/** A rib on its sheet, mm from the sheet's lower left corner. */
+export interface PlacedRib {
+  readonly number: number;
+  readonly sheet: number;
+  readonly cuts: readonly Polyline[];
+  readonly holes: readonly { readonly x: number; readonly y: number; readonly radius: number }[];
+}
+
 export interface RibsModel {
   readonly stationsMm: readonly number[];
-  readonly layout: SheetLayout;
+  readonly layout: Omit<SheetLayout, 'places'>;
+  readonly placed: readonly PlacedRib[];
+  readonly sheet: { readonly widthMm: number; readonly heightMm: number };
 }
 
 /** The wire's way by its nodes, in the machine's frame, mm and seconds. */
@@ -82,7 +100,7 @@ export function modelOf(of: CorePlan): PlanModel {
     skinsMeet: core.skinsMeet,
     fit: fit && { places: fit.places, marginMm: fit.marginMm },
     foam,
-    ribs: ribs && { stationsMm: ribs.ribs.map(({ spanMm }) => spanMm), layout: ribs.layout },
+    ribs: ribs && plan.ribs && ribsOf(ribs, plan.ribs),
     hasTemplates: templates.length > 0,
     inspection,
     cut: cut && hasWire(plan) ? cutOf(plan, cut) : null,
@@ -101,6 +119,27 @@ function faceOf({ core }: CorePlan, end: End): FaceModel {
     nose: section.toPanel({ x: 0, y: 0 }),
     trailingEdge: section.toPanel({ x: 1, y: 0 }),
   };
+}
+
+function ribsOf({ ribs, layout }: RibSet, { sheet }: RibsPlan): RibsModel {
+  const { places, ...rest } = layout;
+  const placed = places.flatMap((place): PlacedRib[] => {
+    const rib = ribs.find(({ number }) => number === place.number);
+    if (!rib) return [];
+    const { turned, dx, dy } = place;
+    const at = (x: number, y: number): Point =>
+      turned ? { x: dx - y, y: dy + x } : { x: dx + x, y: dy + y };
+    const moved = ({ x, y }: Polyline) => polylineOf(Array.from(x, (value, i) => at(value, y[i] ?? 0)));
+    return [
+      {
+        number: rib.number,
+        sheet: place.sheet,
+        cuts: [...rib.outlines, ...rib.tubes].map(moved),
+        holes: rib.holes.map(({ x, y, radius }) => ({ ...at(x, y), radius })),
+      },
+    ];
+  });
+  return { stationsMm: ribs.map(({ spanMm }) => spanMm), layout: rest, placed, sheet };
 }
 
 function featureOf({ index, feature, root, tip }: PlacedFeature): FeatureModel {

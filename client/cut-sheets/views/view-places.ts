@@ -1,3 +1,4 @@
+import { type Box } from '#client/drawing/sheet-layout.ts';
 import { boxOf } from '#geometry/cutting/arrays.ts';
 import { isometricExtent } from './isometric-view.tsx';
 import { fittingScale, type Place, placeIn, type PlanLayout, type ViewId, type Zoom } from './plan-layout.ts';
@@ -7,7 +8,12 @@ import { facesAt, type Scene } from './scene.ts';
 const LEAD = 14;
 
 /** Where each view stands on the sheet. Both faces have one scale and one place along the chord, so that they lie under each other. */
-export function viewPlaces(scene: Scene, layout: PlanLayout, zoom: Zoom): Readonly<Record<ViewId, Place>> {
+export function viewPlaces(
+  scene: Scene,
+  layout: PlanLayout,
+  zoom: Zoom,
+  isometric: Box = layout.views.isometric,
+): Readonly<Record<ViewId, Place>> {
   const { views, compact } = layout;
   const side = compact ? 14 : 22;
   const planformRoom = { left: compact ? 40 : 56, right: compact ? 40 : 56, top: 46, bottom: 30 };
@@ -22,12 +28,7 @@ export function viewPlaces(scene: Scene, layout: PlanLayout, zoom: Zoom): Readon
     planform: placeIn(views.planform, planformExtent(scene), planformRoom, zoom),
     root: placeIn(views.root, extent, faceRoom, zoom, align),
     tip: placeIn(views.tip, extent, faceRoom, zoom, align),
-    isometric: placeIn(
-      views.isometric,
-      isometricExtent(scene),
-      { left: 12, right: 16, top: 26, bottom: 14 },
-      zoom,
-    ),
+    isometric: placeIn(isometric, isometricExtent(scene), { left: 12, right: 16, top: 26, bottom: 14 }, zoom),
   };
 }
 

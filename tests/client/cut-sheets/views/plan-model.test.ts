@@ -1,6 +1,8 @@
 // @vitest-environment node
 import { expect, test } from 'vitest';
+import { boxOf } from '#geometry/cutting/arrays.ts';
 import { planCore } from '#geometry/cutting/planner.ts';
+import { NEW_RIBS } from '#client/cut-sheets/planner/new-parts.ts';
 import { buffersOf, modelOf } from '#client/cut-sheets/views/plan-model.ts';
 import { workOut } from '#client/cut-sheets/views/work-out.ts';
 import { PLAN as FINE } from '#tests/geometry/cutting/plans.ts';
@@ -36,4 +38,28 @@ test('a plan of which nothing is left says why', () => {
   const { model: none, findings } = workOut({ ...PLAN, allowances: { upperMm: 20, lowerMm: 20 } }, IDENTITY);
   expect(none).toBeNull();
   expect(findings[0]).toMatchObject({ severity: 'error', code: 'skin-thicker-than-section' });
+});
+
+test('ribs lie on their sheet within its border, turned or not, as the packing has them', () => {
+  const { sheet } = NEW_RIBS;
+  const rules = { ...NEW_RIBS, sheet: { ...sheet, widthMm: 260, heightMm: 240 } };
+  const { core: ribbed } = planCore({ ...PLAN, features: [], ribs: rules }, IDENTITY);
+  const { ribs } = modelOf(ribbed!);
+  const turned = ribbed!.ribs!.layout.places.filter((place) => place.turned);
+  expect(turned.length).toBeGreaterThan(0);
+  expect(turned.length).toBeLessThan(8);
+  expect(ribs!.placed.map(({ number }) => number)).toEqual([1, 2, 3, 4, 5, 6, 7, 8]);
+  for (const { cuts, holes } of ribs!.placed) {
+    const { minX, maxX, minY, maxY } = boxOf(...cuts);
+    expect(minX).toBeGreaterThanOrEqual(sheet.borderMm - 1e-9);
+    expect(minY).toBeGreaterThanOrEqual(sheet.borderMm - 1e-9);
+    expect(maxX).toBeLessThanOrEqual(260 - sheet.borderMm + 1e-9);
+    expect(maxY).toBeLessThanOrEqual(240 - sheet.borderMm + 1e-9);
+    for (const { x, y, radius } of holes) {
+      expect(x - radius).toBeGreaterThan(minX);
+      expect(x + radius).toBeLessThan(maxX);
+      expect(y - radius).toBeGreaterThan(minY);
+      expect(y + radius).toBeLessThan(maxY);
+    }
+  }
 });
