@@ -10,6 +10,7 @@ import { ErrorState } from '#client/ui/error-state.tsx';
 import { Moment } from '#client/ui/moment.tsx';
 import { Skeleton } from '#client/ui/skeleton.tsx';
 import { AnswerForm } from './answer-form.tsx';
+import { deviationText } from './deviation-text.ts';
 import { Photos } from './photos.tsx';
 import { VerdictGlyph } from './verdict.tsx';
 
@@ -59,9 +60,7 @@ function InspectionView({ inspection }: { readonly inspection: Inspection }) {
         className={`flex items-center gap-2 border-l-4 py-1 pl-3 text-lg font-semibold ${within ? 'border-spruce text-spruce' : 'border-brick text-brick'}`}
       >
         <VerdictGlyph within={within} />
-        {within
-          ? 'Within tolerance at every station.'
-          : 'Out of tolerance: it stands on the builder’s and designer’s desk.'}
+        {within ? 'Within tolerance at every station.' : outSentence(answer)}
       </p>
       {note !== '' && <p className="max-w-[60rem] break-words">{note}</p>}
       <MeasurementTable inspection={inspection} />
@@ -74,6 +73,11 @@ function InspectionView({ inspection }: { readonly inspection: Inspection }) {
       <Photos inspection={inspection} />
     </>
   );
+}
+
+function outSentence(answer: Inspection['answer']): string {
+  if (answer !== null) return `Out of tolerance, ${answer.decision}.`;
+  return 'Out of tolerance: it stands on the builder’s and designer’s desk.';
 }
 
 function MeasurementTable({ inspection }: { readonly inspection: Inspection }) {
@@ -105,7 +109,7 @@ function MeasurementTable({ inspection }: { readonly inspection: Inspection }) {
             </th>
             <td className="px-2 text-right">{length(one.nominalMm)}</td>
             <td className="px-2 text-right">{length(one.measuredMm)}</td>
-            <td className="px-2 text-right">{length(one.deviationMm)}</td>
+            <td className="px-2 text-right">{deviationText(one.deviationMm, units)}</td>
             <td className={`px-2 ${one.within ? 'text-spruce' : 'font-semibold text-brick'}`}>
               <span className="inline-flex items-center gap-2">
                 <VerdictGlyph within={one.within} />

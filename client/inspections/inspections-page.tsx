@@ -9,6 +9,7 @@ import { ErrorState } from '#client/ui/error-state.tsx';
 import { Moment } from '#client/ui/moment.tsx';
 import { SelectField } from '#client/ui/select-field.tsx';
 import { Skeleton } from '#client/ui/skeleton.tsx';
+import { deviationText } from './deviation-text.ts';
 import { VerdictGlyph } from './verdict.tsx';
 
 const OUTCOMES = [
@@ -149,7 +150,7 @@ function StatisticsRow({ row }: { readonly row: InspectionStatistics['items'][nu
       <td className={`px-2 text-right ${row.outOfTolerance > 0 ? 'text-brick' : ''}`}>
         {row.outOfTolerance}
       </td>
-      <td className="px-2 text-right">{formatLength(row.meanMm, units)}</td>
+      <td className="px-2 text-right">{deviationText(row.meanMm, units)}</td>
       <td className="px-2 text-right">
         {row.spreadMm === null ? 'one reading' : formatLength(row.spreadMm, units)}
       </td>

@@ -1,7 +1,8 @@
 import { type KeyboardEvent } from 'react';
 import { type InspectionRow } from '#geometry/cutting/inspection.ts';
-import { formatLength, formatNumber, formatPercent, MM_PER_INCH, useUnits } from '#client/app/units.ts';
+import { formatLength, formatPercent, useUnits } from '#client/app/units.ts';
 import { fieldClass } from '#client/ui/field.tsx';
+import { deviationText } from './deviation-text.ts';
 import { type Judged, keyOf, type Readings } from './reading.ts';
 import { Verdict } from './verdict.tsx';
 
@@ -52,7 +53,10 @@ export function ReadingTable({ rows, judged, readings, onReading }: ReadingTable
                 />
               </td>
               <td>
-                <Verdict judged={reading} deviation={deviationText(reading, units)} />
+                <Verdict
+                  judged={reading}
+                  deviation={'deviationMm' in reading ? deviationText(reading.deviationMm, units) : ''}
+                />
               </td>
             </tr>
           );
@@ -60,16 +64,6 @@ export function ReadingTable({ rows, judged, readings, onReading }: ReadingTable
       </tbody>
     </table>
   );
-}
-
-function deviationText(reading: Judged, units: 'mm' | 'inch'): string {
-  if (!('deviationMm' in reading)) return '';
-  const [value, unit, decimals] =
-    units === 'mm'
-      ? ([reading.deviationMm, 'mm', 2] as const)
-      : ([reading.deviationMm / MM_PER_INCH, 'in', 3] as const);
-  const text = formatNumber(value, decimals);
-  return `${text.startsWith('-') ? '−' : '+'}${text.replace('-', '')} ${unit}`;
 }
 
 /** A caliper with a data key types the reading and Enter: the next field takes the next one. */
