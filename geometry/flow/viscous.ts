@@ -2,14 +2,9 @@ import { type Contour } from '../contour/contour.ts';
 import { type ViscousConditions, type ViscousInput, checkConditions } from './conditions.ts';
 import { CoupledLayer } from './coupled.ts';
 import { Coupling, type OuterFlow } from './coupling.ts';
-import {
-  type Distribution,
-  type FlowPoint,
-  type SolvedPoint,
-  distributionOf,
-  pointOf,
-} from './flow-point.ts';
+import { type Distribution, type FlowPoint, distributionOf, pointOf } from './flow-point.ts';
 import { panelSystem } from './inviscid.ts';
+import { LiftSearch } from './lift-search.ts';
 import { Layer } from './layer.ts';
 import { panelsOf } from './panels.ts';
 import { WAKE_NODES } from './wake.ts';
@@ -18,11 +13,12 @@ import { WAKE_NODES } from './wake.ts';
 export const ANGLES_DEG = { min: -30, max: 30 } as const;
 /** A solution further away than this is no start for an angle, degrees. */
 const NEAR_DEG = 4;
-/** Iterations on the way to a lift coefficient, and how near it has to come. */
-const LIFT_STEPS = 12;
+/** Angles tried on the way to a lift coefficient, and how near it has to come. */
+const LIFT_STEPS = 16;
 const LIFT_CLOSE = 2e-4;
-/** Lift curve slope per degree with which the way to a lift coefficient begins: about that of a flat plate with a boundary layer. */
-const FIRST_SLOPE = 0.105;
+/** So many angles may fail on the way; the next is tried a little aside, degrees. */
+const LIFT_FAILURES = 2;
+const ASIDE_DEG = 0.15;
 
 /**
  * A section prepared for viscous calculations at any conditions: the factored panel equations and the influence of mass defects on the
@@ -83,21 +79,24 @@ export class ViscousSection {
   }
 
   /**
-   * The section at a lift coefficient on the rising part of its lift curve, by the secant rule in angle.
+   * The section at a lift coefficient on the rising part of its lift curve, by a search in angle (see lift-search.ts).
    * @param cl −3 … 3 @returns the point nearest in angle to the target, not converged when the section does not reach it
    */
   atLift(cl: number): FlowPoint {
-    let alphaDeg = this.goodDeg ?? 0;
-    let [last, slope, iterations]: [SolvedPoint | null, number, number] = [null, FIRST_SLOPE, 0];
+    const search = new LiftSearch(cl);
+    let [alphaDeg, iterations, failures] = [this.goodDeg ?? 0, 0, 0];
     for (let step = 0; step < LIFT_STEPS && Math.abs(alphaDeg) < ANGLES_DEG.max; step++) {
       const point = this.at(alphaDeg);
       iterations += point.iterations;
-      if (!point.converged) break;
+      if (!point.converged) {
+        if (++failures > LIFT_FAILURES) break;
+        alphaDeg += ASIDE_DEG;
+        continue;
+      }
       if (Math.abs(point.cl - cl) < LIFT_CLOSE) return { ...point, iterations };
-      if (last) slope = (point.cl - last.cl) / (point.alphaDeg - last.alphaDeg);
-      if (!(slope > 0.02)) break;
-      last = point;
-      alphaDeg += Math.min(3, Math.max(-3, (cl - point.cl) / Math.min(slope, 0.2)));
+      const next = search.next(point);
+      if (next === null) break;
+      alphaDeg = next;
     }
     return { converged: false, alphaDeg, iterations };
   }

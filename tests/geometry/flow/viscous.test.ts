@@ -1,5 +1,6 @@
 import { expect, test, vi } from 'vitest';
 import { type SolvedPoint } from '#geometry/flow/flow-point.ts';
+import { sweepAll } from '#geometry/flow/sweep.ts';
 import { ViscousSection } from '#geometry/flow/viscous.ts';
 import { prepared } from './prepared.ts';
 
@@ -39,8 +40,10 @@ test.each([
 
 test('a lift coefficient as target', () => {
   const viscous = new ViscousSection(section, { reynolds: 5e5 });
-  const point = viscous.atLift(0.6);
-  expect(point.converged && Math.abs(point.cl - 0.6)).toBeLessThan(5e-4);
+  for (const cl of [0.6, -0.2, 1.15]) {
+    const point = viscous.atLift(cl);
+    expect(point.converged && Math.abs(point.cl - cl)).toBeLessThan(5e-4);
+  }
   expect(viscous.atLift(2.8).converged).toBe(false);
 });
 
@@ -61,6 +64,32 @@ test('earlier trips cost drag, and so does a rougher stream', () => {
   expect(drag({ criticalN: 5 })).toBeGreaterThan(free * 1.02);
   expect(tripped).toBeGreaterThan(free * 1.3);
   expect(drag({ tripUpper: 0.02, tripLower: 0.02 })).toBeGreaterThan(tripped * 1.03);
+});
+
+/** What is known of 0012 in words (Jacobs & Sherman, NACA Report 586, 1937; Loftin & Smith, NACA TN 1945, 1949). */
+test('the lower the Reynolds number, the more drag when tripped; free, it lies between one and three times that of laminar plates', () => {
+  const flat = prepared('0012');
+  const drags = [9e6, 3e6, 1e6, 3e5, 1e5].map(
+    (reynolds) => solved(new ViscousSection(flat, { reynolds, tripUpper: 0.05, tripLower: 0.05 }), 0).cd,
+  );
+  drags.forEach((cd, i) => i > 0 && expect(cd).toBeGreaterThan(drags[i - 1]! * 1.1));
+  const free = solved(new ViscousSection(flat, { reynolds: 2e5 }), 0).cd;
+  const laminar = (2 * 1.328) / Math.sqrt(2e5);
+  expect(free).toBeGreaterThan(laminar);
+  expect(free).toBeLessThan(3 * laminar);
+});
+
+test('the lower the Reynolds number, the less lift there is at most', () => {
+  const flat = prepared('0012');
+  const highest = [6e6, 1e6, 3e5].map((reynolds) =>
+    Math.max(
+      ...sweepAll(flat, { reynolds }, { fromDeg: 8, toDeg: 20, stepDeg: 2 }).map((point) =>
+        point.converged ? point.cl : 0,
+      ),
+    ),
+  );
+  expect(highest[0]).toBeGreaterThan(highest[1]! + 0.1);
+  expect(highest[1]).toBeGreaterThan(highest[2]! + 0.1);
 });
 
 test('a Mach number strengthens lift by Kármán and Tsien and leaves the layer alone', () => {
