@@ -1,8 +1,9 @@
 import { createHash } from 'node:crypto';
 import { readFile } from 'node:fs/promises';
+import { buffer } from 'node:stream/consumers';
 import { type Download, type Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { buffer } from 'node:stream/consumers';
+import sharp from 'sharp';
 import yauzl from 'yauzl';
 import { startApp, type TestApp } from './app.ts';
 
@@ -78,8 +79,13 @@ describe('a cut sheet from plan to measured part', () => {
     await page.getByLabel('File to check').setInputFiles(archive.path);
     await page.getByText('Current: this is the one to cut.').waitFor();
 
+    visit.watch.expectOffline();
+    await page.context().setOffline(true);
     await job.getByRole('button', { name: 'Start' }).click();
+    await page.getByText('One entry waits for the network.').waitFor();
     await job.getByText(/^started by/).waitFor();
+    await page.context().setOffline(false);
+    await page.getByText('One entry waits for the network.').waitFor({ state: 'detached' });
     await job.getByRole('button', { name: 'Done' }).click();
     await job.getByText('1 of 2 done').waitFor();
 
@@ -88,6 +94,11 @@ describe('a cut sheet from plan to measured part', () => {
     await page.getByLabel('Mark on the part').fill('left 1');
     await page.getByRole('button', { name: 'File the inspection' }).click();
     await page.getByText(/Out of tolerance: it stands on/).waitFor();
+    const create = { width: 40, height: 30, channels: 3, background: '#dcebee' } as const;
+    const photograph = await sharp({ create }).png().toBuffer();
+    const file = { name: 'part.png', mimeType: 'image/png', buffer: photograph };
+    await page.getByLabel('Photograph of the part').setInputFiles(file);
+    await page.getByRole('img', { name: 'Photograph 1 of the part' }).waitFor();
     await visit.close();
     expect(await logged()).toEqual(['started', 'done']);
   });
