@@ -77,12 +77,18 @@ export function programOf(setup: WireSetup, path: WirePath, head: readonly strin
   });
   if (controller.timeMode === 'inverse-time') lines.push('G94');
   lines.push(...controller.footer);
+  if (!controller.footer.some(endsProgram)) lines.push('M2');
   return {
     text: `${numbered(lines, controller.lineNumbers).join('\n')}\n`,
     lineOfNode,
     seconds,
     totalSeconds,
   };
+}
+
+/** Whether a footer line ends the program by itself: without M2 or M30 a file is not one (NISTIR 6556, 3.6.1). */
+function endsProgram(line: string): boolean {
+  return /\bM(?:0?2|30)\b/.test(line.replace(/\(.*/, ''));
 }
 
 function headerOf({ machine, panel, block, cut }: WirePlan, identity: ProgramIdentity): string[] {
@@ -93,10 +99,8 @@ function headerOf({ machine, panel, block, cut }: WirePlan, identity: ProgramIde
     comment('Checksum', identity.checksum.slice(0, CHECKSUM_DIGITS)),
     comment('Chords', `root ${panel.root.chordMm} mm, tip ${panel.tip.chordMm} mm, span ${panel.spanMm} mm`),
     ...setupComments({ machine, block }),
-    comment(
-      'Direction',
-      `root ${machine.rootFace}, trailing edge ${trailing}, upper surface first, ${cut.order}`,
-    ),
+    comment('Direction', `root ${machine.rootFace}, trailing edge ${trailing}`),
+    comment('Order', `upper surface first, ${cut.order}`),
   ];
 }
 

@@ -47,6 +47,23 @@ test('it says millimetres, absolute and inverse time, and goes back to G94 at th
   expect(lines.filter((line) => line.includes('G1 ')).every((line) => / F\d/.test(line))).toBe(true);
 });
 
+test.each([
+  [[], ['M2']],
+  [['M5 (M2 follows)'], ['M5 (M2 follows)', 'M2']],
+  [['M30'], ['M30']],
+  [
+    ['M5', 'M02 (end)'],
+    ['M5', 'M02 (end)'],
+  ],
+])('the footer %j makes it end in %j', (footer, end) => {
+  const machine = {
+    ...PLAN.machine,
+    controller: { ...PLAN.machine.controller, footer, lineNumbers: false },
+  };
+  const lines = cutOf(planWith({ machine })).program.text.trimEnd().split('\n');
+  expect(lines.slice(lines.indexOf('G94') + 1)).toEqual(end);
+});
+
 test('5 mm at 200 mm/min under G93: F40 per minute, F0.666667 per second, F1.5 as time', () => {
   const prism = {
     panel: { ...PLAN.panel, tip: PLAN.panel.root, sweepMm: 0, washoutDeg: 0, verticalOffsetMm: 0 },
@@ -100,7 +117,8 @@ test('comments name sheet, version, checksum, origin and direction', () => {
   expect(text).toContain('(Checksum: 3f2a9c81b0de)');
   expect(text).toContain('(Origin: both towers at zero, unit mm)');
   expect(text).toContain(
-    '(Direction: root left, trailing edge toward the origin, upper surface first, round)',
+    '(Direction: root left, trailing edge toward the origin)',
+    '(Order: upper surface first, round)',
   );
 });
 
