@@ -41,21 +41,16 @@ function BlockFields({ foams }: { foams: readonly Material[] }) {
       <QuantityRow label="Block, along the chord" path="block.lengthMm" as="length" />
       <QuantityRow label="Block, height" path="block.heightMm" as="length" />
       <QuantityRow label="Block, along the span" path="block.spanMm" as="length" />
-      {enabled && foam?.kind === 'foam' && (
+      {enabled && values['materialId'] !== null && (
         <Button
           size="small"
+          disabled={foam?.kind !== 'foam'}
           className="self-end pointer-coarse:h-11"
           onClick={() => {
+            if (foam?.kind !== 'foam') return;
             const { blockLengthMm, blockHeightMm, blockSpanMm } = foam;
-            const block = values['block'] as object;
-            replace(
-              withValue(values, 'block', {
-                ...block,
-                lengthMm: blockLengthMm,
-                heightMm: blockHeightMm,
-                spanMm: blockSpanMm,
-              }),
-            );
+            const size = { lengthMm: blockLengthMm, heightMm: blockHeightMm, spanMm: blockSpanMm };
+            replace(withValue(values, 'block', { ...(values['block'] as object), ...size }));
           }}
         >
           Block as it comes

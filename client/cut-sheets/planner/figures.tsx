@@ -57,6 +57,8 @@ const NAMES = {
   tip: 'Left at tip',
   check: 'Off the plan',
   points: 'Points in step',
+  ribs: 'Ribs',
+  yield: 'Sheet yield',
 } as const;
 const EMPTY: readonly Row[] = Object.values(NAMES).map((name) => [name, '–'] as const);
 
@@ -72,12 +74,8 @@ function rowsOf({ foam, cut, fit, ribs, root }: PlanModel, units: Units): Row[] 
     [NAMES.tip, fit ? length(fit.marginMm.tip) : '–'],
     [NAMES.check, cut ? length(cut.largestDeviationMm, 3) : '–'],
     [NAMES.points, `${root.core.x.length} + ${root.core.x.length}`],
-    ...(ribs
-      ? [
-          ['Ribs', `${ribs.stationsMm.length} on ${sheets(ribs.layout.sheets)}`] as const,
-          ['Sheet yield', formatPercent(ribs.layout.yield, 0)] as const,
-        ]
-      : []),
+    [NAMES.ribs, ribs ? `${ribs.stationsMm.length} on ${sheets(ribs.layout.sheets)}` : '–'],
+    [NAMES.yield, ribs ? formatPercent(ribs.layout.yield, 0) : '–'],
   ];
 }
 

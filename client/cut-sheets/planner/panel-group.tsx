@@ -19,14 +19,19 @@ export function PanelGroup({ sources }: { sources: PlanSources }) {
 }
 
 /** Skins and kerf: what lies between the true contour and the wire. */
-export function SkinGroup({ measured }: { measured: string | null }) {
+export function SkinGroup({
+  measured,
+}: {
+  /** Where the kerf comes from; empty until that is known, null where nothing has one. */
+  readonly measured: string | null;
+}) {
   return (
     <Group title="Skin and kerf">
       <QuantityRow label="Skin, upper" path="allowances.upperMm" as="length" decimals={2} />
       <QuantityRow label="Skin, lower" path="allowances.lowerMm" as="length" decimals={2} />
       <EndHeads />
       <PairRow label="Kerf" as="length" decimals={2} root="kerfMm.root" tip="kerfMm.tip" />
-      {measured !== null && <p className="text-xs text-graphite">{measured}</p>}
+      {measured !== null && <p className="min-h-9 text-xs text-graphite">{measured}</p>}
     </Group>
   );
 }

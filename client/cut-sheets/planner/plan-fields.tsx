@@ -18,7 +18,7 @@ export function PlanFields({
   const { fields, sources } = planner;
   const { values } = fields;
   const kerf = sources.kerfs && kerfFor(sources.kerfs, values['machineId'], values['materialId']);
-  const asks = sources.kerfs !== null && values['machineId'] !== null && values['materialId'] !== null;
+  const asks = values['machineId'] !== null && values['materialId'] !== null;
   return (
     <PlannerProvider value={fields}>
       <form
@@ -32,7 +32,7 @@ export function PlanFields({
         className="flex flex-col gap-5 max-lg:mx-auto max-lg:max-w-120"
       >
         <PanelGroup sources={sources} />
-        <SkinGroup measured={asks ? kerfWords(kerf) : null} />
+        <SkinGroup measured={asks ? (sources.kerfs ? kerfWords(kerf) : '') : null} />
         <FeaturesGroup />
         <BlockGroup sources={sources} />
         <FoldedGroups sources={sources} />

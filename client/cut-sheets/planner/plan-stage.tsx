@@ -36,10 +36,12 @@ interface PlanStageProps {
   readonly stale: boolean;
   /** Why what is drawn is not what the form says; null when it is. */
   readonly refused: ReactNode;
+  /** How the findings stand, in a few words. */
+  readonly standing: string | null;
 }
 
 /** The sheet in its place, with zoom and the marks of the finding that is selected. */
-export function PlanStage({ model, identity, position, selected, stale, refused }: PlanStageProps) {
+export function PlanStage({ model, identity, position, selected, stale, refused, standing }: PlanStageProps) {
   const units = useUnits();
   const [box, size] = useSize<HTMLDivElement>({ width: 680, height: 600, scale: 1 });
   const layout = useMemo(() => planLayout(size), [size]);
@@ -63,7 +65,7 @@ export function PlanStage({ model, identity, position, selected, stale, refused 
   return (
     <>
       <ZoomRow percent={Math.round(view.zoom * 100)} onZoom={zoom} onFit={fit}>
-        {refused ?? (stale && model ? 'Working out the newest values…' : null)}
+        {refused ?? (stale && model ? 'Working out the newest values…' : standing)}
       </ZoomRow>
       <div ref={box} data-place="sheet" className={SHEET_PLACE}>
         {model ? (

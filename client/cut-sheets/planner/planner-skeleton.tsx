@@ -32,8 +32,8 @@ export function PlannerSkeleton() {
       }
       side={
         <>
+          <Skeleton className="h-60 w-full" />
           <Skeleton className="h-40 w-full" />
-          <Skeleton className="h-56 w-full" />
         </>
       }
     />

@@ -65,6 +65,7 @@ function OpenedPlanner({ sheet, base, opened, mirror, mayWrite }: OpenedPlannerP
             selected={selection.selected}
             stale={worked.stale}
             refused={planner.refused}
+            standing={worked.output ? countWords(findings) : null}
           />
           <PlayerBar cut={model?.cut ?? null} control={run} />
           <Cautions machine={planner.machine} ribMachine={planner.ribMachine} />
@@ -72,6 +73,7 @@ function OpenedPlanner({ sheet, base, opened, mirror, mayWrite }: OpenedPlannerP
       }
       side={
         <>
+          <Figures model={model} stale={worked.stale} refused={planner.refused !== null} />
           <FindingsList
             findings={findings}
             pending={worked.output === null}
@@ -79,7 +81,6 @@ function OpenedPlanner({ sheet, base, opened, mirror, mayWrite }: OpenedPlannerP
             selected={selection.selected}
             onSelect={selection.select}
           />
-          <Figures model={model} stale={worked.stale} refused={planner.refused !== null} />
         </>
       }
     >

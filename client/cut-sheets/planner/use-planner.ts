@@ -87,14 +87,16 @@ export function usePlanner({ sheet, base, opened, mirror, mayWrite, formElement 
     nextNumber: Math.max(sheet.versionCount, sheet.latest.number, version.number) + 1,
     refused: refusedWords(read.errors.size, worked.error !== null),
     names: namesOf(sources),
-    machine: kindOf(sources, present['machineId']),
-    ribMachine: present['ribs'] === null ? null : kindOf(sources, present['ribMachineId']),
+    machine: kindOf(sources, version, present['machineId']),
+    ribMachine: present['ribs'] === null ? null : kindOf(sources, version, present['ribMachineId']),
     identity: useIdentity(sheet.name, version, sources, dirty, basedOn),
   };
 }
 
-function kindOf({ machines }: PlanSources, id: unknown): MachineKind | null {
-  return machines?.find((machine) => machine.id === id)?.settings.kind ?? null;
+/** The kind of a machine; until the machines are fetched, as far as the version tells. */
+function kindOf({ machines }: PlanSources, version: SheetVersion, id: unknown): MachineKind | null {
+  if (machines) return machines.find((machine) => machine.id === id)?.settings.kind ?? null;
+  return [version.machine, version.ribMachine].find((machine) => machine?.id === id)?.kind ?? null;
 }
 
 function namesOf({ root, tip, machines, materials }: PlanSources): Names {
