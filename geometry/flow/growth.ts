@@ -13,6 +13,12 @@ export interface Change {
   byRateBefore: number;
 }
 
+/**
+ * Least growth of n per chord as n nears N, from nothing at N/2 on [own choice]: where the waves stop growing just short of N the place of
+ * transition would otherwise jump along the surface for any trifle. It shifts n by far less than N is known.
+ */
+const LEAST_GROWTH = 0.5;
+
 /** A side that stays laminar. */
 export const NO_CHANGE: Readonly<Change> = { node: -1, xi: 0, byN: 0, byRate: 0, byRateBefore: 0 };
 
@@ -53,15 +59,19 @@ export class Growth {
     const start = layer.s[p] ?? 0;
     const d = (layer.s[i] ?? 0) - start;
     const n = layer.c[p] ?? 0;
-    const f = rates[p * 4] ?? 0;
-    this.curve(side, p, d);
+    const { criticalN } = layer.conditions;
+    const own = rates[p * 4] ?? 0;
+    const least = LEAST_GROWTH * Math.max(0, (2 * n) / criticalN - 1);
+    const live = own >= least ? 1 : 0;
+    const f = live === 1 ? own : least;
+    this.curve(side, p, d, live === 1);
     const end = n + d * (f + 0.5 * this.g * d);
-    const missing = layer.conditions.criticalN - n;
+    const missing = criticalN - n;
     const natural = d * f > 0 && end - n >= missing ? (2 * missing) / (f + Math.sqrt(f * f + 2 * this.g * missing)) : Infinity; // prettier-ignore
     const trip = side.tripS - start;
     if (Math.min(natural, trip) > d) {
       layer.c[i] = end;
-      answers[i * 2] = d + 0.5 * d * d * this.byRate;
+      answers[i * 2] = live * d + 0.5 * d * d * this.byRate;
       answers[i * 2 + 1] = 0.5 * d * d * this.byRateBefore;
       return false;
     }
@@ -72,15 +82,15 @@ export class Growth {
     change.node = i;
     change.xi = at / d;
     change.byN = slope;
-    change.byRate = slope * (at + 0.5 * at * at * this.byRate);
+    change.byRate = slope * (live * at + 0.5 * at * at * this.byRate);
     change.byRateBefore = slope * 0.5 * at * at * this.byRateBefore;
     return true;
   }
 
   /** The rate's slope g behind node p over an interval d, and its slopes against the rates at p and at the node before. */
-  private curve(side: Side, p: number, d: number): void {
+  private curve(side: Side, p: number, d: number, live: boolean): void {
     [this.g, this.byRate, this.byRateBefore] = [0, 0, 0];
-    if (p === side.first) return;
+    if (p === side.first || !live) return;
     const { layer, rates } = this;
     const before = p - side.step;
     const h = (layer.s[p] ?? 0) - (layer.s[before] ?? 0);

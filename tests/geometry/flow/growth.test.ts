@@ -37,6 +37,16 @@ test('growth neither falls off nor runs away within an interval', () => {
   expect(sudden.layer.c[40]).toBeCloseTo(5 + 2 * 0.8, 12);
 });
 
+test('waves that do not grow just short of 9 gain half a unit per chord, and nothing below 4.5', () => {
+  const near = make([0, 0], 8.1);
+  near.growth.turns(near.layer.upper, near.change, 40);
+  expect(near.layer.c[40]).toBeCloseTo(8.1 + 0.5 * 0.8 * 0.02, 12);
+  expect([near.growth.answers[80], near.growth.answers[81]]).toEqual([0, 0]);
+  const far = make([0, 0], 4);
+  far.growth.turns(far.layer.upper, far.change, 40);
+  expect(far.layer.c[40]).toBe(4);
+});
+
 test('the layer turns where n reaches 9, and the place answers to n and the rates', () => {
   const at = (before: number, last: number, n: number) => {
     const { layer, growth, change } = make([before, last], n);
