@@ -27,7 +27,7 @@ export function KerfStrip({ machine, material, onKerf }: KerfStripProps) {
       <legend className="pr-2 text-xs font-semibold tracking-wide text-graphite uppercase">Test strip</legend>
       <p>
         Three pieces with {STRIP_WIDTHS_MM.join(', ')} mm between their cuts. Each measures less by one kerf.
-        {name === null && ' By hand: cut three pieces along straight battens this far apart.'}
+        {STAND[machine.settings.kind]}
       </p>
       {name !== null && (
         <>
@@ -47,6 +47,14 @@ export function KerfStrip({ machine, material, onKerf }: KerfStripProps) {
     </fieldset>
   );
 }
+
+/** What the strip is cut from. */
+const STAND: Readonly<Record<Machine['settings']['kind'], string>> = {
+  wire: ' Low foam stands on edge; the program’s header states the size of the piece.',
+  bow: ' By hand: cut three pieces along straight battens this far apart.',
+  laser: '',
+  router: '',
+};
 
 function fileOf({ settings }: Machine): 'strip.nc' | 'strip.dxf' | null {
   if (settings.kind === 'wire') return 'strip.nc';
