@@ -19,7 +19,7 @@ export function TopBar({ onShowKeys }: { onShowKeys: () => void }) {
       </Link>
       <nav
         aria-label="Main"
-        className="flex min-w-0 flex-1 items-stretch gap-4 overflow-x-auto whitespace-nowrap [scrollbar-width:none] max-sm:order-last max-sm:h-11 max-sm:w-full max-sm:flex-none max-sm:justify-between max-sm:gap-2"
+        className="flex min-w-0 flex-1 items-stretch gap-4 overflow-x-auto whitespace-nowrap [scrollbar-width:none] max-sm:order-last max-sm:h-11 max-sm:text-xs max-sm:w-full max-sm:flex-none max-sm:justify-between max-sm:gap-2"
       >
         {me.role !== 'technician' && <Place to="/">Desk</Place>}
         <Place to="/sections">Sections</Place>
