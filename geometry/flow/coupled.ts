@@ -60,8 +60,8 @@ export class CoupledLayer {
   iterate(outer: OuterFlow): Convergence {
     const { layer, march, newton, mismatch } = this;
     this.setSelfInfluence(outer);
-    let [before, damping, taken] = [Infinity, 1, 1];
-    for (let iteration = 1; iteration <= MOST_ITERATIONS; iteration++) {
+    let [before, damping, taken, iteration] = [Infinity, 1, 1, 1];
+    for (; iteration <= MOST_ITERATIONS; iteration++) {
       layer.measure();
       layer.measureWake(outer);
       project(march, this.self);
@@ -77,7 +77,7 @@ export class CoupledLayer {
       this.take(taken);
       before = apart;
     }
-    return { converged: false, iterations: MOST_ITERATIONS };
+    return { converged: false, iterations: Math.min(iteration, MOST_ITERATIONS) };
   }
 
   /** The speeds' answer to a node's own defect; at the ends, where it is no measure, that of the next node inside. */

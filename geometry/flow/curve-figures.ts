@@ -65,7 +65,8 @@ function pick(points: readonly SolvedPoint[], worth: (point: SolvedPoint) => num
 
 /** The highest lift with converged neighbours on both sides, by the parabola through the three. */
 function highest(points: readonly FlowPoint[]): AtAngle | null {
-  const top = pick(points.filter((point) => point.converged), (point) => point.cl); // prettier-ignore
+  const solved = points.filter((point) => point.converged);
+  const top = pick(solved, (point) => point.cl);
   const i = points.findIndex((point) => point === top);
   const [a, b, c] = [points[i - 1], points[i], points[i + 1]];
   if (!a?.converged || !b?.converged || !c?.converged) return null;

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { ShapeError, issuesOf } from '../shapes/error.ts';
+import { ShapeError, issuesOf, shapeError } from '../shapes/error.ts';
 import { numberWithin } from '../shapes/fields.ts';
 import {
   AIR_LIMITS,
@@ -142,6 +142,24 @@ export function speedAtLift(condition: FlightCondition, liftCoefficient: number)
   return Math.sqrt(
     (2 * condition.massKg * STANDARD_GRAVITY) / (density * wingArea(condition) * liftCoefficient),
   );
+}
+
+/** Speeds in level flight, m/s. */
+export interface SpeedRange {
+  readonly stallMS: number;
+  readonly fastMS: number;
+}
+
+/**
+ * The range of speeds in level flight: from the stall, at the highest lift coefficient, to fast flight, at the lowest one still worth flying (the
+ * lower end of the section's low-drag range serves: see curveFigures).
+ * @param highestLift above lowestLift @param lowestLift above 0
+ * @throws ShapeError naming the value out of range
+ */
+export function speedRange(condition: FlightCondition, highestLift: number, lowestLift: number): SpeedRange {
+  if (!(lowestLift > 0)) throw shapeError('lowestLift', 'lowestLift must be above 0');
+  if (!(highestLift > lowestLift)) throw shapeError('highestLift', 'highestLift must be above lowestLift');
+  return { stallMS: speedAtLift(condition, highestLift), fastMS: speedAtLift(condition, lowestLift) };
 }
 
 /** Reynolds numbers over speeds (columns) and chords (rows). @param speedsMS m/s @param chordsMm mm */

@@ -63,7 +63,19 @@ export function pointOf(
   const cdFriction = frictionDrag(layer, friction, outer.alpha);
   if (!(cd > 0 && Math.abs(cl) < 3) || !Number.isFinite(cm) || !Number.isFinite(cdFriction)) return null;
   const events = (side: Side) => eventsOf(layer, side, friction);
-  return { converged: true, alphaDeg, cl, cd, cdFriction, cdPressure: cd - cdFriction, cm, lowestCp, upper: events(layer.upper), lower: events(layer.lower), iterations }; // prettier-ignore
+  return {
+    converged: true,
+    alphaDeg,
+    cl,
+    cd,
+    cdFriction,
+    cdPressure: cd - cdFriction,
+    cm,
+    lowestCp,
+    upper: events(layer.upper),
+    lower: events(layer.lower),
+    iterations,
+  };
 }
 
 /** 2 θ ue^((H+5)/2) at the last node of the wake: Squire & Young, ARC R&M 1838 (1937), eq. for the momentum far behind. */

@@ -67,7 +67,8 @@ export class Growth {
     this.curve(side, p, d, live === 1);
     const end = n + d * (f + 0.5 * this.g * d);
     const missing = criticalN - n;
-    const natural = d * f > 0 && end - n >= missing ? (2 * missing) / (f + Math.sqrt(f * f + 2 * this.g * missing)) : Infinity; // prettier-ignore
+    const reached = f > 0 && end - n >= missing;
+    const natural = reached ? (2 * missing) / (f + Math.sqrt(f * f + 2 * this.g * missing)) : Infinity;
     const trip = side.tripS - start;
     if (Math.min(natural, trip) > d) {
       layer.c[i] = end;

@@ -27,6 +27,8 @@ export interface Side {
   close: boolean;
 }
 
+const NEW_SIDE = { tripS: Infinity, transitionS: Infinity, tripped: false, close: false } as const;
+
 /**
  * The boundary layer's and the wake's state at all nodes of the panels. Sides change with the stagnation point; the state stays with its
  * node.
@@ -61,19 +63,16 @@ export class Layer {
     this.size = size;
     this.nu = 1 / conditions.reynolds;
     const array = () => new Float64Array(size);
-    [this.theta, this.dstar, this.ue, this.c, this.s, this.deadAir] = [array(), array(), array(), array(), array(), array()]; // prettier-ignore
+    this.theta = array();
+    this.dstar = array();
+    this.ue = array();
+    this.c = array();
+    this.s = array();
+    this.deadAir = array();
     this.regime = new Uint8Array(size).fill(LAMINAR);
     this.regime.fill(WAKE, panels.nodes);
-    this.upper = {
-      first: 0,
-      last: 0,
-      step: -1,
-      tripS: Infinity,
-      transitionS: Infinity,
-      tripped: false,
-      close: false,
-    };
-    this.lower = { first: 0, last: panels.nodes - 1, step: 1, tripS: Infinity, transitionS: Infinity, tripped: false, close: false }; // prettier-ignore
+    this.upper = { ...NEW_SIDE, first: 0, last: 0, step: -1 };
+    this.lower = { ...NEW_SIDE, first: 0, last: panels.nodes - 1, step: 1 };
     this.arc = new Float64Array(panels.nodes);
     for (let i = 1; i < panels.nodes; i++) this.arc[i] = (this.arc[i - 1] ?? 0) + (panels.length[i - 1] ?? 0);
   }

@@ -197,10 +197,23 @@ export class NewtonSystem {
     const { march, right, change, layer } = this;
     const a = march.answers;
     const at = i * PER_NODE;
-    const [x, y, z, m1] = before < 0 ? [0, 0, 0, 0] : [change.theta[before] ?? 0, change.c[before] ?? 0, change.ue[before] ?? 0, right[before] ?? 0]; // prettier-ignore
+    const first = before < 0;
     const m2 = right[i] ?? 0;
-    const value = (k: number) =>
-      (a[at + k] ?? 0) + (a[at + k + 1] ?? 0) * x + (a[at + k + 2] ?? 0) * y + (a[at + k + 3] ?? 0) * z + (a[at + k + 4] ?? 0) * m1 + (a[at + k + 5] ?? 0) * m2 + (a[at + k + 6] ?? 0) * xi; // prettier-ignore
+    // In the order of the answers: constant, δθ₁, δc₁, δue₁, δm₁, δm₂, δξ.
+    const factors = [
+      1,
+      first ? 0 : (change.theta[before] ?? 0),
+      first ? 0 : (change.c[before] ?? 0),
+      first ? 0 : (change.ue[before] ?? 0),
+      first ? 0 : (right[before] ?? 0),
+      m2,
+      xi,
+    ];
+    const value = (k: number) => {
+      let sum = 0;
+      for (let f = 0; f < PER_UNKNOWN; f++) sum += (a[at + k + f] ?? 0) * (factors[f] ?? 0);
+      return sum;
+    };
     change.theta[i] = value(0);
     change.c[i] = value(PER_UNKNOWN);
     const ue = (change.ue[i] = value(2 * PER_UNKNOWN));

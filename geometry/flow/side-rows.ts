@@ -21,7 +21,13 @@ export class SideRows {
     this.march = march;
     this.size = march.layer.size;
     const row = () => new Float64Array(this.size + 1);
-    [this.theta, this.c, this.ue, this.xi, this.n, this.rate, this.rateBefore] = [row(), row(), row(), row(), row(), row(), row()]; // prettier-ignore
+    this.theta = row();
+    this.c = row();
+    this.ue = row();
+    this.xi = row();
+    this.n = row();
+    this.rate = row();
+    this.rateBefore = row();
   }
 
   /** Begins a side anew. */

@@ -28,7 +28,17 @@ const WAKE_LENGTH = 1;
 export function traceWake(panels: Panels, strengths: Float64Array, alpha: number): Wake {
   const n = WAKE_NODES;
   const array = (length: number) => new Float64Array(length);
-  const wake = { nodes: n, x: array(n), y: array(n), s: array(n), length: array(n - 1), tx: array(n - 1), ty: array(n - 1), ux: array(n), uy: array(n) }; // prettier-ignore
+  const wake: Wake = {
+    nodes: n,
+    x: array(n),
+    y: array(n),
+    s: array(n),
+    length: array(n - 1),
+    tx: array(n - 1),
+    ty: array(n - 1),
+    ux: array(n),
+    uy: array(n),
+  };
   const { edge } = panels;
   const view = new PointView(panels);
   const row = new Float64Array(panels.nodes);

@@ -6,6 +6,7 @@ import {
   flightFigures,
   reynoldsTable,
   speedAtLift,
+  speedRange,
 } from '#geometry/flow/flight-condition.ts';
 import { ShapeError } from '#geometry/shapes/error.ts';
 
@@ -39,6 +40,14 @@ test('a speed and its lift coefficient name the same flight', () => {
   const byLift = flightFigures({ ...condition, flight: { kind: 'lift', liftCoefficient } });
   expect(byLift.speedMS).toBeCloseTo(15, 10);
   expect(speedAtLift(condition, 4 * liftCoefficient)).toBeCloseTo(7.5, 10);
+});
+
+test('speeds run from the stall to fast flight', () => {
+  const { stallMS, fastMS } = speedRange(condition, 1.2, 0.2);
+  expect(stallMS).toBeCloseTo(15 * Math.sqrt(0.355797 / 1.2), 4);
+  expect(fastMS / stallMS).toBeCloseTo(Math.sqrt(6), 10);
+  expect(() => speedRange(condition, 0.1, 0.2)).toThrow(/highestLift/);
+  expect(() => speedRange(condition, 1.2, 0)).toThrow(/lowestLift/);
 });
 
 test('a wing by span and mean chord is the wing of that area', () => {

@@ -42,6 +42,7 @@ export const flowCalls: Readonly<Record<string, () => readonly unknown[]>> = {
   reynoldsTable: () => [airAt(0), [10, 20], [100, 200]],
   checkFlightCondition: () => [flight()],
   flightFigures: () => [flight()],
+  speedRange: () => [flight(), 1.2, 0.2],
   speedAtLift: () => [flight(), 0.5],
   checkConditions: () => [{ reynolds: 5e5 }],
   panelOutline: () => [outline(), 40],
