@@ -7,6 +7,7 @@ import * as sessionEpoch from './0005_session_epoch.ts';
 import * as machinesAndMaterials from './0006_machines_and_materials.ts';
 import * as cutSheets from './0007_cut_sheets.ts';
 import * as cuttingList from './0008_cutting_list.ts';
+import * as flightConditions from './0009_flight_conditions.ts';
 
 /** Every migration under the name it is remembered by; a name that has been released never changes. */
 export const migrations: Readonly<Record<string, Knex.Migration>> = {
@@ -18,4 +19,5 @@ export const migrations: Readonly<Record<string, Knex.Migration>> = {
   '0006_machines_and_materials': machinesAndMaterials,
   '0007_cut_sheets': cutSheets,
   '0008_cutting_list': cuttingList,
+  '0009_flight_conditions': flightConditions,
 };

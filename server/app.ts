@@ -17,6 +17,7 @@ import { cutSheetHandlers } from './cut-sheets/routes.ts';
 import { cuttingListHandlers } from './cutting-list/routes.ts';
 import { deskHandlers } from './desk/routes.ts';
 import { exportHandlers } from './exports/routes.ts';
+import { flightConditionHandlers } from './flight-conditions/routes.ts';
 import { clientFiles } from './http/client-files.ts';
 import { healthHandlers } from './http/health.ts';
 import { requestLog } from './http/log.ts';
@@ -61,6 +62,7 @@ export function createApp({ config, knex, logger, clientFolder, works }: AppDepe
     ...cuttingListHandlers(knex),
     ...inspectionHandlers(knex),
     ...deskHandlers(knex),
+    ...flightConditionHandlers(knex),
     ...cutSheetHandlers({ knex, works: works ?? threadedWorks(), publicUrl: config.publicUrl }),
   };
   const document = JSON.stringify(openApiDocument(version));

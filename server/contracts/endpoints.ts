@@ -2,6 +2,7 @@ import { accountEndpoints } from './account-endpoints.ts';
 import { cutSheetEndpoints } from './cut-sheet-endpoints.ts';
 import { cuttingListEndpoints } from './cutting-list-endpoints.ts';
 import { type Endpoint } from './endpoint.ts';
+import { flightConditionEndpoints } from './flight-condition-endpoints.ts';
 import { sectionEndpoints } from './section-endpoints.ts';
 import { shopEndpoints } from './shop-endpoints.ts';
 
@@ -15,5 +16,6 @@ export const endpoints = {
   ...shopEndpoints,
   ...cutSheetEndpoints,
   ...cuttingListEndpoints,
+  ...flightConditionEndpoints,
 } as const satisfies Record<string, Endpoint>;
 export type EndpointName = keyof typeof endpoints;

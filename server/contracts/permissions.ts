@@ -25,6 +25,8 @@ export const permissions = {
   'inspections.answer': ['owner', 'designer', 'builder'],
   'shop.read': ['owner', 'designer', 'builder', 'technician'],
   'shop.write': ['owner', 'builder'],
+  'flight-conditions.read': ['owner', 'designer', 'builder', 'technician'],
+  'flight-conditions.write': ['owner', 'designer'],
 } as const satisfies Record<string, readonly Role[]>;
 export type Permission = keyof typeof permissions;
 

@@ -20,7 +20,8 @@ export type WorkshopTable =
   | 'inspections'
   | 'inspection_measurements'
   | 'photos'
-  | 'kerf_history';
+  | 'kerf_history'
+  | 'flight_conditions';
 
 /** A row to be written, without the workshop: that comes from the scope and from nowhere else. */
 type NewRow = Readonly<Record<string, string | number | boolean | Date | Buffer | null>>;

@@ -27,6 +27,7 @@ const tables = [
   'inspection_measurements',
   'photos',
   'kerf_history',
+  'flight_conditions',
 ];
 
 describe('two workshops', () => {

@@ -36,11 +36,26 @@ describe('the table of permissions', () => {
     const sheets = ['cut-sheets.read', 'cut-sheets.write', 'cut-sheets.release'];
     const floor = ['cuts.log', 'inspections.write'];
     const cutting = [...sheets, ...floor, 'inspections.answer', 'shop.read'];
+    const flight = ['flight-conditions.read', 'flight-conditions.write'];
     expect(table).toEqual({
-      owner: [...all, ...cutting, 'shop.write'],
-      designer: [...all, ...cutting],
-      builder: [...reads, 'files.download', 'downloads.read', ...cutting, 'shop.write'],
-      technician: ['account.own', 'released.read', 'files.download', ...floor, 'shop.read'],
+      owner: [...all, ...cutting, 'shop.write', ...flight],
+      designer: [...all, ...cutting, ...flight],
+      builder: [
+        ...reads,
+        'files.download',
+        'downloads.read',
+        ...cutting,
+        'shop.write',
+        'flight-conditions.read',
+      ],
+      technician: [
+        'account.own',
+        'released.read',
+        'files.download',
+        ...floor,
+        'shop.read',
+        'flight-conditions.read',
+      ],
       guest: [],
     });
   });

@@ -2,8 +2,10 @@ import { type Knex } from 'knex';
 import { hashPassword } from '#server/account/passwords.ts';
 import { createPerson, createWorkshop } from '#server/account/store.ts';
 import { type Author } from '#server/sections/rules.ts';
+import { createCondition } from '#server/flight-conditions/store.ts';
 import { fillShop } from '#server/shop/defaults.ts';
 import { listItems, machines, materials } from '#server/shop/store.ts';
+import { demoConditions } from './flight-conditions.ts';
 import { demoFloor } from './floor.ts';
 import { floorStep } from './floor-events.ts';
 import { type Moment, type Signed } from './histories.ts';
@@ -25,7 +27,7 @@ export async function isEmpty(knex: Knex): Promise<boolean> {
 }
 
 /**
- * Fills in the demo workshop: four people with one password, machines and materials, sections and cut sheets with some weeks of history before `now`,
+ * Fills in the demo workshop: four people with one password, machines and materials, flight conditions, sections and cut sheets with some weeks of history before `now`,
  * and what was cut and measured of them.
  * All or nothing. The same `now` gives the same workshop but for its ids, the sums that name them, and the salt of the passwords.
  * @param publicUrl the address under which people reach the program, for the code on printed sheets
@@ -48,6 +50,10 @@ export async function seedDemo(
     }
     const personOf = (role: string) => people.get(role) ?? { id: '', name: '' };
     await fillShop(transaction, { workshopId, personId: personOf('builder').id, at: opened }, demoShop);
+    for (const condition of demoConditions) {
+      const designer = { workshopId, personId: personOf('designer').id, at: opened };
+      await createCondition(transaction, designer, condition);
+    }
     const author = ({ by, at }: Signed): Author => ({
       workshopId,
       personId: personOf(by).id,

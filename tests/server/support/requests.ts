@@ -5,6 +5,8 @@ import { createSection } from '#server/sections/store.ts';
 import { releaseVersion } from '#server/sections/versions/status-store.ts';
 import { saveVersion } from '#server/sections/versions/store.ts';
 import { balsa, extrudedFoam, handBow, wireBench } from '#server/contracts/shop-samples.ts';
+import { levelTrainer } from '#server/contracts/flight-condition-samples.ts';
+import { createCondition } from '#server/flight-conditions/store.ts';
 import { putKerf } from '#server/shop/kerfs/store.ts';
 import { createItem, machines, materials } from '#server/shop/store.ts';
 import { type TestApi, type TestWorkshop } from './api.ts';
@@ -34,6 +36,7 @@ export interface Samples extends PlanParts {
   readonly sheetId: string;
   readonly inspectionId: string;
   readonly photoId: string;
+  readonly conditionId: string;
 }
 
 /** A four-axis machine and a foam with a kerf that nobody measured, each of a name that only it has. */
@@ -48,10 +51,18 @@ export async function makeShop(api: TestApi, workshop: TestWorkshop): Promise<Om
   return place;
 }
 
+/** A flight condition of a name that only it has; the first of a workshop is its default. */
+export async function makeCondition(api: TestApi, workshop: TestWorkshop): Promise<string> {
+  const author = workshop.author('designer', new Date('2026-02-01T09:00:00.000Z'));
+  const input = { name: `Marsh ${uuid()}`, settings: levelTrainer };
+  return (await createCondition(api.knex, author, input)).id;
+}
+
 export async function makeSamples(api: TestApi, workshop: TestWorkshop): Promise<Samples> {
   const parts = { sectionId: await makeSection(api, workshop), ...(await makeShop(api, workshop)) };
   const made = { ...parts, sheetId: await makeSheet(api, workshop, parts) };
-  return { ...made, ...(await makeInspection(api, workshop, made)) };
+  const conditionId = await makeCondition(api, workshop);
+  return { ...made, conditionId, ...(await makeInspection(api, workshop, made)) };
 }
 
 const of = ({ sectionId }: Samples, number?: number) => ({
@@ -146,4 +157,12 @@ export const requests: Readonly<Record<EndpointName, (samples: Samples) => Input
   photo: ({ photoId }) => ({ params: { photoId } }),
   inspectionStatistics: () => ({}),
   desk: () => ({}),
+  listFlightConditions: () => ({}),
+  createFlightCondition: () => ({ body: { name: uuid(), settings: levelTrainer } }),
+  getFlightCondition: ({ conditionId }) => ({ params: { conditionId } }),
+  changeFlightCondition: ({ conditionId }) => ({
+    params: { conditionId },
+    body: { revision: 1, name: uuid() },
+  }),
+  setDefaultFlightCondition: ({ conditionId }) => ({ params: { conditionId } }),
 };
