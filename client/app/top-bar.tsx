@@ -7,6 +7,7 @@ import { useMay, useMe } from './session.tsx';
 export function TopBar({ onShowKeys }: { onShowKeys: () => void }) {
   const me = useMe();
   const readsShop = useMay('shop.read');
+  const readsFlight = useMay('flight-conditions.read');
   return (
     <header className="sticky top-0 z-20 flex h-11 shrink-0 items-stretch gap-x-5 max-sm:h-auto max-sm:flex-wrap border-b border-rule bg-paper px-4 pointer-coarse:h-13 print:hidden">
       <Link
@@ -23,8 +24,13 @@ export function TopBar({ onShowKeys }: { onShowKeys: () => void }) {
       >
         {me.role !== 'technician' && <Place to="/">Desk</Place>}
         <Place to="/sections">Sections</Place>
-        <Place to="/cut-sheets">Cut sheets</Place>
-        <Place to="/cutting-list">Cutting list</Place>
+        {readsFlight && <Place to="/flight-conditions">Flight</Place>}
+        <Place to="/cut-sheets" short="Sheets">
+          Cut sheets
+        </Place>
+        <Place to="/cutting-list" short="Cutting">
+          Cutting list
+        </Place>
         {readsShop && <Place to="/shop">Shop</Place>}
       </nav>
       <div className="ml-auto flex min-w-0 shrink-0 items-center gap-4 max-sm:h-11">
@@ -35,13 +41,25 @@ export function TopBar({ onShowKeys }: { onShowKeys: () => void }) {
   );
 }
 
-function Place({ to, children }: { to: string; children: string }) {
+interface PlaceProps {
+  to: string;
+  /** A part of the words, for where there is little room; the whole is still spoken. */
+  short?: string;
+  children: string;
+}
+
+function Place({ to, short, children }: PlaceProps) {
   return (
     <NavLink
       to={to}
       className="flex items-center border-b-2 border-transparent px-0.5 pt-0.5 text-graphite hover:text-ink aria-[current=page]:border-ink aria-[current=page]:font-semibold aria-[current=page]:text-ink"
     >
-      {children}
+      {short !== undefined && (
+        <span aria-hidden="true" className="sm:hidden">
+          {short}
+        </span>
+      )}
+      <span className={short === undefined ? '' : 'max-sm:sr-only'}>{children}</span>
     </NavLink>
   );
 }
