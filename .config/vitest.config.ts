@@ -27,12 +27,22 @@ export default defineConfig({
       },
       {
         root,
+        test: {
+          name: 'client-logic',
+          setupFiles,
+          isolate: false,
+          include: ['tests/client/**/*.test.ts'],
+          testTimeout: 20_000,
+        },
+      },
+      {
+        root,
         plugins: [react()],
         test: {
           name: 'client',
           setupFiles,
           environment: 'jsdom',
-          include: ['tests/client/**/*.test.{ts,tsx}'],
+          include: ['tests/client/**/*.test.tsx'],
           testTimeout: 20_000,
         },
       },
@@ -42,7 +52,21 @@ export default defineConfig({
           name: 'server',
           setupFiles: [...setupFiles, 'tests/setup-properties.ts'],
           globalSetup: ['tests/setup-database.ts'],
+          // Each file has an application and a database of its own, so the files of a worker share what they have imported.
+          isolate: false,
           include: ['tests/server/**/*.test.ts'],
+          exclude: ['tests/server/start/**'],
+          testTimeout: 30_000,
+          hookTimeout: 60_000,
+        },
+      },
+      {
+        root,
+        test: {
+          name: 'start',
+          setupFiles,
+          globalSetup: ['tests/setup-database.ts'],
+          include: ['tests/server/start/**/*.test.ts'],
           testTimeout: 30_000,
           hookTimeout: 60_000,
         },

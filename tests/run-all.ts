@@ -8,35 +8,35 @@ import { onStop } from '#server/start/stop.ts';
 import { countReport, reportSchema, sumOfCounts, type Count, type Report } from './report.ts';
 import { startThrowaway } from './throwaway.ts';
 
-/** The projects of the Vitest configuration and the folders of tests/ that are theirs. */
+/** The projects of the Vitest configuration, each with the files of tests/ that are its own. */
 const projects = {
-  geometry: ['geometry', 'reference', 'structure'],
-  client: ['client'],
-  server: ['server'],
-  browser: ['browser'],
+  geometry: /^(?:geometry|reference|structure)\//,
+  'client-logic': /^client\/.*\.ts$/,
+  client: /^client\/.*\.tsx$/,
+  start: /^server\/start\//,
+  server: /^server\/(?!start\/)/,
+  browser: /^browser\//,
 } as const;
 
 type Project = keyof typeof projects;
 
+/** Paths of all test files below tests/. */
+function allTestFiles(root: string): string[] {
+  return readdirSync(join(root, 'tests'), { recursive: true, encoding: 'utf8' }).filter((name) =>
+    /\.(test|spec)\.\w+$/.test(name),
+  );
+}
+
 function testFiles(root: string, project: Project): string[] {
-  return projects[project]
-    .map((folder) => join(root, 'tests', folder))
-    .filter((folder) => existsSync(folder))
-    .flatMap((folder) =>
-      readdirSync(folder, { recursive: true, encoding: 'utf8' })
-        .filter((name) => /\.test\.tsx?$/.test(name))
-        .map((name) => join(folder, name)),
-    );
+  return allTestFiles(root)
+    .filter((name) => projects[project].test(name))
+    .map((name) => join(root, 'tests', name));
 }
 
 /** Test files that lie in no project's folder and would never be run. */
 function strayFiles(root: string): Count {
-  const folders = Object.values(projects)
-    .flat()
-    .map((folder) => `${folder}/`);
-  const stray = readdirSync(join(root, 'tests'), { recursive: true, encoding: 'utf8' })
-    .filter((name) => /\.(test|spec)\.\w+$/.test(name))
-    .filter((name) => !folders.some((folder) => name.startsWith(folder)));
+  const owners = Object.values(projects);
+  const stray = allTestFiles(root).filter((name) => !owners.some((own) => own.test(name)));
   return {
     passed: 0,
     failed: stray.length,
@@ -104,12 +104,15 @@ async function script(root: string, name: string): Promise<Count> {
   return { passed: 0, failed: 1, reasons: [`npm run ${name} failed:\n${output.trim()}`] };
 }
 
+/** All that needs no browser. */
+const FAST = ['geometry', 'client-logic', 'client', 'start', 'server'] as const;
+
 async function checkAll(root: string): Promise<Count> {
   // The browser tests wait for real time to pass, so nothing else competes with them.
   const scripts = script(root, 'types').then(async (types) =>
     sumOfCounts([types, await script(root, 'lint')]),
   );
-  const fast = await vitestProjects(root, ['geometry', 'client', 'server']);
+  const fast = await vitestProjects(root, FAST);
   const checked = await scripts;
   return sumOfCounts([strayFiles(root), checked, fast, await vitestProjects(root, ['browser'])]);
 }

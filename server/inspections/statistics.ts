@@ -19,7 +19,8 @@ interface Row {
 
 /**
  * Deviations by section and machine, sections by name: each reading counts for the section at its end of the panel. The spread is the sample's
- * standard deviation, with n − 1; the database gives none for one reading.
+ * standard deviation, with n − 1; the database gives none for one reading. Both to
+ * the nanometre, so that the order in which the database adds up does not show.
  */
 export async function inspectionStatistics(
   db: Knex,
@@ -48,8 +49,8 @@ export async function inspectionStatistics(
       db.raw('count(DISTINCT i.id) AS parts'),
       db.raw('count(*) AS readings'),
       db.raw('count(CASE WHEN r.within_tolerance = 0 THEN 1 END) AS out_of_tolerance'),
-      db.raw('avg(r.deviation_mm) AS mean_mm'),
-      db.raw('stddev_samp(r.deviation_mm) AS spread_mm'),
+      db.raw('round(avg(r.deviation_mm), 6) AS mean_mm'),
+      db.raw('round(stddev_samp(r.deviation_mm), 6) AS spread_mm'),
     );
   return {
     items: rows.map((row) => ({

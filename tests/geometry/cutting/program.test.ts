@@ -116,10 +116,8 @@ test('comments name sheet, version, checksum, origin and direction', () => {
   expect(text).toContain('(Sheet: Reed wing v3)');
   expect(text).toContain('(Checksum: 3f2a9c81b0de)');
   expect(text).toContain('(Origin: both towers at zero, unit mm)');
-  expect(text).toContain(
-    '(Direction: root left, trailing edge toward the origin)',
-    '(Order: upper surface first, round)',
-  );
+  expect(text).toContain('(Direction: root left, trailing edge toward the origin)');
+  expect(text).toContain('(Order: upper surface first, round)');
 });
 
 test('no name can end a comment, begin a line or carry a code', () => {
