@@ -1,5 +1,4 @@
 import { fireEvent, screen, waitFor, within } from '@testing-library/react';
-import userEvent from '@testing-library/user-event';
 import { describe, expect, it } from 'vitest';
 import { type Me } from '#server/contracts/people.ts';
 import { fakeServer, json, noAnswer, problem } from '#tests/client/support/fake-server.ts';
@@ -22,10 +21,11 @@ function serve(role: Me['role'], routes: Parameters<typeof fakeServer>[0] = {}) 
 }
 
 const at = (id: string) => `/flight-conditions?condition=${id}`;
-const side = (name: string) => screen.findByRole('region', { name });
+const side = async (name: string) =>
+  (await screen.findByText(name, { selector: 'h2' })).closest<HTMLElement>('section')!;
 const field = (label: string) => screen.getByLabelText<HTMLInputElement>(label);
 const retype = (label: string, value: string) => fireEvent.change(field(label), { target: { value } });
-const save = () => userEvent.click(screen.getByRole('button', { name: 'Save' }));
+const press = (name: string) => fireEvent.click(screen.getByText(name, { selector: 'button' }));
 const figure = (label: string | RegExp) =>
   screen.getByText(label, { selector: 'dt' }).nextSibling?.textContent;
 
@@ -34,13 +34,13 @@ describe('the flight conditions', () => {
     serve('designer');
     const view = openAt('/flight-conditions');
     await side('Survey');
-    expect(screen.getByRole('link', { name: 'Survey' }).closest('li')!.textContent).toContain(
+    expect(screen.getByText('Survey', { selector: 'a' }).closest('li')!.textContent).toContain(
       '● default of the workshop',
     );
     expect(screen.getByRole('link', { name: 'Flight' }).getAttribute('aria-current')).toBe('page');
-    expect(screen.queryByRole('link', { name: 'Old' })).toBeNull();
-    await userEvent.click(screen.getByRole('checkbox', { name: 'Show the archive (1)' }));
-    expect(await screen.findByRole('link', { name: 'Old' })).toBeTruthy();
+    expect(screen.queryByText('Old', { selector: 'a' })).toBeNull();
+    fireEvent.click(field('Show the archive (1)'));
+    expect(await screen.findByText('Old', { selector: 'a' })).toBeTruthy();
     expect(view.address()).toBe('/flight-conditions?archive=1');
   });
 
@@ -100,7 +100,7 @@ describe('the flight conditions', () => {
     openAt('/flight-conditions');
     const again = await screen.findByRole('button', { name: 'Try again' });
     answer = () => page([]);
-    await userEvent.click(again);
+    fireEvent.click(again);
     expect(await screen.findByText('No flight condition yet.')).toBeTruthy();
     expect(screen.getByText('An owner or designer enters how the aircraft fly.')).toBeTruthy();
   });
@@ -124,14 +124,15 @@ describe('the form of a flight condition', () => {
       },
     });
     const view = openAt('/flight-conditions');
-    await userEvent.click(await screen.findByRole('button', { name: 'New' }));
+    await screen.findByText('Survey', { selector: 'a' });
+    press('New');
     await side('New flight condition');
     retype('Name', 'Kite');
-    await userEvent.selectOptions(field('Wing given by'), 'area');
+    retype('Wing given by', 'area');
     retype('Wing area', '26 dm²');
-    await userEvent.selectOptions(field('Surface'), 'forced');
+    retype('Surface', 'forced');
     retype('Transition, upper', '5');
-    await userEvent.click(screen.getByRole('button', { name: 'Make the condition' }));
+    press('Make the condition');
     await side('Kite');
     expect(server.of('POST', LIST)[0]?.body).toEqual({
       name: 'Kite',
@@ -149,11 +150,11 @@ describe('the form of a flight condition', () => {
     openAt(at(courier.id));
     await side('Courier');
     retype('Mass', '600');
-    await save();
+    press('Save');
     expect(await screen.findByText('Mass must be between 0.02 and 500 kg.')).toBeTruthy();
     expect(server.of('PATCH', `${LIST}/${courier.id}`)).toEqual([]);
     retype('Mass', '2.2');
-    await save();
+    press('Save');
     expect((await screen.findByText(/cannot be reached/)).textContent).toContain('what you typed is kept');
     expect(field('Mass').value).toBe('2.2');
   });
@@ -170,11 +171,11 @@ describe('the form of a flight condition', () => {
     openAt(at(courier.id));
     await side('Courier');
     retype('Root chord', '230');
-    await save();
+    press('Save');
     const notice = await screen.findByRole('alert');
     const items = within(notice).getAllByRole('listitem');
     expect(items.map((one) => one.textContent)).toEqual(['Mass: 2.500 kg', 'Root chord: 220.0 mm']);
-    await userEvent.click(within(notice).getByRole('button', { name: 'Save mine over it' }));
+    press('Save mine over it');
     expect(await screen.findByText('Saved.')).toBeTruthy();
     const sent = server.of('PATCH', `${LIST}/${courier.id}`).map(({ body }) => body);
     expect(sent).toEqual([
@@ -198,7 +199,7 @@ describe('the form of a flight condition', () => {
     openAt(at(courier.id));
     await side('Courier');
     retype('Mass', '2.2');
-    await userEvent.click(screen.getByRole('button', { name: 'Make it the default' }));
+    press('Make it the default');
     expect(await screen.findByText('The default stays in use until another one is it.')).toBeTruthy();
     expect(screen.queryByRole('button', { name: 'Archive' })).toBeNull();
     expect(field('Mass').value).toBe('2.2');
@@ -210,11 +211,12 @@ describe('the form of a flight condition', () => {
     const view = openAt(at(courier.id));
     await side('Courier');
     retype('Name', 'Typed');
-    await userEvent.click(screen.getByRole('button', { name: 'Close' }));
-    await userEvent.click(await screen.findByRole('button', { name: 'Leave it unsaved' }));
+    press('Close');
+    await screen.findByText('Leave it unsaved');
+    press('Leave it unsaved');
     await waitFor(() => {
       expect(view.address()).toBe('/flight-conditions');
     });
-    expect(document.activeElement).toBe(screen.getByRole('link', { name: 'Courier' }));
+    expect(document.activeElement).toBe(screen.getByText('Courier', { selector: 'a' }));
   });
 });
