@@ -20,7 +20,7 @@ export function TopBar({ onShowKeys }: { onShowKeys: () => void }) {
       </Link>
       <nav
         aria-label="Main"
-        className="flex min-w-0 flex-1 items-stretch gap-4 overflow-x-auto whitespace-nowrap [scrollbar-width:none] max-sm:order-last max-sm:h-11 max-sm:text-xs max-sm:w-full max-sm:flex-none max-sm:justify-between max-sm:gap-2"
+        className="flex min-w-0 flex-1 items-stretch gap-4 overflow-x-auto whitespace-nowrap [scrollbar-width:none] max-sm:order-last max-sm:h-7 max-sm:pointer-coarse:h-11 max-sm:text-xs max-sm:w-full max-sm:flex-none max-sm:justify-between max-sm:gap-2"
       >
         {me.role !== 'technician' && <Place to="/">Desk</Place>}
         <Place to="/sections">Sections</Place>
@@ -33,7 +33,7 @@ export function TopBar({ onShowKeys }: { onShowKeys: () => void }) {
         </Place>
         {readsShop && <Place to="/shop">Shop</Place>}
       </nav>
-      <div className="ml-auto flex min-w-0 shrink-0 items-center gap-4 max-sm:h-11">
+      <div className="ml-auto flex min-w-0 shrink-0 items-center gap-4 max-sm:h-10">
         <span className="truncate text-graphite max-md:hidden">{me.workshop.name}</span>
         <PersonMenu me={me} onShowKeys={onShowKeys} />
       </div>

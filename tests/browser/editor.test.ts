@@ -158,7 +158,9 @@ describe('the keyboard alone', () => {
     await tabTo(/^Password/);
     await page.keyboard.type('marsh-reed-heron-7');
     await press('Enter');
-    await page.waitForURL(/\/sections/);
+    await page.getByRole('heading', { name: /^Desk of/ }).waitFor();
+    await tabTo(/^Sections/);
+    await press('Enter');
     await page.getByRole('link', { name: 'Reed tailplane' }).waitFor();
     await tabTo(/^Reed tailplane/);
     await press('Enter');

@@ -33,7 +33,7 @@ export function FindingsList({ findings, pending, stale, selected, onSelect }: F
             <FindingButton finding={first} selected={selected} onSelect={onSelect} />
             {more.length > 0 && (
               <details className="pb-1.5 pl-6">
-                <summary className="py-0.5 text-graphite pointer-coarse:min-h-11">
+                <summary className="min-h-6 py-0.5 text-graphite pointer-coarse:min-h-11">
                   {`${more.length} more of the same`}
                 </summary>
                 {more.map((finding) => (
