@@ -96,7 +96,8 @@ function Shown({ shownId, wanted, conditions, mayWrite, go }: ShownProps) {
   }
   return (
     <ConditionSide
-      key={shownId}
+      // The default that stands there of itself is left like any other: what was typed goes with the form.
+      key={`${shownId} ${wanted ? 'chosen' : ''}`}
       stored={stored}
       wanted={wanted}
       mayWrite={mayWrite}

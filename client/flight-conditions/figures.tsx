@@ -21,6 +21,9 @@ const ESTIMATED = { min: 60_000, max: 3_000_000 };
 /** Above this speed the air's compressibility begins to count [common practice]. */
 const COMPRESSIBLE_MACH = 0.3;
 
+/** Quieter, but still to be read. */
+const OLDER = 'text-graphite italic';
+
 /** What follows from a flight condition, live; `older` says that the form cannot be read at the moment. */
 export function Figures({ condition, older }: { condition: FlightCondition; older: boolean }) {
   const units = useUnits();
@@ -36,7 +39,7 @@ export function Figures({ condition, older }: { condition: FlightCondition; olde
       <p role="status" className="-my-2 min-h-8 text-xs text-amber sm:min-h-4">
         {older && 'The form cannot be read at the moment: these are the last figures that it gave.'}
       </p>
-      <div className={`flex flex-col gap-4 ${older ? 'opacity-60' : ''}`}>
+      <div className={`flex flex-col gap-4 ${older ? OLDER : ''}`}>
         <Flight figures={figures} />
         <Block title="Reynolds number">
           <dl>
@@ -66,7 +69,7 @@ export function Figures({ condition, older }: { condition: FlightCondition; olde
         <AssumedLift {...lift} />
       </Block>
       <Findings figures={figures} {...lift} />
-      <div className={older ? 'opacity-60' : ''}>
+      <div className={older ? OLDER : ''}>
         <ReynoldsTable condition={condition} figures={figures} range={range} />
       </div>
     </section>

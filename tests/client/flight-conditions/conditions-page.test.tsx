@@ -206,6 +206,19 @@ describe('the form of a flight condition', () => {
     expect(server.of('POST', `${LIST}/${courier.id}/default`)).toHaveLength(1);
   });
 
+  it('drops what was typed into the default when it is left unsaved', async () => {
+    serve('designer');
+    openAt(at(survey.id));
+    await side('Survey');
+    retype('Mass', '9');
+    press('Close');
+    await screen.findByText('Leave it unsaved');
+    press('Leave it unsaved');
+    await waitFor(() => {
+      expect(field('Mass').value).toBe('4.200 kg');
+    });
+  });
+
   it('asks before typed values are left, and gives the focus back', async () => {
     serve('designer');
     const view = openAt(at(courier.id));
