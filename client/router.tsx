@@ -17,6 +17,7 @@ const SCREENS: RouteObject[] = [
   screen('/sections', () => import('./sections/library/library-page.tsx')),
   screen('/sections/:sectionId', () => import('./sections/editor/editor-page.tsx')),
   screen('/sections/:sectionId/versions/:number', () => import('./versions/version-page.tsx')),
+  screen('/compare', () => import('./compare/compare-page.tsx')),
   screen('/cut-sheets', () => import('./cut-sheets/list/list-page.tsx')),
   screen('/cut-sheets/:sheetId', () => import('./cut-sheets/sheet-page.tsx')),
   screen('/cut-sheets/:sheetId/versions/:number', () => import('./cut-sheets/versions/version-page.tsx')),

@@ -9,7 +9,8 @@ import { formatLength, useUnits } from '#client/app/units.ts';
 import { drawSection } from '#client/drawing/section-drawing.ts';
 import { StaticSheet, type TitleBlockFields } from '#client/drawing/static-sheet.tsx';
 import { MeasuredValues } from '#client/sections/editor/measured-values.tsx';
-import { Button } from '#client/ui/button.tsx';
+import { comparePath } from '#client/compare/choice.ts';
+import { Button, buttonClass } from '#client/ui/button.tsx';
 import { QuantityField } from '#client/ui/quantity-field.tsx';
 import { StatusMark } from '#client/ui/status-mark.tsx';
 import { DownloadsList } from './downloads-list.tsx';
@@ -40,7 +41,7 @@ export function VersionView({ version, inForce }: VersionViewProps) {
     <div data-page="flowing" className="grid flex-1 lg:grid-cols-[minmax(0,1fr)_22rem] print:block">
       <title>{`${version.sectionName} v${version.number} · Ribwright`}</title>
       <div className="flex min-w-0 flex-col gap-3 p-4 print:p-0">
-        <Head version={version} inForce={inForce} onOpen={setOpen} />
+        <Head version={version} inForce={inForce} chordMm={chordMm} onOpen={setOpen} />
         <Standing
           version={version}
           noun="section"
@@ -97,11 +98,18 @@ function titleOf(version: SectionVersion, owner: string): TitleBlockFields {
   };
 }
 
-function Head({
-  version,
-  inForce,
-  onOpen,
-}: VersionViewProps & { readonly onOpen: (dialog: OpenDialog) => void }) {
+/** This version and the one in force, or the one it was based on; alone when there is neither. */
+function comparedWith({ sectionId, number, basedOn }: SectionVersion, inForce: VersionViewProps['inForce']) {
+  const other = typeof inForce === 'number' && inForce !== number ? inForce : basedOn;
+  return [number, ...(other === null ? [] : [other])].map((one) => ({ sectionId, number: one }));
+}
+
+interface HeadProps extends VersionViewProps {
+  readonly chordMm: number;
+  readonly onOpen: (dialog: OpenDialog) => void;
+}
+
+function Head({ version, inForce, chordMm, onOpen }: HeadProps) {
   const mayRelease = useMay('versions.release');
   const mayDownload = useMay('files.download');
   const seesAll = useMay('sections.read');
@@ -128,6 +136,14 @@ function Head({
         <Button size={size} onClick={() => window.print()}>
           Print
         </Button>
+        {seesAll && (
+          <Link
+            className={buttonClass('plain', size)}
+            to={comparePath(comparedWith(version, inForce), chordMm)}
+          >
+            Compare…
+          </Link>
+        )}
         {mayRelease && version.status === 'released' && (
           <Button size={size} variant="danger" onClick={() => onOpen('withdraw')}>
             Withdraw…

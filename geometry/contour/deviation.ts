@@ -105,6 +105,17 @@ function movedLoop(loop: Loop, { x, y, a, b }: Motion): Loop {
   };
 }
 
+/** Points of a second outline where they come to lie when it is laid on a first, for drawing both on each other. */
+export function laidOn(
+  first: Outline,
+  second: Outline,
+  alignment: Alignment,
+  points: readonly Point[],
+): Point[] {
+  const { x, y, a, b } = alignmentOf(first, second, alignment);
+  return points.map((p) => ({ x: x + a * p.x - b * p.y, y: y + b * p.x + a * p.y }));
+}
+
 /** The share of the chord line that is laid on its like. */
 const LAID = { 'leading-edge': 0, 'quarter-chord': 0.25 } as const;
 

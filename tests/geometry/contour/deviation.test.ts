@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { ALIGNMENTS, deviationOf } from '#geometry/contour/deviation.ts';
+import { ALIGNMENTS, deviationOf, laidOn } from '#geometry/contour/deviation.ts';
 import { cstOutline } from '#geometry/shapes/cst.ts';
 import { measuredOutline } from '#geometry/shapes/measured.ts';
 import { type CurvePoint, type Outline, type SurfaceCurve } from '#geometry/shapes/outline.ts';
@@ -134,4 +134,14 @@ describe('deviation of an outline', () => {
       expect(() => deviationOf(outline, outline, 'chord', count)).toThrow('between 5 and 1000');
     }
   });
+});
+
+test('points are laid where the deviation has them: a moved and turned outline comes back onto itself', () => {
+  const first = outlineOf(naca4('2412'));
+  const second = moved(first, 0.3, -0.2, 1.1 * Math.cos(0.2), 1.1 * Math.sin(0.2));
+  const [nose, edge] = [second.upper.at(0), second.upper.at(1)];
+  const [laidNose, laidEdge] = laidOn(first, second, 'chord', [nose, edge]);
+  expect(laidNose?.x).toBeCloseTo(first.upper.at(0).x, 12);
+  expect(laidEdge?.y).toBeCloseTo(first.upper.at(1).y, 12);
+  expect(laidOn(first, second, 'sheet', [edge])).toEqual([edge]);
 });

@@ -65,6 +65,7 @@ export const importCalls: Readonly<Record<string, () => readonly unknown[]>> = {
   toMeasured: () => [measured()],
   readOutline: () => [encoded(listed()), 'marsh.dat'],
   deviationOf: () => [outline(), outlineOf(shape()), 'chord', 11],
+  laidOn: () => [outline(), outlineOf(shape()), 'chord', [{ x: 0.3, y: 0.05 }]],
   outlineOfAny: () => [measured()],
   fitClosely: () => [outline()],
   toCst: () => [measured()],
