@@ -97,6 +97,17 @@ const screens: readonly Screen[] = [
     },
   },
   {
+    name: 'comparison',
+    as: 'designer',
+    show: at(
+      async () => {
+        const id = (await sectionPath(app, 'Heron outer panel')).split('/').at(-1) ?? '';
+        return `/compare?v=${id}.3,${id}.2,${id}.1`;
+      },
+      (page) => page.getByRole('region', { name: 'Values side by side' }),
+    ),
+  },
+  {
     name: 'desk',
     as: 'designer',
     show: at('/', (page) => page.getByRole('heading', { name: /^Sections changed last/ })),
@@ -149,6 +160,11 @@ const screens: readonly Screen[] = [
     show: at('/inspections', (page) =>
       page.getByRole('heading', { name: 'Deviation by section and machine' }),
     ),
+  },
+  {
+    name: 'flight conditions',
+    as: 'designer',
+    show: at('/flight-conditions', (page) => page.getByRole('heading', { name: 'Flight conditions' })),
   },
   {
     name: 'account',
