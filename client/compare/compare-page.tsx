@@ -44,15 +44,12 @@ export function Component() {
     add.current?.focus();
   };
   return (
-    <div
-      data-page="flowing"
-      className="grid flex-1 content-start lg:grid-cols-[minmax(0,1fr)_22rem] print:block"
-    >
+    <div data-page="flowing" className="grid flex-1 lg:grid-cols-[minmax(0,1fr)_22rem] print:block">
       <title>Compare · Ribwright</title>
       <div className="flex min-w-0 flex-col gap-4 p-4 print:p-0">
         <header className="flex min-h-8 flex-wrap items-center justify-between gap-2 print:hidden">
           <h1 className="text-xl font-extrabold">Compare</h1>
-          <Button onClick={() => window.print()}>Print</Button>
+          {entries.length > 0 && <Button onClick={() => window.print()}>Print</Button>}
         </header>
         {dropped.length > 0 && (
           <Notice tone="caution" className="print:hidden">
