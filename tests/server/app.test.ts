@@ -1,6 +1,7 @@
 import { mkdtemp, mkdir, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import { brotliCompressSync } from 'node:zlib';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { startApi, type TestApi } from './support/api.ts';
 
@@ -13,6 +14,11 @@ beforeAll(async () => {
   await mkdir(join(folder, 'assets'), { recursive: true });
   await writeFile(join(folder, 'index.html'), page);
   await writeFile(join(folder, 'assets', 'main-abc123.js'), `/* ${'x'.repeat(5000)} */`);
+  await writeFile(join(folder, 'assets', 'both-abc123.js'), 'const plain = true;');
+  await writeFile(
+    join(folder, 'assets', 'both-abc123.js.br'),
+    brotliCompressSync('const compressed = true;'),
+  );
   await writeFile(join(folder, 'theme.js'), '"use strict";');
   await writeFile(join(home, 'secret.txt'), 'secret');
   api = await startApi({ clientFolder: folder });
@@ -36,6 +42,18 @@ describe('the client', () => {
       expect(response.headers.get('etag')).not.toBeNull();
     },
   );
+
+  it('sends the brotli form that lies beside a script to whom takes it', async () => {
+    const packed = await get('/assets/both-abc123.js', { 'accept-encoding': 'br' });
+    expect(await packed.text()).toBe('const compressed = true;');
+    expect(packed.headers.get('content-encoding')).toBe('br');
+    expect(packed.headers.get('content-type')).toBe('text/javascript; charset=utf-8');
+    expect(packed.headers.get('cache-control')).toBe('public, max-age=31536000, immutable');
+    expect(packed.headers.get('vary')).toMatch(/accept-encoding/i);
+    const plain = await get('/assets/both-abc123.js', { 'accept-encoding': 'identity' });
+    expect(await plain.text()).toBe('const plain = true;');
+    expect(plain.headers.get('content-encoding')).toBeNull();
+  });
 
   it('has its hashed files kept for a year, compressed, and the others asked for again', async () => {
     const hashed = await get('/assets/main-abc123.js', { 'accept-encoding': 'gzip' });
