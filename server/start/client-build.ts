@@ -14,6 +14,7 @@ const sources = [
   'client',
   'geometry',
   'server/contracts',
+  'server/start/client-build.ts',
   'public',
   'vite.config.ts',
   'tsconfig.json',
