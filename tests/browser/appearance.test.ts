@@ -227,7 +227,10 @@ describe.each(screens)('the screen “$name”', ({ as, show, refusal }) => {
     expect(await violations(page), 'night').toEqual([]);
     for (const [width, height] of SIZES) {
       await page.setViewportSize({ width, height });
-      expect(await overflow(page), `${String(width)} px`).toBeLessThanOrEqual(0);
+      // The sheet takes its new size a moment after the window has.
+      await expect
+        .poll(() => overflow(page), { message: `${String(width)} px`, timeout: 5000 })
+        .toBeLessThanOrEqual(0);
     }
     await page.setViewportSize({ width: 1280, height: 800 });
     check();
