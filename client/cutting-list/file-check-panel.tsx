@@ -3,12 +3,14 @@ import { type DragEvent, type SubmitEvent, useId, useRef, useState } from 'react
 import { useNavigate } from 'react-router';
 import { type FileCheck } from '#server/contracts/cutting-list.ts';
 import { checkFile } from '#client/api/cutting-list.ts';
+import { sha256 } from '#client/app/sha256.ts';
 import { Button } from '#client/ui/button.tsx';
 import { sentenceOf } from '#client/ui/error-state.tsx';
 import { fieldClass } from '#client/ui/field.tsx';
 import { Notice } from '#client/ui/notice.tsx';
-import { checksumOfFile } from './checksum.ts';
 import { FileVerdict } from './file-verdict.tsx';
+
+const NO_HASH = 'This browser cannot check files over plain http. Type the printed code instead.';
 
 /** Is this file current? By dropping any downloaded file, or by the code printed on a sheet or template. */
 export function FileCheckPanel() {
@@ -17,7 +19,8 @@ export function FileCheckPanel() {
   const check = useMutation({
     mutationFn: async (asked: File | string): Promise<{ what: string; verdict: FileCheck }> => {
       if (typeof asked === 'string') return { what: asked, verdict: await checkFile({ code: asked }) };
-      const checksum = await checksumOfFile(asked);
+      const checksum = await sha256(await asked.arrayBuffer());
+      if (checksum === null) throw new Error(NO_HASH);
       return { what: asked.name, verdict: await checkFile({ checksum }) };
     },
   });

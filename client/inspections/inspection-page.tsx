@@ -84,7 +84,7 @@ function MeasurementTable({ inspection }: { readonly inspection: Inspection }) {
   const units = useUnits();
   const length = (mm: number) => formatLength(mm, units);
   return (
-    <table className="w-full max-w-[56rem] border-collapse">
+    <table className="w-full max-w-[56rem] border-collapse max-sm:text-xs">
       <caption className="sr-only">
         Readings of the {inspection.measured === 'core' ? 'bare core' : 'part with its skins'}
       </caption>
@@ -94,7 +94,7 @@ function MeasurementTable({ inspection }: { readonly inspection: Inspection }) {
             <th
               key={head}
               scope="col"
-              className={`h-9 px-2 font-normal ${i === 0 || i === 4 ? 'text-left' : 'text-right'}`}
+              className={`h-9 px-2 max-sm:px-1 font-normal ${i === 0 || i === 4 ? 'text-left' : 'text-right'} ${head === 'Nominal' ? 'max-sm:hidden' : ''}`}
             >
               {head}
             </th>
@@ -104,13 +104,13 @@ function MeasurementTable({ inspection }: { readonly inspection: Inspection }) {
       <tbody>
         {inspection.measurements.map((one) => (
           <tr key={`${one.end} ${String(one.station)}`} className="h-10 border-b border-rule">
-            <th scope="row" className="px-2 text-left font-semibold">
+            <th scope="row" className="px-2 max-sm:px-1 text-left font-semibold">
               {one.end} {formatPercent(one.station, 0)}
             </th>
-            <td className="px-2 text-right">{length(one.nominalMm)}</td>
-            <td className="px-2 text-right">{length(one.measuredMm)}</td>
-            <td className="px-2 text-right">{deviationText(one.deviationMm, units)}</td>
-            <td className={`px-2 ${one.within ? 'text-spruce' : 'font-semibold text-brick'}`}>
+            <td className="px-2 text-right max-sm:hidden">{length(one.nominalMm)}</td>
+            <td className="px-2 max-sm:px-1 text-right">{length(one.measuredMm)}</td>
+            <td className="px-2 max-sm:px-1 text-right">{deviationText(one.deviationMm, units)}</td>
+            <td className={`px-2 max-sm:px-1 ${one.within ? 'text-spruce' : 'font-semibold text-brick'}`}>
               <span className="inline-flex items-center gap-2">
                 <VerdictGlyph within={one.within} />
                 {one.within ? 'within' : `out of ± ${length(one.toleranceMm)}`}

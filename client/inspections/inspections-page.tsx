@@ -109,7 +109,11 @@ function Statistics() {
   const statistics = useQuery(inspectionStatisticsQuery());
   if (!statistics.data || statistics.data.length === 0) return null;
   return (
-    <section aria-label="Deviation by section and machine" className="flex flex-col gap-2 overflow-x-auto">
+    <section
+      aria-label="Deviation by section and machine"
+      tabIndex={0}
+      className="flex flex-col gap-2 overflow-x-auto"
+    >
       <h2 className="text-lg font-semibold">Deviation by section and machine</h2>
       <table className="w-full max-w-[64rem] min-w-[40rem] border-collapse">
         <thead>

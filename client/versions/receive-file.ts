@@ -1,4 +1,5 @@
 import { OfflineError, problemOf, send } from '#client/api/request.ts';
+import { sha256 } from '#client/app/sha256.ts';
 
 /** The bytes that arrived are not those the server announced; they must not reach a machine. */
 export class ChecksumError extends Error {
@@ -90,13 +91,6 @@ function joined(chunks: readonly Uint8Array[], length: number): Uint8Array<Array
     offset += chunk.byteLength;
   }
   return bytes;
-}
-
-/** WebCrypto exists on secure origins only: by plain http on a shop's network the check is left out and said so. */
-async function sha256(bytes: Uint8Array<ArrayBuffer>): Promise<string | null> {
-  if (!globalThis.crypto?.subtle) return null;
-  const digest = new Uint8Array(await crypto.subtle.digest('SHA-256', bytes));
-  return [...digest].map((byte) => byte.toString(16).padStart(2, '0')).join('');
 }
 
 function checksumOf(response: Response): string | null {

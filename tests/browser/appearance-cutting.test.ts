@@ -58,6 +58,15 @@ const screens: readonly Screen[] = [
     ),
   },
   {
+    name: 'inspection out of tolerance',
+    as: 'builder',
+    show: async (page) => {
+      await page.goto('/inspections');
+      await page.getByRole('link', { name: /Second set, right/ }).click();
+      await page.getByRole('button', { name: 'Reject the part' }).waitFor();
+    },
+  },
+  {
     name: 'inspections',
     as: 'designer',
     show: at('/inspections', (page) =>

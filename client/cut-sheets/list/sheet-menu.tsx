@@ -1,5 +1,6 @@
 import { lazy, Suspense, useState } from 'react';
 import { useNavigate } from 'react-router';
+import { itemNameSchema } from '#server/contracts/common.ts';
 import { type CutSheet } from '#server/contracts/cut-sheets.ts';
 import { useChangeCutSheet } from '#client/api/cut-sheets.ts';
 import { useAnnounce } from '#client/ui/announcer.tsx';
@@ -7,13 +8,14 @@ import { sentenceOf } from '#client/ui/error-state.tsx';
 import { Menu, MenuItem, MenuRule } from '#client/ui/menu.tsx';
 import { sheetPath, sheetVersionPath } from '../paths.ts';
 
-const SheetNameDialog = lazy(() => import('./sheet-name-dialog.tsx'));
+const NameDialog = lazy(() => import('#client/ui/name-dialog.tsx'));
 
 /** What can be done with a cut sheet of the list, besides opening it. */
 export function SheetMenu({ sheet }: { readonly sheet: CutSheet }) {
   const navigate = useNavigate();
   const announce = useAnnounce();
   const change = useChangeCutSheet(sheet.id);
+  const rename = useChangeCutSheet(sheet.id);
   const [renames, setRenames] = useState(false);
   const setArchived = (archived: boolean) =>
     change.mutate(
@@ -48,7 +50,12 @@ export function SheetMenu({ sheet }: { readonly sheet: CutSheet }) {
       </Menu>
       {renames && (
         <Suspense>
-          <SheetNameDialog sheet={sheet} onClose={() => setRenames(false)} />
+          <NameDialog
+            named={sheet}
+            nameSchema={itemNameSchema}
+            change={rename}
+            onClose={() => setRenames(false)}
+          />
         </Suspense>
       )}
     </>

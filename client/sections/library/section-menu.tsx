@@ -3,17 +3,19 @@ import { useNavigate } from 'react-router';
 import { useChangeSection } from '#client/api/sections.ts';
 import { sentenceOf } from '#client/ui/error-state.tsx';
 import { Menu, MenuItem, MenuRule } from '#client/ui/menu.tsx';
+import { sectionNameSchema } from '#server/contracts/common.ts';
 import { type Section } from '#server/contracts/sections.ts';
 import { useLibraryNotice } from './library-notice.tsx';
 import { sectionPath } from './section-words.tsx';
 
-const NameDialog = lazy(() => import('./name-dialog.tsx'));
+const NameDialog = lazy(() => import('#client/ui/name-dialog.tsx'));
 
 /** What can be done with a section of the library, besides opening it. */
 export function SectionMenu({ section }: { section: Section }) {
   const navigate = useNavigate();
   const notify = useLibraryNotice();
   const change = useChangeSection(section.id);
+  const rename = useChangeSection(section.id);
   const [renames, setRenames] = useState(false);
 
   const setArchived = async (archived: boolean) => {
@@ -50,7 +52,9 @@ export function SectionMenu({ section }: { section: Section }) {
       {renames && (
         <Suspense>
           <NameDialog
-            section={section}
+            named={section}
+            nameSchema={sectionNameSchema}
+            change={rename}
             onClose={() => {
               setRenames(false);
             }}

@@ -1,22 +1,35 @@
 import { zodResolver } from '@hookform/resolvers/zod';
 import { useForm } from 'react-hook-form';
 import { z } from 'zod';
-import { useChangeSection } from '#client/api/sections.ts';
-import { Button } from '#client/ui/button.tsx';
-import { Dialog } from '#client/ui/dialog.tsx';
-import { sentenceOf } from '#client/ui/error-state.tsx';
-import { Notice } from '#client/ui/notice.tsx';
-import { TextField } from '#client/ui/text-field.tsx';
-import { purposeSchema, sectionNameSchema } from '#server/contracts/common.ts';
-import { type Section } from '#server/contracts/sections.ts';
+import { purposeSchema } from '#server/contracts/common.ts';
+import { Button } from './button.tsx';
+import { Dialog } from './dialog.tsx';
+import { sentenceOf } from './error-state.tsx';
+import { Notice } from './notice.tsx';
+import { TextField } from './text-field.tsx';
 
-const nameFormSchema = z.object({ name: sectionNameSchema, purpose: purposeSchema });
+interface Named {
+  readonly name: string;
+  readonly purpose: string;
+}
 
-export default function NameDialog({ section, onClose }: { section: Section; onClose: () => void }) {
-  const change = useChangeSection(section.id);
+interface NameDialogProps {
+  readonly named: Named;
+  /** What a name of this thing must be. */
+  readonly nameSchema: z.ZodType<string, string>;
+  readonly change: {
+    readonly error: unknown;
+    readonly isPending: boolean;
+    readonly mutate: (typed: Named, then: { readonly onSuccess: () => void }) => void;
+  };
+  readonly onClose: () => void;
+}
+
+/** Name and purpose of a section or a cut sheet. */
+export default function NameDialog({ named, nameSchema, change, onClose }: NameDialogProps) {
   const form = useForm({
-    resolver: zodResolver(nameFormSchema),
-    defaultValues: { name: section.name, purpose: section.purpose },
+    resolver: zodResolver(z.object({ name: nameSchema, purpose: purposeSchema })),
+    defaultValues: { name: named.name, purpose: named.purpose },
   });
   const { errors } = form.formState;
   const submit = form.handleSubmit((typed) => {
@@ -49,7 +62,7 @@ export default function NameDialog({ section, onClose }: { section: Section; onC
           error={errors.purpose?.message}
           {...form.register('purpose')}
         />
-        {change.isError && <Notice tone="error">{sentenceOf(change.error)}</Notice>}
+        {change.error !== null && <Notice tone="error">{sentenceOf(change.error)}</Notice>}
       </form>
     </Dialog>
   );
